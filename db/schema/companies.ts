@@ -1,5 +1,6 @@
 import { sql } from "drizzle-orm";
 import { boolean, date, datetime, foreignKey, index, mysqlEnum, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { POSITION_KINDS } from "@/lib/permissions/position-kinds";
 import { exactText, id, uuid } from "../columns";
 import { productions } from "./seasons";
 import { users } from "./sign-in";
@@ -36,18 +37,6 @@ export const people = mysqlTable(
     index("people_user").on(t.userId),
   ],
 );
-
-export const POSITION_KINDS = [
-  "music_director",
-  "assistant_md",
-  "stage_manager",
-  "director",
-  "choreographer",
-  "producer",
-  "accompanist",
-  "actor",
-  "company_admin",
-] as const;
 
 /** What a person does, in one production or (production null) in the company. Open while `endedAt` is null. */
 export const positions = mysqlTable(

@@ -1,0 +1,69 @@
+import "server-only";
+import { unstable_rethrow } from "next/navigation";
+import { env } from "@/lib/env";
+import { AppError } from "@/lib/errors";
+import type { Actor } from "@/lib/permissions/types";
+import { describeError } from "./define-action";
+import { requireActor } from "./get-actor";
+
+type Context<P> = { params: Promise<P> };
+
+/**
+ * Makes a route handler for signed-in people: refuses writes from another origin, identifies the actor, runs, and answers
+ * errors as `{error:{code,message}}` with their status. What `run` returns is sent as JSON unless it is a Response.
+ */
+export function defineRoute<P>(
+  run: (request: Request, actor: Actor, params: P) => Promise<unknown>,
+): (request: Request, context: Context<P>) => Promise<Response> {
+  return async (request, context) => {
+    try {
+      assertOwnOrigin(request);
+      const actor = await requireActor();
+      return toResponse(await run(request, actor, await context.params));
+    } catch (error) {
+      unstable_rethrow(error);
+      return errorResponse(error);
+    }
+  };
+}
+
+/** The same for routes that need no sign-in. */
+export function definePublicRoute<P>(
+  run: (request: Request, params: P) => Promise<unknown>,
+): (request: Request, context: Context<P>) => Promise<Response> {
+  return async (request, context) => {
+    try {
+      assertOwnOrigin(request);
+      return toResponse(await run(request, await context.params));
+    } catch (error) {
+      unstable_rethrow(error);
+      return errorResponse(error);
+    }
+  };
+}
+
+function toResponse(result: unknown): Response {
+  if (result instanceof Response) return result;
+  return Response.json(result, { headers: { "cache-control": "private, no-store" } });
+}
+
+/** An error as a JSON answer with its status; never a stack. */
+export function errorResponse(error: unknown): Response {
+  const described = describeError(error);
+  const status = error instanceof AppError ? error.status : 500;
+  const headers = new Headers({ "cache-control": "no-store" });
+  if (error instanceof AppError && error.retryAfter !== undefined) headers.set("retry-after", String(error.retryAfter));
+  return Response.json({ error: described }, { status, headers });
+}
+
+/** A page of another site cannot write with our cookie: browsers tell where a request comes from. */
+function assertOwnOrigin(request: Request): void {
+  if (request.method === "GET" || request.method === "HEAD") return;
+  const site = request.headers.get("sec-fetch-site");
+  if (site !== null && site !== "same-origin" && site !== "none") throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
+  const origin = request.headers.get("origin");
+  if (origin === null) return;
+  const host = request.headers.get("host");
+  const own = [new URL(env().AUTH_URL).host, host];
+  if (!own.includes(new URL(origin).host)) throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
+}

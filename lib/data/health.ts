@@ -1,0 +1,13 @@
+import "server-only";
+import { sql } from "drizzle-orm";
+import { db } from "@/db/client";
+
+/** Whether the database answers. */
+export async function databaseAnswers(): Promise<boolean> {
+  try {
+    await db.execute(sql`select 1`);
+    return true;
+  } catch {
+    return false;
+  }
+}
