@@ -50,3 +50,8 @@ export async function endOtherSessions(actor: Actor, currentToken: string | null
         : and(eq(sessions.userId, actor.userId), ne(sessions.sessionToken, currentToken)),
     );
 }
+
+/** Ends the session of a cookie, whoever's it is: only its holder has the token. */
+export async function deleteSession(token: string): Promise<void> {
+  await db.delete(sessions).where(eq(sessions.sessionToken, token));
+}

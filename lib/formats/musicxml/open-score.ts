@@ -78,12 +78,14 @@ export function openScore(bytes: Uint8Array): { text: string; warnings: ScoreWar
   }
   const warnings: ScoreWarning[] = [];
   const score = isZip(bytes) ? fromArchive(bytes, warnings) : bytes;
-  if (score.length > LIMITS.unpackedBytes || score.length === 0) {
+  if (score.length === 0) {
     throw new ScoreError("score.empty", "The score inside the file is empty. Export it again.");
   }
   const start = score.subarray(0, 400);
   // XML begins with "<", after a byte order mark and white space at most.
-  const first = start.find((byte) => ![0, 9, 10, 13, 32, 0xef, 0xbb, 0xbf, 0xff, 0xfe].includes(byte));
+  const first = start.find(
+    (byte) => ![0, 9, 10, 13, 32, 0xef, 0xbb, 0xbf, 0xff, 0xfe].includes(byte),
+  );
   if (first !== 0x3c) {
     throw new ScoreError(
       "score.not-musicxml",

@@ -13,8 +13,7 @@ export type ScoreErrorCode =
   | "score.duplicate-part"
   | "score.bad-pitch"
   | "score.bad-duration"
-  | "score.took-too-long"
-  | "score.reader-failed";
+  | "score.took-too-long";
 
 /** Which kind of refusal each is: what a route answers and a form shows follows from it. */
 const KIND: Record<ScoreErrorCode, "wrong-kind" | "too-large" | "refused"> = {
@@ -33,7 +32,6 @@ const KIND: Record<ScoreErrorCode, "wrong-kind" | "too-large" | "refused"> = {
   "score.bad-pitch": "refused",
   "score.bad-duration": "refused",
   "score.took-too-long": "refused",
-  "score.reader-failed": "refused",
 };
 
 /** A score that cannot be read. The message is for the person: what is wrong and what to do. */

@@ -52,7 +52,10 @@ export type ScorePart = {
 };
 
 export type ParsedScore = {
+  /** The work's title; for a song out of a set, the set's. The file's name when there is none. */
   title: string | null;
+  /** The song's own title within the work; null when it is the work's. */
+  movement: string | null;
   composer: string | null;
   measures: { written: number; performed: number | null };
   /** Sounding keys, one per key signature of the leading part. */

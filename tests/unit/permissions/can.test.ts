@@ -7,8 +7,15 @@ import type { Actor, PositionKind } from "@/lib/permissions/types";
 // The table is the product's own: who may do what in a production (M music director, A assistant, S stage manager,
 // T the table, P accompanist, C actor, O company admin, who holds the position in the company).
 const LETTERS: Record<PositionKind, string> = {
-  music_director: "M", assistant_md: "A", stage_manager: "S", director: "T", choreographer: "T", producer: "T",
-  accompanist: "P", actor: "C", company_admin: "O",
+  music_director: "M",
+  assistant_md: "A",
+  stage_manager: "S",
+  director: "T",
+  choreographer: "T",
+  producer: "T",
+  accompanist: "P",
+  actor: "C",
+  company_admin: "O",
 };
 const TABLE: Record<Action, string> = {
   "production:create": "O",
@@ -45,23 +52,39 @@ const TABLE: Record<Action, string> = {
 };
 
 const holder = (kind: PositionKind): Actor => ({
-  userId: "u", email: "e@people.example", name: "N", people: [{ id: "me", companyId: "company" }],
-  positions: [{ kind, companyId: "company", productionId: kind === "company_admin" ? null : "production", personId: "me" }],
+  userId: "u",
+  email: "e@people.example",
+  name: "N",
+  people: [{ id: "me", companyId: "company" }],
+  positions: [
+    {
+      kind,
+      companyId: "company",
+      productionId: kind === "company_admin" ? null : "production",
+      personId: "me",
+    },
+  ],
 });
 
 describe.each(ACTIONS)("%s", (action) => {
   test.each(POSITION_KINDS)("asked by: %s", (kind) => {
     const expected = TABLE[action].includes(LETTERS[kind]);
-    expect(can(holder(kind), action, { companyId: "company", productionId: "production" })).toBe(expected);
+    expect(can(holder(kind), action, { companyId: "company", productionId: "production" })).toBe(
+      expected,
+    );
   });
 
   test("nobody, and nobody's position in another company or production, may", () => {
     expect(can(null, action, { companyId: "company", productionId: "production" })).toBe(false);
     for (const kind of POSITION_KINDS) {
-      expect(can(holder(kind), action, { companyId: "elsewhere", productionId: "production" })).toBe(false);
+      expect(
+        can(holder(kind), action, { companyId: "elsewhere", productionId: "production" }),
+      ).toBe(false);
       const acrossTheCompany: Action[] = ["company:see", "rooms:manage"];
       if (kind !== "company_admin" && !acrossTheCompany.includes(action)) {
-        expect(can(holder(kind), action, { companyId: "company", productionId: "another" })).toBe(false);
+        expect(can(holder(kind), action, { companyId: "company", productionId: "another" })).toBe(
+          false,
+        );
       }
     }
   });
@@ -69,20 +92,39 @@ describe.each(ACTIONS)("%s", (action) => {
 
 test("a person may change their own row, and only theirs", () => {
   expect(can(holder("actor"), "own:change", { companyId: "company", personId: "me" })).toBe(true);
-  expect(can(holder("actor"), "own:change", { companyId: "company", personId: "someone" })).toBe(false);
-  expect(can(holder("music_director"), "own:change", { companyId: "company", productionId: "production", personId: "someone" })).toBe(false);
+  expect(can(holder("actor"), "own:change", { companyId: "company", personId: "someone" })).toBe(
+    false,
+  );
+  expect(
+    can(holder("music_director"), "own:change", {
+      companyId: "company",
+      productionId: "production",
+      personId: "someone",
+    }),
+  ).toBe(false);
 });
 
 test("the stage manager sees the casting grid once the cast is published", () => {
   const subject = { companyId: "company", productionId: "production" };
-  expect(can(holder("stage_manager"), "casting:see", { ...subject, castPublished: false })).toBe(false);
-  expect(can(holder("stage_manager"), "casting:see", { ...subject, castPublished: true })).toBe(true);
+  expect(can(holder("stage_manager"), "casting:see", { ...subject, castPublished: false })).toBe(
+    false,
+  );
+  expect(can(holder("stage_manager"), "casting:see", { ...subject, castPublished: true })).toBe(
+    true,
+  );
   expect(can(holder("actor"), "casting:see", { ...subject, castPublished: true })).toBe(false);
 });
 
 test("someone with positions in two productions has in each only what that position gives", () => {
   const both = holder("music_director");
-  both.positions.push({ kind: "actor", companyId: "company", productionId: "second", personId: "me" });
-  expect(can(both, "casting:choose", { companyId: "company", productionId: "production" })).toBe(true);
+  both.positions.push({
+    kind: "actor",
+    companyId: "company",
+    productionId: "second",
+    personId: "me",
+  });
+  expect(can(both, "casting:choose", { companyId: "company", productionId: "production" })).toBe(
+    true,
+  );
   expect(can(both, "casting:choose", { companyId: "company", productionId: "second" })).toBe(false);
 });
