@@ -78,7 +78,7 @@ export async function addReadNumber(
   const quarters = score.length.performed?.quarters ?? score.length.written.quarters;
   const minutes = score.length.performed?.minutes ?? score.length.written.minutes;
   await tx.insert(numbers).values({
-    id: numberId, productionId: production.id, scoreId, place, label, title: score.title ?? file,
+    id: numberId, productionId: production.id, scoreId, place, label, title: score.movement ?? score.title ?? file,
     keyFifths: score.keys[0]?.fifths ?? null, metre: score.metre, tempo: score.tempo === null ? null : Math.round(score.tempo),
     bars: score.measures.written, seconds: Math.round(minutes === null ? (quarters / 90) * 60 : minutes * 60),
   });

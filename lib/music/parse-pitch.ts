@@ -1,6 +1,6 @@
 import { Note } from "tonal";
 
-const WRITTEN = /^([A-Ga-g])(#{0,2}|b{0,2})(-1|[0-9])$/;
+const WRITTEN = /^([A-Ga-g])(#{0,2}|b{0,2})(-[12]|[0-9])$/;
 
 /**
  * Reads a pitch as people type it: C4, Bb3, B♭3, f#5, F♯5, E𝄫4.

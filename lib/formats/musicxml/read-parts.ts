@@ -6,7 +6,7 @@ import { childText, walkXml, type XmlElement } from "./xml-events";
 const ROOTS = new Set(["score-partwise", "score-timewise"]);
 const HEADER = new Set(["work", "movement-title", "identification", "part-list"]);
 
-export type ReadParts = {
+type ReadParts = {
   title: string | null;
   movement: string | null;
   composer: string | null;

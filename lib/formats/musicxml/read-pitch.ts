@@ -10,7 +10,7 @@ const MAX_ALTER = 3;
 /** What is added to the written pitch to get the sounding one. */
 export type Transposition = { chromatic: number; diatonic: number; octaves: number };
 
-export type SoundingPitch = { midi: number; name: string; spelling: string };
+type SoundingPitch = { midi: number; name: string; spelling: string };
 
 function spell(midi: number, place: number): { name: string; spelling: string } {
   const whole = Math.floor(midi);

@@ -26,7 +26,9 @@ function shorten(name: string, warnings: ScoreWarning[]): string {
     code: "score.name-cut",
     message: `A name longer than ${String(LIMITS.nameCharacters)} characters was cut.`,
   });
-  return [...name].slice(0, LIMITS.nameCharacters).join("");
+  const cut = name.slice(0, LIMITS.nameCharacters);
+  // Never half of a character that takes two places.
+  return cut.replace(/[\uD800-\uDBFF]$/, "");
 }
 
 function looksVocal(reader: PartReader, name: string): boolean {
@@ -163,7 +165,8 @@ export function readScore(bytes: Uint8Array, fileName: string): ParsedScore {
     list.flatMap(({ tempi: some }, at) => some.map((one) => ({ ...one, bar: at }))),
   );
   tempi.sort((a, b) => a.bar - b.bar || compare(a.at, b.at));
-  const movement = read.movement === read.title ? null : read.movement;
+  // A movement of no larger work is the work.
+  const movement = read.title === null || read.movement === read.title ? null : read.movement;
   const title = read.title ?? read.movement ?? fileName.replace(/\.[^.]*$/, "");
   return {
     title: title === "" ? null : shorten(title, warnings),

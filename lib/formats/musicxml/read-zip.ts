@@ -10,7 +10,7 @@ const ENTRY_SIZE = 46;
 const LOCAL_SIZE = 30;
 const CHUNK = 16 * 1024;
 
-export type ZipEntry = { name: string; method: number; offset: number; packedBytes: number };
+type ZipEntry = { name: string; method: number; offset: number; packedBytes: number };
 
 function damaged(): ScoreError {
   return new ScoreError(
@@ -89,7 +89,7 @@ export function unpackEntry(bytes: Uint8Array, entry: ZipEntry): Uint8Array {
   if (entry.method !== 8) throw damaged();
   const chunks: Uint8Array[] = [];
   let size = 0;
-  let finished = false;
+  let finished = false as boolean;
   const inflate = new Inflate((chunk, final) => {
     size += chunk.length;
     if (size > LIMITS.unpackedBytes) throw tooLarge();

@@ -90,7 +90,7 @@ describe("read", () => {
       const score = readScore(fixture(`hostile/${file}`), file);
       if (outcome === "accept-with-warning") expect(warningsOf(score)).not.toEqual([]);
       if ("P1" in range || "P2" in range) {
-        for (const [id, bounds] of Object.entries(range as Record<string, Bounds>)) {
+        for (const [id, bounds] of Object.entries(range)) {
           expectBounds(score, id, bounds);
         }
       } else expectBounds(score, score.parts[0]?.id ?? "", range);
