@@ -1,10 +1,15 @@
 import { customType } from "drizzle-orm/mysql-core";
 import { v7 } from "uuid";
 
+/** Text that was to be an id is not one: to whoever asks, the same as an id that does not exist. */
+export class NotAnIdError extends TypeError {
+  override readonly name = "NotAnIdError";
+}
+
 /** UUID text → the 16 bytes that are stored. Throws on text that is not a UUID, so that a wrong id never becomes a wrong key. */
 export function uuidToBytes(text: string): Buffer {
   const hex = text.replaceAll("-", "");
-  if (!/^[0-9a-f]{32}$/i.test(hex)) throw new TypeError("not a UUID");
+  if (!/^[0-9a-f]{32}$/i.test(hex)) throw new NotAnIdError("not a UUID");
   return Buffer.from(hex, "hex");
 }
 

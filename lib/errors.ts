@@ -72,3 +72,12 @@ export type ActionError = {
 
 /** What every server action returns: never a thrown error, always one of these two. */
 export type ActionResult<T> = { ok: true; data: T } | { ok: false; error: ActionError };
+
+/** An error as one of ours where it is one: a malformed id counts as an id that does not exist. */
+export function asAppError(error: unknown): AppError | null {
+  if (error instanceof AppError) return error;
+  for (const candidate of [error, error instanceof Error ? error.cause : null]) {
+    if (candidate instanceof Error && candidate.name === "NotAnIdError") return new AppError("not-found");
+  }
+  return null;
+}

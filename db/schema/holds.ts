@@ -2,6 +2,7 @@ import { sql } from "drizzle-orm";
 import { check, datetime, foreignKey, index, mysqlEnum, mysqlTable, uniqueIndex } from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { auditionRooms } from "./auditions";
+import { callbackRounds } from "./callbacks";
 import { calls } from "./calls";
 import { people } from "./companies";
 import { rooms } from "./places";
@@ -47,11 +48,14 @@ export const roomBookings = mysqlTable(
     endsAt: datetime("ends_at", { mode: "date", fsp: 3 }).notNull(),
     auditionRoomId: uuid("audition_room_id").references(() => auditionRooms.id, { onDelete: "cascade" }),
     callId: uuid("call_id").references(() => calls.id, { onDelete: "cascade" }),
+    callbackRoundId: uuid("callback_round_id"),
   },
   (t) => [
+    foreignKey({ name: "room_bookings_round_fk", columns: [t.callbackRoundId], foreignColumns: [callbackRounds.id] }),
+    uniqueIndex("room_bookings_round").on(t.callbackRoundId),
     uniqueIndex("room_bookings_audition").on(t.auditionRoomId),
     uniqueIndex("room_bookings_call").on(t.callId),
     index("room_bookings_room").on(t.roomId, t.startsAt),
-    check("room_bookings_one", sql`(${t.auditionRoomId} is null) <> (${t.callId} is null)`),
+    check("room_bookings_one", sql`(${t.auditionRoomId} is not null) + (${t.callId} is not null) + (${t.callbackRoundId} is not null) = 1`),
   ],
 );

@@ -1,7 +1,7 @@
 import "server-only";
 import { unstable_rethrow } from "next/navigation";
 import type { z } from "zod";
-import { AppError } from "@/lib/errors";
+import { AppError, asAppError } from "@/lib/errors";
 import type { ActionError, ActionResult } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
 import { log } from "@/lib/services/log";
@@ -53,8 +53,9 @@ async function answer<T>(work: () => Promise<T>): Promise<ActionResult<T>> {
 
 /** What the reader may know of an error; anything unforeseen is logged and shown as a fault. */
 export function describeError(error: unknown): ActionError {
-  if (error instanceof AppError) {
-    return { code: error.code, message: error.message, ...(error.fields ? { fields: error.fields } : {}) };
+  const known = asAppError(error);
+  if (known) {
+    return { code: known.code, message: known.message, ...(known.fields ? { fields: known.fields } : {}) };
   }
   log.error({ err: error instanceof Error ? { type: error.name, message: error.message, stack: error.stack } : "unknown" }, "fault");
   return { code: "fault", message: "Something went wrong on our side. Nothing you typed is lost: try again in a moment." };

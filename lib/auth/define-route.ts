@@ -1,7 +1,7 @@
 import "server-only";
 import { unstable_rethrow } from "next/navigation";
 import { env } from "@/lib/env";
-import { AppError } from "@/lib/errors";
+import { AppError, asAppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
 import { describeError } from "./define-action";
 import { requireActor } from "./get-actor";
@@ -50,9 +50,10 @@ function toResponse(result: unknown): Response {
 /** An error as a JSON answer with its status; never a stack. */
 export function errorResponse(error: unknown): Response {
   const described = describeError(error);
-  const status = error instanceof AppError ? error.status : 500;
+  const known = asAppError(error);
+  const status = known?.status ?? 500;
   const headers = new Headers({ "cache-control": "no-store" });
-  if (error instanceof AppError && error.retryAfter !== undefined) headers.set("retry-after", String(error.retryAfter));
+  if (known?.retryAfter !== undefined) headers.set("retry-after", String(known.retryAfter));
   return Response.json({ error: described }, { status, headers });
 }
 

@@ -1,6 +1,6 @@
 import "server-only";
 import { notFound } from "next/navigation";
-import { AppError } from "@/lib/errors";
+import { asAppError } from "@/lib/errors";
 
 /**
  * For pages: runs a data function and turns what is not the reader's into the not-found page; a page they may not use
@@ -10,7 +10,8 @@ export async function orNotFound<T>(work: Promise<T>): Promise<T> {
   try {
     return await work;
   } catch (error) {
-    if (error instanceof AppError && (error.code === "not-found" || error.code === "not-allowed")) notFound();
+    const code = asAppError(error)?.code;
+    if (code === "not-found" || code === "not-allowed") notFound();
     throw error;
   }
 }

@@ -98,7 +98,7 @@ function sweepOverlaps<Item extends Interval>(
   for (const [index, a] of items.entries()) {
     for (let next = index + 1; next < items.length; next += 1) {
       const b = items[next];
-      if (!b || b.from > a.to) break;
+      if (!b || b.from >= a.to) break;
       visit(a, b);
     }
   }

@@ -3,6 +3,8 @@ import ExcelJS from "exceljs";
 import { unguardCell } from "./guard-cell";
 import type { TableLine, TablesResult } from "./read-table";
 
+/** Well above what is taken in, so that empty lines between rows do no harm. */
+const MAX_LINES = 10_000;
 const DELIMITERS = [",", ";", "\t"];
 
 /**
@@ -24,7 +26,7 @@ export async function readCsvTable(bytes: Uint8Array): Promise<TablesResult> {
   const workbook = new ExcelJS.Workbook();
   try {
     const sheet = await workbook.csv.read(Readable.from([text]), {
-      parserOptions: { delimiter, ignoreEmpty: false },
+      parserOptions: { delimiter, ignoreEmpty: false, maxRows: MAX_LINES + 1 },
       // Keeps every cell the text it is: no number, date or formula is read into it.
       map: (value: unknown) => value,
     });
@@ -37,8 +39,12 @@ export async function readCsvTable(bytes: Uint8Array): Promise<TablesResult> {
     });
   } catch {
     const message =
-      "A quotation mark in this file is never closed. Save it as CSV again, or as .xlsx.";
+      "A quotation mark is never closed, or a row has no end. Save it as CSV again, or as .xlsx.";
     return { ok: false, problem: { code: "damaged", message } };
+  }
+  if ((lines.at(-1)?.line ?? 0) > MAX_LINES) {
+    const message = `This file has over ${String(MAX_LINES)} lines. Keep only the list of singers, or split it.`;
+    return { ok: false, problem: { code: "too-many-rows", message } };
   }
   return { ok: true, tables: [lines] };
 }

@@ -50,20 +50,20 @@ export async function readXlsxTables(bytes: Uint8Array): Promise<TablesResult> {
 function unpack(bytes: Uint8Array): { entries: Unzipped } | { problem: SheetProblem } {
   let unpackedBytes = 0;
   let count = 0;
-  let isWorkbook = false;
+  const names = new Set<string>();
   let entries: Unzipped;
   try {
     // First the directory alone, so that nothing is unpacked from a file that would be refused.
     unzipSync(bytes, {
       filter: ({ name, size, originalSize }) => {
         count += 1;
-        if (name === WORKBOOK) isWorkbook = true;
+        names.add(name);
         // Parts may share their packed bytes, so what is copied out counts as well as what is declared.
         if (WANTED.test(name)) unpackedBytes += Math.max(size, originalSize);
         return false;
       },
     });
-    if (!isWorkbook) {
+    if (!names.has(WORKBOOK)) {
       const message =
         "This is not an .xlsx spreadsheet. Open it where it was made and save it as .xlsx or .csv.";
       return { problem: { code: "not-a-spreadsheet", message } };

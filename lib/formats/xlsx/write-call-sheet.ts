@@ -8,6 +8,7 @@ const WIDTHS = [13, 32, 10, 44, 16, 16];
 const LAST_COLUMN = WIDTHS.length;
 const TEXT_WIDTH = WIDTHS.slice(1).reduce((sum, width) => sum + width, 0);
 const LINE_POINTS = 15;
+const FONT = { name: "Calibri", size: 11 };
 /** ECMA-376 Part 1, 18.3.1.63: 1 is Letter, 9 is A4. */
 const PAPER = { Letter: 1, A4: 9 } as const;
 /** Inches; printers leave a quarter inch at most, the rest is room for a pencil. */
@@ -27,8 +28,6 @@ export async function writeCallSheet(sheet: CallSheet, paper: PaperSize): Promis
   workbook.modified = new Date(sheet.issuedAt);
   const page = workbook.addWorksheet("Call sheet", {
     pageSetup: {
-      // The library's list of papers leaves Letter out, although it writes the number it is given.
-      paperSize: PAPER[paper] as ExcelJS.PaperSize,
       orientation: "landscape",
       fitToPage: true,
       fitToWidth: 1,
@@ -38,6 +37,8 @@ export async function writeCallSheet(sheet: CallSheet, paper: PaperSize): Promis
     headerFooter: { oddFooter: footer(text.production, text.date, text.issue) },
     properties: { defaultRowHeight: LINE_POINTS },
   });
+  // The library's list of papers leaves Letter out, although it writes the number it is given.
+  Object.assign(page.pageSetup, { paperSize: PAPER[paper] });
   page.columns = WIDTHS.map((width) => ({ width, style: { numFmt: "@" } }));
 
   addWide(page, text.production, { size: 14, italic: true });
@@ -48,7 +49,7 @@ export async function writeCallSheet(sheet: CallSheet, paper: PaperSize): Promis
   page.addRow([]);
 
   const headings = page.addRow([...BLOCK_HEADINGS]);
-  headings.font = { bold: true };
+  headings.font = { ...FONT, bold: true };
   headings.eachCell((cell) => {
     cell.border = { bottom: { style: "medium" } };
   });
@@ -71,8 +72,8 @@ function isChange({ heading }: Section): boolean {
 
 function addWide(page: ExcelJS.Worksheet, text: string, font: Partial<ExcelJS.Font>): void {
   const row = page.addRow([text]);
-  row.font = font;
-  row.height = (font.size ?? 11) * 1.4;
+  row.font = { ...FONT, ...font };
+  row.height = 1.4 * (font.size ?? FONT.size);
   page.mergeCells(row.number, 1, row.number, LAST_COLUMN);
 }
 
@@ -84,7 +85,7 @@ function addBlock(page: ExcelJS.Worksheet, cells: string[]): void {
     cell.alignment = { wrapText: true, vertical: "top" };
     cell.border = { bottom: { style: "thin" } };
   });
-  row.getCell(1).font = { bold: true };
+  row.getCell(1).font = { ...FONT, bold: true };
 }
 
 function addSections(page: ExcelJS.Worksheet, sections: Section[]): void {
@@ -93,7 +94,7 @@ function addSections(page: ExcelJS.Worksheet, sections: Section[]): void {
       const row = page.addRow([index === 0 ? heading : "", line]);
       // Spreadsheets do not grow a row to fit merged cells, so its height is worked out here.
       row.height = LINE_POINTS * lineCount(line, TEXT_WIDTH);
-      row.getCell(1).font = { bold: true };
+      row.getCell(1).font = { ...FONT, bold: true };
       page.mergeCells(row.number, 2, row.number, LAST_COLUMN);
       for (const column of [1, 2]) {
         row.getCell(column).alignment = { wrapText: true, vertical: "top" };
@@ -102,11 +103,25 @@ function addSections(page: ExcelJS.Worksheet, sections: Section[]): void {
   }
 }
 
-/** How many lines a text takes in a column so many characters wide, a little generously. */
+/**
+ * How many lines a text takes in a column so many digits wide, broken between words. Letters are on
+ * average narrower than digits, so this is never too few by much more than a long capitalised word.
+ */
 function lineCount(text: string, width: number): number {
-  return text
-    .split("\n")
-    .reduce((sum, line) => sum + Math.max(1, Math.ceil((line.length * 1.1) / width)), 0);
+  let lines = 0;
+  for (const paragraph of text.split("\n")) {
+    lines += 1;
+    let used = 0;
+    for (const { length } of paragraph.split(" ")) {
+      if (used > 0 && used + 1 + length > width) {
+        lines += 1;
+        used = 0;
+      }
+      lines += Math.max(0, Math.ceil(length / width) - 1);
+      used += (used > 0 ? 1 : 0) + Math.min(length, width);
+    }
+  }
+  return lines;
 }
 
 /** An ampersand starts a code in a footer, and all of it may have 255 characters. */

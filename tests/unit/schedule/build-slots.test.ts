@@ -58,6 +58,24 @@ describe("an audition day of 8-minute slots, 10 minutes' rest after 80, lunch of
     ]);
   });
 
+  test("lunch takes the place of the first rest that falls due in its window", () => {
+    const lunch = { minutes: 60, windowFrom: at("12:30"), windowTo: at("15:00") };
+    expect(pauses(itemsOf({ ...day, lunch }))).toEqual([
+      "rest 11:20–11:30",
+      "lunch 12:50–13:50",
+      "rest 15:10–15:20",
+    ]);
+  });
+
+  test("a rest that would push lunch out of its window gives way to it", () => {
+    const lunch = { minutes: 60, windowFrom: at("12:55"), windowTo: at("14:00") };
+    expect(pauses(itemsOf({ ...day, lunch }))).toEqual([
+      "rest 11:20–11:30",
+      "lunch 12:55–13:55",
+      "rest 15:15–15:25",
+    ]);
+  });
+
   test("a room open for only part of the window has no lunch of its own", () => {
     expect(pauses(itemsOf({ ...day, opens: at("13:00") }))).toEqual(["rest 14:20–14:30"]);
     expect(pauses(itemsOf({ ...day, closes: at("13:30") }))).toEqual([

@@ -258,6 +258,8 @@ describe("what is refused, with what to do", () => {
   test.each([
     ["too-large", new Uint8Array(2 * 1024 * 1024 + 1), "big.csv"],
     ["too-many-rows", rows(2001), "many.csv"],
+    ["too-many-rows", rows(50_000), "very-many.csv"],
+    ["damaged", strToU8(`Name,Email\n${",".repeat(1_000_000)}`), "wide.csv"],
     ["not-a-spreadsheet", strToU8("%PDF-1.7\n"), "cut.pdf"],
     ["not-a-spreadsheet", strToU8("%PDF-1.7\n"), "cut.csv"],
     ["not-a-spreadsheet", strToU8("Name,Email\n"), "notes.docx"],

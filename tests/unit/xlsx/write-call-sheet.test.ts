@@ -159,7 +159,7 @@ function readCsv(text: string): string[][] {
   const rows: string[][] = [[]];
   let cell = "";
   let quoted = false;
-  const characters = [...text];
+  const characters = Array.from(text);
   for (let at = 0; at < characters.length; at += 1) {
     const character = characters[at] ?? "";
     if (quoted) {
