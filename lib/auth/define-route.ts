@@ -1,10 +1,10 @@
 import "server-only";
 import { unstable_rethrow } from "next/navigation";
-import { env } from "@/lib/env";
-import { AppError, asAppError } from "@/lib/errors";
+import { asAppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
 import { describeError } from "./define-action";
 import { requireActor } from "./get-actor";
+import { assertOwnOrigin } from "./own-origin";
 
 type Context<P> = { params: Promise<P> };
 
@@ -55,16 +55,4 @@ export function errorResponse(error: unknown): Response {
   const headers = new Headers({ "cache-control": "no-store" });
   if (known?.retryAfter !== undefined) headers.set("retry-after", String(known.retryAfter));
   return Response.json({ error: described }, { status, headers });
-}
-
-/** A page of another site cannot write with our cookie: browsers tell where a request comes from. */
-function assertOwnOrigin(request: Request): void {
-  if (request.method === "GET" || request.method === "HEAD") return;
-  const site = request.headers.get("sec-fetch-site");
-  if (site !== null && site !== "same-origin" && site !== "none") throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
-  const origin = request.headers.get("origin");
-  if (origin === null) return;
-  const host = request.headers.get("host");
-  const own = [new URL(env().AUTH_URL).host, host];
-  if (!own.includes(new URL(origin).host)) throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
 }
