@@ -1,3 +1,7 @@
 import { defineConfig } from "drizzle-kit";
 
-export default defineConfig({ dialect: "mysql", schema: "./db/schema/index.ts", out: "./db/migrations" });
+export default defineConfig({
+  dialect: "mysql",
+  schema: "./db/schema/index.ts",
+  out: "./db/migrations",
+});

@@ -28,6 +28,8 @@ export default defineConfig({
           // One database for all: files run one after another.
           fileParallelism: false,
           setupFiles: ["tests/helpers/setup.ts"],
+          // It names Next's modules as only a bundler resolves them.
+          server: { deps: { inline: ["next-auth"] } },
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },
