@@ -2,6 +2,7 @@ import { sql } from "drizzle-orm";
 import { db } from "@/db/client";
 import * as t from "@/db/schema";
 import { newId } from "@/db/columns";
+import { env } from "@/lib/env";
 import type { PositionKind } from "@/lib/permissions/types";
 
 export type TestPerson = { userId: string; personId: string; email: string; name: string };
@@ -17,8 +18,10 @@ const TABLES = [
   "rate_counters", "users",
 ];
 
-/** Empties every table of the test database. */
+/** Empties every table of the test database; refuses any other. */
 export async function emptyDatabase(): Promise<void> {
+  const name = new URL(env().DATABASE_URL).pathname.slice(1);
+  if (!/test/.test(name)) throw new Error(`${name} is not a test database: it is left alone.`);
   await db.transaction(async (tx) => {
     await tx.execute(sql`set foreign_key_checks = 0`);
     for (const table of TABLES) await tx.execute(sql.raw(`delete from \`${table}\``));
