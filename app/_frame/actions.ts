@@ -1,17 +1,15 @@
 "use server";
 
-import { cookies } from "next/headers";
 import { redirect } from "next/navigation";
 import { z } from "zod";
 import { definePublicAction } from "@/lib/auth/define-action";
-import { sessionCookieName } from "@/lib/auth/session-cookie";
+import { clearSessionCookie, currentSessionToken } from "@/lib/auth/session-cookie";
 import { deleteSession } from "@/lib/data/sessions";
 
 /** Ends this session: the row goes, then the cookie. Works for someone whose session has run out, too. */
 export const signOut = definePublicAction({ input: z.void() }, async () => {
-  const jar = await cookies();
-  const token = jar.get(sessionCookieName())?.value;
+  const token = await currentSessionToken();
   if (token) await deleteSession(token);
-  jar.delete(sessionCookieName());
+  await clearSessionCookie();
   redirect("/");
 });

@@ -117,7 +117,7 @@ export function SeasonStaves({ weeks, groups, clashes, today, label }: SeasonSta
   const todayPlace = placeInWeeks(weeks, today, 720);
 
   return (
-    <figure aria-label={label} className="m-0 min-w-0 print:[page:wide] print:[zoom:0.69]">
+    <figure aria-label={label} className="m-0 min-w-0 print:[zoom:0.69] print:[page:wide]">
       <div
         role="region"
         aria-label={`${label}, drawn as staves; scrolls sideways`}

@@ -30,7 +30,7 @@ async function seed(): Promise<void> {
   const runDir = path.join(import.meta.dirname, "../../.run");
   await mkdir(runDir, { recursive: true });
   await writeFile(
-    path.join(runDir, process.env["DEMO_PEOPLE_FILE"] ?? "demo-people.json"),
+    path.resolve(runDir, process.env["DEMO_PEOPLE_FILE"] ?? "demo-people.json"),
     JSON.stringify({ people: Object.values(DEMO_PEOPLE), links: [{ label: "Monitor, at the door today", path: `/door/${doorSecret}` }] }, null, 2),
   );
   console.log("The demo season is loaded.");

@@ -1,9 +1,10 @@
+import { addMinutes } from "date-fns";
 import { eq, inArray } from "drizzle-orm";
 import { createHash, randomBytes } from "node:crypto";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
 import {
-  auditionDays, auditionRooms, conflicts, dayLinks, people, pianistSessions, productions, ranges, roomBookings, seasons, signUps, slotAssignments, slots,
+  attendances, auditionDays, auditionRooms, conflicts, dayLinks, people, pianistSessions, productions, ranges, roomBookings, seasons, signUps, slotAssignments, slots,
 } from "@/db/schema";
 import { buildSlots } from "@/lib/schedule/build-slots";
 import type { Companies } from "./cast-of-the-demo";
@@ -55,6 +56,7 @@ export async function seedTidewatcher(tx: Tx, companies: Companies): Promise<{ p
   const singers = await addSingers(tx, companies, productionId);
   await place(tx, today, singers.slice(0, 38));
   await place(tx, nextWeek, singers.slice(38, 50));
+  await heardSoFar(tx, today, singers.slice(0, 38));
   await invite(tx, singers[38], singers[39]);
 
   const doorSecret = randomBytes(32).toString("base64url");
@@ -135,6 +137,20 @@ async function place(tx: Tx, day: Day, signUpIds: string[]): Promise<void> {
   for (const [index, signUpId] of signUpIds.entries()) {
     const slot = day.free[index];
     if (slot) await tx.insert(slotAssignments).values({ slotId: slot.id, signUpId, dayId: day.dayId });
+  }
+}
+
+/** What the door has written by now: who was heard, who is inside, and that the next ones are here. */
+async function heardSoFar(tx: Tx, day: Day, signUpIds: string[]): Promise<void> {
+  const now = new Date();
+  for (const [index, signUpId] of signUpIds.entries()) {
+    const startsAt = day.free[index]?.startsAt;
+    if (!startsAt || startsAt > addMinutes(now, 20)) continue;
+    const ends = addMinutes(startsAt, 7);
+    const arrived = addMinutes(startsAt, -15);
+    await tx.insert(attendances).values({
+      dayId: day.dayId, signUpId, hereAt: arrived < now ? arrived : now, inAt: startsAt <= now ? startsAt : null, outAt: ends <= now ? ends : null,
+    });
   }
 }
 

@@ -11,20 +11,22 @@ const RUNS = ["01234567890123456789", "98765432109876543210", "abcdefghijklmnopq
 
 const fold = (text: string): string => text.normalize("NFKC").toLowerCase().replace(/[^\p{L}\p{N}]+/gu, "");
 
+/** Whether the text holds one of the words, and next to nothing but such words and digits. */
+function holdsLittleElse(text: string, words: readonly string[]): boolean {
+  const long = words.filter((word) => word.length >= 4).toSorted((a, b) => b.length - a.length);
+  const rest = long.reduce((left, word) => left.replaceAll(word, ""), text);
+  return rest !== text && rest.replace(/\p{N}+/gu, "").length < 4;
+}
+
 /**
  * What is wrong with a password that is long enough, in words that say what to do; null when nothing is. It must not be the
  * address or name with a little added, one of the passwords everyone tries first, a run of keys, or a few characters repeated.
  */
 export function passwordWeakness(password: string, owner: { email: string; name: string }): string | null {
   const folded = fold(password);
-  const without = (text: string): string => folded.replaceAll(text, "");
-  const own = [fold(owner.email), fold(owner.email.split("@")[0] ?? ""), fold(owner.name), ...owner.name.split(/\s+/).map(fold)].filter((text) => text.length >= 4);
-  if (own.some((text) => folded.includes(text) && without(text).length < 8)) {
-    return "This holds your name or address, and little else. Choose words that are not about you.";
-  }
-  if (COMMON.some((text) => folded.includes(text) && without(text).length < 6)) {
-    return "This is among the first that others would try. Choose a few words that do not belong together.";
-  }
+  const own = [owner.email, owner.email.split("@")[0] ?? "", owner.name, ...owner.name.split(/[\s-]+/), ...owner.email.split(/[@.]/)].map(fold);
+  if (holdsLittleElse(folded, own)) return "This holds your name or address, and little else. Choose words that are not about you.";
+  if (holdsLittleElse(folded, COMMON)) return "This is among the first that others would try. Choose a few words that do not belong together.";
   if (new Set(password).size < 5 || RUNS.some((run) => run.includes(folded)) || folded.length < 6) {
     return "This repeats a few keys or runs along them. Choose a few words that do not belong together.";
   }

@@ -6,7 +6,10 @@ async function readJson<T>(address: string): Promise<T> {
   const response = await fetch(address, { headers: { accept: "application/json" } });
   if (response.ok) return (await response.json()) as T;
   const body = (await response.json().catch(() => null)) as { error?: { message?: string } } | null;
-  throw new Error(body?.error?.message ?? "The server did not answer. What you see may be old: check the connection.");
+  throw new Error(
+    body?.error?.message ??
+      "The server did not answer. What you see may be old: check the connection.",
+  );
 }
 
 /** One audition day, read again every few seconds while it is looked at. */
@@ -28,7 +31,10 @@ export function doorQuery(token: string) {
 }
 
 /** A slot of the day by its id, with the room it is in. */
-export function findSlot(day: AuditionDayView, slotId: string): { item: ItemOnDay; room: AuditionDayView["rooms"][number] } | null {
+export function findSlot(
+  day: AuditionDayView,
+  slotId: string,
+): { item: ItemOnDay; room: AuditionDayView["rooms"][number] } | null {
   for (const room of day.rooms) {
     const item = room.items.find((i) => i.id === slotId);
     if (item) return { item, room };
@@ -38,23 +44,37 @@ export function findSlot(day: AuditionDayView, slotId: string): { item: ItemOnDa
 
 /** Where a singer is on the day: the slot's id, or null while they wait. */
 export function slotOfSinger(day: AuditionDayView, signUpId: string): string | null {
-  return day.rooms.flatMap((room) => room.items).find((item) => item.singer?.signUpId === signUpId)?.id ?? null;
+  return (
+    day.rooms.flatMap((room) => room.items).find((item) => item.singer?.signUpId === signUpId)
+      ?.id ?? null
+  );
 }
 
 /** The day as it will be once a singer stands in `slotId` (null: waits again); whoever was there takes their place. */
-export function withSingerMoved(day: AuditionDayView, signUpId: string, slotId: string | null): AuditionDayView {
+export function withSingerMoved(
+  day: AuditionDayView,
+  signUpId: string,
+  slotId: string | null,
+): AuditionDayView {
   const from = slotOfSinger(day, signUpId);
-  const everyone = [...day.waiting, ...day.rooms.flatMap((room) => room.items.flatMap((item) => item.singer ?? []))];
+  const everyone = [
+    ...day.waiting,
+    ...day.rooms.flatMap((room) => room.items.flatMap((item) => item.singer ?? [])),
+  ];
   const singer = everyone.find((s) => s.signUpId === signUpId);
   if (!singer || from === slotId) return day;
   const other = slotId === null ? null : (findSlot(day, slotId)?.item.singer ?? null);
-  const seat = (item: ItemOnDay): SingerOnDay | null => (item.id === slotId ? singer : item.id === from ? other : item.singer);
+  const seat = (item: ItemOnDay): SingerOnDay | null =>
+    item.id === slotId ? singer : item.id === from ? other : item.singer;
   const waiting = day.waiting.filter((s) => s.signUpId !== signUpId);
   if (slotId === null) waiting.push(singer);
   if (from === null && other !== null) waiting.push(other);
   return {
     ...day,
     waiting,
-    rooms: day.rooms.map((room) => ({ ...room, items: room.items.map((item) => ({ ...item, singer: seat(item) })) })),
+    rooms: day.rooms.map((room) => ({
+      ...room,
+      items: room.items.map((item) => ({ ...item, singer: seat(item) })),
+    })),
   };
 }

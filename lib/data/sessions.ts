@@ -2,6 +2,7 @@ import "server-only";
 import { and, desc, eq, gt, ne } from "drizzle-orm";
 import { createHash } from "node:crypto";
 import { db } from "@/db/client";
+import type { Db, Tx } from "@/db/client";
 import { sessions } from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
@@ -42,7 +43,12 @@ export async function endSession(actor: Actor, id: string): Promise<void> {
 
 /** Ends all of the actor's sessions but the one that asks. */
 export async function endOtherSessions(actor: Actor, currentToken: string | null): Promise<void> {
-  await db
+  await deleteOtherSessions(db, actor, currentToken);
+}
+
+/** The same within the transaction of what makes it necessary. */
+export async function deleteOtherSessions(tx: Db | Tx, actor: Actor, currentToken: string | null): Promise<void> {
+  await tx
     .delete(sessions)
     .where(
       currentToken === null

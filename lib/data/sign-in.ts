@@ -1,8 +1,9 @@
 import "server-only";
-import { eq } from "drizzle-orm";
+import { and, desc, eq, isNull } from "drizzle-orm";
 import { createHash } from "node:crypto";
 import { db } from "@/db/client";
-import { passwordHashes, users } from "@/db/schema";
+import { newId } from "@/db/columns";
+import { passwordHashes, people, users } from "@/db/schema";
 import { pretendToVerify, verifyPassword } from "@/lib/auth/password";
 import { AppError } from "@/lib/errors";
 import { queueMail } from "./outbox";
@@ -12,6 +13,19 @@ import { countTry, RATES } from "./rate-limit";
 export async function createSignInMail(to: string, link: string, minutes: number): Promise<void> {
   const dedupeKey = `sign-in:${createHash("sha256").update(link).digest("base64url")}`;
   await queueMail(db, { companyId: null, to, template: "sign-in", data: { link, minutes }, dedupeKey });
+}
+
+/** Makes the login of an address that a link has proved, with the name that a company last wrote beside it, if any has. */
+export async function createLogin(email: string, emailVerified: Date | null): Promise<{ id: string; email: string; name: string | null; emailVerified: Date | null }> {
+  const [known] = await db
+    .select({ name: people.name })
+    .from(people)
+    .where(and(eq(people.email, email), isNull(people.removedAt)))
+    .orderBy(desc(people.createdAt))
+    .limit(1);
+  const login = { id: newId(), email, name: known?.name ?? null, emailVerified };
+  await db.insert(users).values(login);
+  return login;
 }
 
 /** Counts a request for a sign-in link, per address and per source. Throws `too-many`. */

@@ -27,7 +27,7 @@ import { recordAudit } from "../audit";
 import { productionFor } from "../guard";
 import { duplicateKey, inTransaction } from "../transaction";
 import { roomTaken } from "./room-holders";
-import { lockDay } from "./scope";
+import { dayOf, lockDay } from "./scope";
 
 export type DayListed = {
   id: string;
@@ -216,4 +216,10 @@ export async function backToListed(tx: Tx, signUpIds: string[]): Promise<void> {
     .update(signUps)
     .set({ state: "listed", invitedAt: null, answeredAt: null, version: sql`${signUps.version} + 1` })
     .where(and(inArray(signUps.id, signUpIds), inArray(signUps.state, ["invited", "confirmed"])));
+}
+
+/** Throws `not-found` unless the day is there and the actor may read the production's auditions. */
+export async function assertDay(actor: Actor, productionId: string, dayId: string): Promise<void> {
+  const scope = await productionFor(actor, productionId, "auditions:read");
+  await dayOf(db, scope.id, dayId);
 }

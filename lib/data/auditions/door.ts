@@ -97,16 +97,16 @@ export async function readDoor(token: string, source: string, now = new Date()):
       room = { id: row.roomId, name: row.room, items: [] };
       view.rooms.push(room);
     }
-    const pause = row.kind === "rest" || row.kind === "lunch";
-    if (!pause && (row.signUpId === null || row.name === null)) continue;
+    const pause = row.kind === "rest" || row.kind === "lunch" ? row.kind : null;
+    if (pause === null && row.signUpId === null) continue;
     room.items.push({
       id: row.id,
-      kind: pause ? row.kind : "singer",
+      kind: pause ?? "singer",
       startsAt: row.startsAt.toISOString(),
       endsAt: row.endsAt.toISOString(),
       signUpId: row.signUpId,
       name: row.name,
-      state: pause ? null : stateOf(row),
+      state: pause === null ? stateOf(row) : null,
       inAt: row.inAt?.toISOString() ?? null,
     });
   }

@@ -1,7 +1,7 @@
 import "server-only";
 import { aliasedTable, and, asc, eq, gt, lt, ne, or, isNull } from "drizzle-orm";
 import { db } from "@/db/client";
-import { auditionDays, auditionRooms, calls, productions, roomBookings, rooms } from "@/db/schema";
+import { auditionDays, auditionRooms, callbackRounds, calls, productions, roomBookings, rooms } from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import { clockSpan } from "@/lib/format-dates";
 import type { RoomLaidOut } from "@/lib/auditions/lay-out-day";
@@ -12,6 +12,7 @@ import type { RoomLaidOut } from "@/lib/auditions/lay-out-day";
  */
 export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, dayId: string | null): Promise<AppError> {
   const callProductions = aliasedTable(productions, "call_productions");
+  const roundProductions = aliasedTable(productions, "round_productions");
   for (const room of wanted) {
     const [held] = await db
       .select({
@@ -20,6 +21,7 @@ export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, da
         endsAt: roomBookings.endsAt,
         auditions: productions.title,
         call: callProductions.title,
+        round: roundProductions.title,
       })
       .from(roomBookings)
       .innerJoin(rooms, eq(rooms.id, roomBookings.roomId))
@@ -28,6 +30,8 @@ export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, da
       .leftJoin(productions, eq(productions.id, auditionDays.productionId))
       .leftJoin(calls, eq(calls.id, roomBookings.callId))
       .leftJoin(callProductions, eq(callProductions.id, calls.productionId))
+      .leftJoin(callbackRounds, eq(callbackRounds.id, roomBookings.callbackRoundId))
+      .leftJoin(roundProductions, eq(roundProductions.id, callbackRounds.productionId))
       .where(
         and(
           eq(roomBookings.roomId, room.roomId),
@@ -39,7 +43,12 @@ export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, da
       .orderBy(asc(roomBookings.startsAt))
       .limit(1);
     if (!held) continue;
-    const holder = held.call !== null ? `a call of ${held.call}` : `the auditions of ${held.auditions ?? "another production"}`;
+    const holder =
+      held.call !== null
+        ? `a call of ${held.call}`
+        : held.round !== null
+          ? `the callbacks of ${held.round}`
+          : `the auditions of ${held.auditions ?? "another production"}`;
     return new AppError(
       "taken",
       `${held.room} is taken by ${holder}, ${clockSpan(held.startsAt, held.endsAt, zone)}. Choose another room, or times outside that.`,

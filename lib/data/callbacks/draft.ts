@@ -1,35 +1,29 @@
 import "server-only";
-import { and, asc, desc, eq, inArray, isNull, ne, sql } from "drizzle-orm";
+import { and, asc, eq, isNull, sql } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
-import { callbackInvitations, callbackMarks, callbackRounds, people, roles, rooms, signUps, venues } from "@/db/schema";
+import { callbackMarks, callbackRounds, people, roles, rooms, signUps } from "@/db/schema";
 import { recordAudit } from "@/lib/data/audit";
+import { fitWords, linesOf, wholeLines } from "@/lib/data/casting/lines";
+import type { FitWords } from "@/lib/data/casting/lines";
 import { productionFor } from "@/lib/data/guard";
 import type { ProductionScope } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
 import type { RangeOnFile } from "@/lib/data/ranges";
 import { inTransaction } from "@/lib/data/transaction";
 import { AppError } from "@/lib/errors";
+import { groupBy } from "@/lib/group-by";
+import type { PitchSpan } from "@/lib/music/types";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import { toInstant } from "@/lib/schedule/to-instant";
 import type { changeRoundSchema, markSchema, startRoundSchema } from "@/lib/schemas/callbacks";
-
-export type Round = {
-  id: string;
-  title: string;
-  startsAt: Date | null;
-  endsAt: Date | null;
-  zone: string;
-  roomId: string | null;
-  room: string | null;
-  material: string | null;
-  issue: number;
-  publishedAt: Date | null;
-  version: number;
-};
+import { latestRound } from "./round";
+import type { Round } from "./round";
+import { compareWithSent, countChanges, standingInvitations, wantedSnapshots } from "./standing";
+import type { PublishedCount, Unsent } from "./standing";
 
 export type CallbackSinger = {
   personId: string;
@@ -37,58 +31,78 @@ export type CallbackSinger = {
   minor: boolean;
   song: string | null;
   asksFor: string | null;
-  range: RangeOnFile | null;
+  /** Withdrew from the auditions; listed only while a mark or something sent still stands. */
+  withdrawn: boolean;
+  range: Omit<RangeOnFile, "at"> | null;
+  /** The verdict on each role, in the order of the roles. */
+  fits: FitWords[];
   /** Roles this singer is marked for. */
   marks: string[];
-  /** What was last published to them. */
-  sent: { issue: number; answer: "yes" | "no" | null } | null;
+  /** What they were last sent of this round and still stands, with their answer. */
+  sent: { answer: "yes" | "no" | null } | null;
+  /** What publishing now would change for them. */
+  unsent: Unsent;
 };
 
 export type CallbackDraft = {
   round: Round | null;
-  roles: { id: string; name: string }[];
+  roles: { id: string; name: string; line: PitchSpan | null }[];
   singers: CallbackSinger[];
   may: { mark: boolean; publish: boolean };
+  mayHear: boolean;
+  /** What publishing now would do, for who may. */
+  preview: PublishedCount | null;
 };
 
-/** The latest round of the production with its draft marks and what was published. The draft is for the music team, the table and the stage manager. */
+/** The latest round of the production with its draft marks, the fits and what was published. The draft is for the music team, the table and the stage manager. */
 export async function readCallbacks(actor: Actor, productionId: string): Promise<CallbackDraft> {
   const scope = await productionFor(actor, productionId, "callbacks:read");
   const subject = { companyId: scope.companyId, productionId: scope.id };
-  const [round, roleRows, singerRows] = await Promise.all([
+  const [round, roleRows, lines, signedUp] = await Promise.all([
     latestRound(scope.id),
     db.select({ id: roles.id, name: roles.name }).from(roles).where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt))).orderBy(asc(roles.place)),
+    linesOf(scope.id),
     db
-      .select({ personId: people.id, name: people.name, minor: people.minor, song: signUps.song, asksFor: signUps.asksFor })
+      .select({ personId: people.id, name: people.name, minor: people.minor, song: signUps.song, asksFor: signUps.asksFor, state: signUps.state })
       .from(signUps)
       .innerJoin(people, eq(people.id, signUps.personId))
-      .where(and(eq(signUps.productionId, scope.id), ne(signUps.state, "withdrawn"), isNull(people.removedAt)))
+      .where(and(eq(signUps.productionId, scope.id), isNull(people.removedAt)))
       .orderBy(asc(signUps.place)),
   ]);
-  const ids = singerRows.map((row) => row.personId);
-  const [ranges, marks, sent] = await Promise.all([
-    rangesOf(db, ids),
+  const [ranges, marks, standing, wanted] = await Promise.all([
+    rangesOf(db, signedUp.map((row) => row.personId)),
     round ? db.select({ personId: callbackMarks.personId, roleId: callbackMarks.roleId }).from(callbackMarks).where(eq(callbackMarks.roundId, round.id)) : [],
-    round
-      ? db
-          .select({ personId: callbackInvitations.personId, issue: callbackInvitations.issue, answer: callbackInvitations.answer })
-          .from(callbackInvitations)
-          .where(and(eq(callbackInvitations.roundId, round.id), isNull(callbackInvitations.supersededAt)))
-      : [],
+    round ? standingInvitations(db, round.id) : [],
+    round ? wantedSnapshots(db, scope.id, round) : new Map<string, never>(),
   ]);
+  const whole = wholeLines(lines);
+  const changes = compareWithSent(wanted, standing);
+  const marksOf = groupBy(marks, (mark) => mark.personId);
+  const may = { mark: can(actor, "callbacks:draft", subject), publish: can(actor, "callbacks:publish", subject) };
   return {
     round,
-    roles: roleRows,
-    singers: singerRows.map((row) => {
-      const last = sent.find((s) => s.personId === row.personId);
-      return {
-        ...row,
-        range: ranges.get(row.personId)?.best ?? null,
-        marks: marks.filter((m) => m.personId === row.personId).map((m) => m.roleId),
-        sent: last ? { issue: last.issue, answer: last.answer } : null,
-      };
+    roles: roleRows.map((role) => {
+      const line = whole.get(role.id);
+      return { ...role, line: line ? { low: line.low, high: line.high } : null };
     }),
-    may: { mark: can(actor, "callbacks:draft", subject), publish: can(actor, "callbacks:publish", subject) },
+    singers: signedUp
+      .filter((row) => row.state !== "withdrawn" || marksOf.has(row.personId) || changes.has(row.personId))
+      .map(({ state, ...row }) => {
+        const best = ranges.get(row.personId)?.best ?? null;
+        const sent = standing.find((s) => s.personId === row.personId);
+        return {
+          ...row,
+          withdrawn: state === "withdrawn",
+          range: best && { low: best.low, high: best.high, comfortableLow: best.comfortableLow, comfortableHigh: best.comfortableHigh, kind: best.kind },
+          fits: roleRows.map((role) => fitWords(best, whole.get(role.id))),
+          marks: (marksOf.get(row.personId) ?? []).map((m) => m.roleId),
+          sent: sent ? { answer: sent.answer } : null,
+          unsent: changes.get(row.personId) ?? "none",
+        };
+      }),
+    may,
+    mayHear: can(actor, "range:hear", subject),
+    preview: may.publish ? countChanges(changes) : null,
   };
 }
 
@@ -147,40 +161,12 @@ async function assertMarkable(tx: Tx, scope: ProductionScope, input: z.output<ty
   if (!round || !role || !singer) throw new AppError("not-found");
 }
 
-/** The newest round of a production. Asks no permission: the caller has. */
-export async function latestRound(productionId: string): Promise<Round | null> {
-  const [row] = await db
-    .select({
-      id: callbackRounds.id,
-      title: callbackRounds.title,
-      startsAt: callbackRounds.startsAt,
-      endsAt: callbackRounds.endsAt,
-      zone: callbackRounds.zone,
-      roomId: callbackRounds.roomId,
-      roomName: rooms.name,
-      venueName: venues.name,
-      material: callbackRounds.material,
-      issue: callbackRounds.issue,
-      publishedAt: callbackRounds.publishedAt,
-      version: callbackRounds.version,
-    })
-    .from(callbackRounds)
-    .leftJoin(rooms, eq(rooms.id, callbackRounds.roomId))
-    .leftJoin(venues, eq(venues.id, rooms.venueId))
-    .where(eq(callbackRounds.productionId, productionId))
-    .orderBy(desc(callbackRounds.id))
-    .limit(1);
-  if (!row) return null;
-  const { roomName, venueName, ...round } = row;
-  return { ...round, room: roomName === null ? null : `${roomName}, ${venueName ?? ""}` };
-}
-
 async function roomOfCompany(scope: ProductionScope, roomId: string): Promise<void> {
   const [room] = await db.select({ id: rooms.id }).from(rooms).where(and(eq(rooms.id, roomId), eq(rooms.companyId, scope.companyId)));
   if (!room) throw new AppError("not-found", "That room is no longer there. Choose another.");
 }
 
 async function refuseStale(productionId: string, roundId: string): Promise<never> {
-  const [round] = await db.select({ id: callbackRounds.id }).from(callbackRounds).where(and(eq(callbackRounds.id, roundId), inArray(callbackRounds.productionId, [productionId])));
+  const [round] = await db.select({ id: callbackRounds.id }).from(callbackRounds).where(and(eq(callbackRounds.id, roundId), eq(callbackRounds.productionId, productionId)));
   throw new AppError(round ? "stale" : "not-found");
 }

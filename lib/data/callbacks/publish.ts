@@ -4,7 +4,7 @@ import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
-import { callbackInvitations, callbackMarks, callbackRounds, people, positions, roles, roomBookings } from "@/db/schema";
+import { callbackInvitations, callbackRounds, people, positions, roomBookings } from "@/db/schema";
 import type { CallbackSnapshot } from "@/db/schema/callbacks";
 import { recordAudit } from "@/lib/data/audit";
 import { productionFor } from "@/lib/data/guard";
@@ -15,13 +15,12 @@ import { duplicateKey, inTransaction } from "@/lib/data/transaction";
 import { env } from "@/lib/env";
 import { AppError } from "@/lib/errors";
 import { clockSpan, localDay, longDay } from "@/lib/format-dates";
-import { groupBy } from "@/lib/group-by";
 import type { Actor } from "@/lib/permissions/types";
 import type { publishRoundSchema } from "@/lib/schemas/callbacks";
-import { latestRound } from "./draft";
-import type { Round } from "./draft";
-
-export type PublishedCount = { told: number; unchanged: number; takenOff: number };
+import { latestRound } from "./round";
+import type { Round } from "./round";
+import { compareWithSent, countChanges, standingInvitations, wantedSnapshots } from "./standing";
+import type { PublishedCount } from "./standing";
 
 /**
  * Publishes the list: each person marked gets what concerns them and nothing else, as a snapshot that is never altered.
@@ -41,7 +40,7 @@ export async function publishRound(actor: Actor, input: z.output<typeof publishR
         .set({ issue: sql`${callbackRounds.issue} + 1`, publishedAt: new Date(), version: sql`${callbackRounds.version} + 1` })
         .where(and(eq(callbackRounds.id, round.id), eq(callbackRounds.version, input.version)));
       if (locked.affectedRows === 0) throw new AppError("stale");
-      const wanted = await wantedSnapshots(tx, round);
+      const wanted = await wantedSnapshots(tx, scope.id, round);
       if (wanted.size === 0) throw new AppError("refused", "Nobody is marked yet. Mark who is called back, then publish.");
       await holdRoom(tx, round, startsAt, endsAt);
       const counts = await writeInvitations(tx, actor, scope, round, wanted);
@@ -59,28 +58,6 @@ export async function publishRound(actor: Actor, input: z.output<typeof publishR
   }
 }
 
-async function wantedSnapshots(tx: Tx, round: Round): Promise<Map<string, CallbackSnapshot>> {
-  const rows = await tx
-    .select({ personId: callbackMarks.personId, role: roles.name })
-    .from(callbackMarks)
-    .innerJoin(roles, and(eq(roles.id, callbackMarks.roleId), isNull(roles.removedAt)))
-    .where(eq(callbackMarks.roundId, round.id))
-    .orderBy(roles.place);
-  const snapshots = new Map<string, CallbackSnapshot>();
-  for (const [personId, marks] of groupBy(rows, (row) => row.personId)) {
-    snapshots.set(personId, {
-      round: round.title,
-      roles: marks.map((mark) => mark.role),
-      startsAt: round.startsAt?.toISOString() ?? null,
-      endsAt: round.endsAt?.toISOString() ?? null,
-      zone: round.zone,
-      room: round.room,
-      material: round.material,
-    });
-  }
-  return snapshots;
-}
-
 async function holdRoom(tx: Tx, round: Round, startsAt: Date, endsAt: Date): Promise<void> {
   await tx.delete(roomBookings).where(eq(roomBookings.callbackRoundId, round.id));
   if (round.roomId) await tx.insert(roomBookings).values({ roomId: round.roomId, startsAt, endsAt, callbackRoundId: round.id });
@@ -93,26 +70,20 @@ async function writeInvitations(
   round: Round,
   wanted: Map<string, CallbackSnapshot>,
 ): Promise<PublishedCount> {
-  const standing = await tx
-    .select({ id: callbackInvitations.id, personId: callbackInvitations.personId, snapshot: callbackInvitations.snapshot })
-    .from(callbackInvitations)
-    .where(and(eq(callbackInvitations.roundId, round.id), isNull(callbackInvitations.supersededAt)))
-    .for("update");
-  // JSON comes back with its keys as written, so equal snapshots are equal text.
-  const same = standing.filter((row) => JSON.stringify(row.snapshot) === JSON.stringify(wanted.get(row.personId)));
-  const over = standing.filter((row) => !same.includes(row));
+  const standing = await standingInvitations(tx, round.id, true);
+  const changes = compareWithSent(wanted, standing);
+  const over = standing.filter((row) => changes.get(row.personId) !== "none");
   if (over.length > 0) {
     await tx.update(callbackInvitations).set({ supersededAt: new Date() }).where(inArray(callbackInvitations.id, over.map((row) => row.id)));
   }
-  const keep = new Set(same.map((row) => row.personId));
-  const fresh = [...wanted].filter(([personId]) => !keep.has(personId));
+  const fresh = [...wanted].filter(([personId]) => changes.get(personId) !== "none");
   const issue = round.issue + 1;
   for (const [personId, snapshot] of fresh) {
     const id = newId();
     await tx.insert(callbackInvitations).values({ id, roundId: round.id, personId, issue, snapshot, publishedAt: new Date() });
     await mailCallback(tx, actor, scope, { id, personId, snapshot });
   }
-  return { told: fresh.length, unchanged: same.length, takenOff: over.filter((row) => !wanted.has(row.personId)).length };
+  return countChanges(changes);
 }
 
 async function mailCallback(tx: Tx, actor: Actor, scope: ProductionScope, invitation: { id: string; personId: string; snapshot: CallbackSnapshot }): Promise<void> {
@@ -141,21 +112,5 @@ async function mailCallback(tx: Tx, actor: Actor, scope: ProductionScope, invita
       link,
     },
     dedupeKey: `callback:${invitation.id}`,
-  });
-}
-
-/** How many people publishing now would tell, leave and take off: what the button says before it is pressed. */
-export async function previewPublish(actor: Actor, productionId: string): Promise<PublishedCount> {
-  const scope = await productionFor(actor, productionId, "callbacks:publish");
-  const round = await latestRound(scope.id);
-  if (!round) return { told: 0, unchanged: 0, takenOff: 0 };
-  return db.transaction(async (tx) => {
-    const wanted = await wantedSnapshots(tx, round);
-    const standing = await tx
-      .select({ personId: callbackInvitations.personId, snapshot: callbackInvitations.snapshot })
-      .from(callbackInvitations)
-      .where(and(eq(callbackInvitations.roundId, round.id), isNull(callbackInvitations.supersededAt)));
-    const unchanged = standing.filter((row) => JSON.stringify(row.snapshot) === JSON.stringify(wanted.get(row.personId))).length;
-    return { told: wanted.size - unchanged, unchanged, takenOff: standing.filter((row) => !wanted.has(row.personId)).length };
   });
 }

@@ -1,33 +1,34 @@
 import "server-only";
-import { and, asc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, desc, eq, inArray, isNull } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
-import { callbackInvitations, callbackMarks, callbackRounds, choices, numbers, people, roles, vocalLines } from "@/db/schema";
+import { callbackInvitations, callbackMarks, callbackRounds, choices, people, roles } from "@/db/schema";
 import { productionFor } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
 import type { PersonRanges, RangeOnFile } from "@/lib/data/ranges";
 import { AppError } from "@/lib/errors";
-import { groupBy } from "@/lib/group-by";
 import { fitInWords } from "@/lib/music/fit-in-words";
 import { mergeLines } from "@/lib/music/merge-lines";
 import { rangeFit } from "@/lib/music/range-fit";
 import { tessitura } from "@/lib/music/tessitura";
-import type { FitVerdict, PitchSpan, RangeFit, SingerRange, VocalLine } from "@/lib/music/types";
+import type { PitchSpan, RangeFit } from "@/lib/music/types";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import type { fitSchema } from "@/lib/schemas/casting";
+import { fitWords, linesOf, toSingerRange, wholeLines } from "./lines";
+import type { FitWords } from "./lines";
 
 export type CastingRole = { id: string; name: string; kind: string; needed: number; line: (PitchSpan & { tessitura: PitchSpan | null }) | null };
 
 export type CastingChoice = { state: "considered" | "cast"; kind: (typeof choices.$inferSelect)["kind"]; version: number };
 
-export type CastingCell = { verdict: FitVerdict; words: string; choice: CastingChoice | null } | { verdict: null; words: string; choice: CastingChoice | null };
+export type CastingCell = FitWords & { choice: CastingChoice | null };
 
 export type CastingSinger = {
   personId: string;
   name: string;
   minor: boolean;
-  range: RangeOnFile | null;
+  range: Omit<RangeOnFile, "at"> | null;
   /** Roles this singer is called back for. */
   calledBackFor: string[];
   answer: "yes" | "no" | null;
@@ -35,32 +36,15 @@ export type CastingSinger = {
   cells: Record<string, CastingCell>;
 };
 
-export type CastingGrid = { roles: CastingRole[]; singers: CastingSinger[]; castPublished: boolean; mayChoose: boolean };
-
-/** A range on file as the arithmetic takes it. */
-export function toSingerRange(range: RangeOnFile): SingerRange {
-  return { low: range.low, high: range.high, comfortableLow: range.comfortableLow ?? undefined, comfortableHigh: range.comfortableHigh ?? undefined };
-}
-
-type LineRow = VocalLine & { roleId: string; numberId: string; label: string; title: string };
-
-async function linesOf(productionId: string): Promise<LineRow[]> {
-  const rows = await db
-    .select({
-      roleId: vocalLines.roleId, numberId: numbers.id, label: numbers.label, title: numbers.title, low: vocalLines.low, high: vocalLines.high,
-      optionalLow: vocalLines.optionalLow, optionalHigh: vocalLines.optionalHigh, histogram: vocalLines.histogram,
-    })
-    .from(vocalLines)
-    .innerJoin(numbers, and(eq(numbers.id, vocalLines.numberId), isNull(numbers.removedAt)))
-    .where(eq(numbers.productionId, productionId))
-    .orderBy(asc(numbers.place));
-  return rows.map((row) => ({
-    ...row,
-    optionalLow: row.optionalLow ?? undefined,
-    optionalHigh: row.optionalHigh ?? undefined,
-    histogram: row.histogram ?? undefined,
-  }));
-}
+export type CastingGrid = {
+  roles: CastingRole[];
+  singers: CastingSinger[];
+  castPublished: boolean;
+  mayChoose: boolean;
+  /** The company's, for the days of what was heard. */
+  zone: string;
+  locale: string;
+};
 
 /**
  * Each called-back or chosen singer against each role: the range fit computed here, on the server, with its words, and what
@@ -89,41 +73,37 @@ export async function readCastingGrid(actor: Actor, productionId: string): Promi
       .select({ personId: callbackInvitations.personId, answer: callbackInvitations.answer })
       .from(callbackInvitations)
       .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
-      .where(and(eq(callbackRounds.productionId, scope.id), isNull(callbackInvitations.supersededAt))),
+      .where(and(eq(callbackRounds.productionId, scope.id), isNull(callbackInvitations.supersededAt)))
+      // The newest round speaks first.
+      .orderBy(desc(callbackInvitations.publishedAt)),
   ]);
-  const linesByRole = groupBy(lines, (line) => line.roleId);
-  const whole = new Map(roleRows.map((role) => [role.id, mergeLines(linesByRole.get(role.id) ?? [])]));
+  const whole = wholeLines(lines);
   const grid = roleRows.map((role): CastingRole => {
-    const line = whole.get(role.id) ?? null;
+    const line = whole.get(role.id);
     return { ...role, line: line ? { low: line.low, high: line.high, tessitura: line.histogram ? tessitura(line.histogram) : null } : null };
   });
   return {
     roles: grid,
     singers: singerRows.map((row) => {
-      const range = ranges.get(row.personId)?.best ?? null;
+      const best = ranges.get(row.personId)?.best ?? null;
       return {
         ...row,
-        range,
+        range: best && { low: best.low, high: best.high, comfortableLow: best.comfortableLow, comfortableHigh: best.comfortableHigh, kind: best.kind },
         calledBackFor: [...new Set(marked.filter((m) => m.personId === row.personId).map((m) => m.roleId))],
         answer: answers.find((a) => a.personId === row.personId)?.answer ?? null,
         cells: Object.fromEntries(
           roleRows.map((role) => {
             const choice = chosen.find((c) => c.personId === row.personId && c.roleId === role.id);
-            return [role.id, cellOf(range, whole.get(role.id) ?? null, choice ? { state: choice.state, kind: choice.kind, version: choice.version } : null)];
+            return [role.id, { ...fitWords(best, whole.get(role.id)), choice: choice ? { state: choice.state, kind: choice.kind, version: choice.version } : null }];
           }),
         ),
       };
     }),
     castPublished: scope.castPublished,
     mayChoose: can(actor, "casting:choose", { companyId: scope.companyId, productionId: scope.id }),
+    zone: scope.zone,
+    locale: scope.locale,
   };
-}
-
-function cellOf(range: RangeOnFile | null, line: VocalLine | null, choice: CastingChoice | null): CastingCell {
-  if (!line) return { verdict: null, words: "Role has no line yet", choice };
-  if (!range) return { verdict: null, words: "No range on file", choice };
-  const fit = rangeFit(toSingerRange(range), line);
-  return { verdict: fit.verdict, words: fitInWords(fit), choice };
 }
 
 export type FitDetail = {

@@ -4,7 +4,12 @@ import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/auth/define-action";
 import * as drafts from "@/lib/data/callbacks/draft";
 import * as publishing from "@/lib/data/callbacks/publish";
-import { changeRoundSchema, markSchema, publishRoundSchema, startRoundSchema } from "@/lib/schemas/callbacks";
+import {
+  changeRoundSchema,
+  markSchema,
+  publishRoundSchema,
+  startRoundSchema,
+} from "@/lib/schemas/callbacks";
 
 export const startRound = defineAction({ input: startRoundSchema }, async (input, actor) => {
   const roundId = await drafts.startRound(actor, input);
@@ -17,7 +22,9 @@ export const changeRound = defineAction({ input: changeRoundSchema }, async (inp
   revalidatePath(`/productions/${input.productionId}/callbacks`);
 });
 
-export const setMark = defineAction({ input: markSchema }, (input, actor) => drafts.setMark(actor, input));
+export const setMark = defineAction({ input: markSchema }, (input, actor) =>
+  drafts.setMark(actor, input),
+);
 
 export const publishRound = defineAction({ input: publishRoundSchema }, async (input, actor) => {
   const counts = await publishing.publishRound(actor, input);

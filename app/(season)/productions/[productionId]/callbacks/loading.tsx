@@ -1,0 +1,11 @@
+import { Skeleton, SkeletonRows } from "@/components/ui/skeleton";
+
+export default function CallbacksLoading() {
+  return (
+    <div>
+      <Skeleton className="h-11 w-48" />
+      <Skeleton className="mt-2 mb-6 h-5 w-full max-w-md" />
+      <SkeletonRows rows={8} label="The callback list is on its way" />
+    </div>
+  );
+}
