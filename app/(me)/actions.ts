@@ -19,10 +19,13 @@ export const answerSlot = defineAction({ input: answerSlotSchema }, async (input
   revalidatePath("/me");
 });
 
-export const answerCallback = defineAction({ input: answerCallbackSchema }, async (input, actor) => {
-  await writeCallbackAnswer(actor, input);
-  revalidatePath("/me");
-});
+export const answerCallback = defineAction(
+  { input: answerCallbackSchema },
+  async (input, actor) => {
+    await writeCallbackAnswer(actor, input);
+    revalidatePath("/me");
+  },
+);
 
 export const claimRange = defineAction({ input: claimRangeSchema }, async (input, actor) => {
   await writeRange(actor, input);
@@ -46,7 +49,10 @@ export const restoreConflicts = defineAction({ input: conflictIdsSchema }, async
 });
 
 /** An invitation to the address that is signed in already: no link is needed. */
-export const joinCompany = defineAction({ input: z.object({ invitationId: idField }) }, async ({ invitationId }, actor) => {
-  await acceptOwnInvitation(actor, invitationId);
-  revalidatePath("/me", "layout");
-});
+export const joinCompany = defineAction(
+  { input: z.object({ invitationId: idField }) },
+  async ({ invitationId }, actor) => {
+    await acceptOwnInvitation(actor, invitationId);
+    revalidatePath("/me", "layout");
+  },
+);

@@ -12,25 +12,38 @@ import { sourceOf } from "@/lib/auth/source-of";
 import { acceptInvitation as accept } from "@/lib/data/invitations";
 import { countTry, RATES } from "@/lib/data/rate-limit";
 import { checkPassword, countSignInMail } from "@/lib/data/sign-in";
-import { acceptInvitationSchema, passwordSignInSchema, requestLinkSchema } from "@/lib/schemas/sign-in";
+import {
+  acceptInvitationSchema,
+  passwordSignInSchema,
+  requestLinkSchema,
+} from "@/lib/schemas/sign-in";
 import { AFTER_SIGN_IN } from "./after-sign-in";
 
 /** The same answer for every address: nobody learns from it which ones are known. */
-export const requestLink = definePublicAction({ input: requestLinkSchema }, async ({ email, to }) => {
-  await countSignInMail(email, sourceOf(await headers()));
-  await sendLink(email, ownPath(to, AFTER_SIGN_IN));
-  redirect("/sign-in/sent");
-});
+export const requestLink = definePublicAction(
+  { input: requestLinkSchema },
+  async ({ email, to }) => {
+    await countSignInMail(email, sourceOf(await headers()));
+    await sendLink(email, ownPath(to, AFTER_SIGN_IN));
+    redirect("/sign-in/sent");
+  },
+);
 
-export const signInWithPassword = definePublicAction({ input: passwordSignInSchema }, async ({ email, password, to }) => {
-  await signInAs(await checkPassword(email, password, sourceOf(await headers())));
-  redirect(ownPath(to, AFTER_SIGN_IN) as Route);
-});
+export const signInWithPassword = definePublicAction(
+  { input: passwordSignInSchema },
+  async ({ email, password, to }) => {
+    await signInAs(await checkPassword(email, password, sourceOf(await headers())));
+    redirect(ownPath(to, AFTER_SIGN_IN) as Route);
+  },
+);
 
 /** The link came to the address it is for, as a sign-in link would: accepting signs its owner in. */
-export const acceptInvitation = definePublicAction({ input: acceptInvitationSchema }, async ({ token, to }) => {
-  await countTry(RATES.linkFromSource, sourceOf(await headers()));
-  const userId = await accept(token);
-  if ((await currentUserId()) !== userId) await signInAs(userId);
-  redirect(ownPath(to, AFTER_SIGN_IN) as Route);
-});
+export const acceptInvitation = definePublicAction(
+  { input: acceptInvitationSchema },
+  async ({ token, to }) => {
+    await countTry(RATES.linkFromSource, sourceOf(await headers()));
+    const userId = await accept(token);
+    if ((await currentUserId()) !== userId) await signInAs(userId);
+    redirect(ownPath(to, AFTER_SIGN_IN) as Route);
+  },
+);

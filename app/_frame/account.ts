@@ -12,7 +12,10 @@ const initialsOf = (name: string): string =>
     .toUpperCase();
 
 /** The person and their menu, as the frame takes them. */
-export function accountOf(actor: Actor, signOut: () => Promise<unknown>): NonNullable<AppFrameProps["account"]> {
+export function accountOf(
+  actor: Actor,
+  signOut: () => Promise<unknown>,
+): NonNullable<AppFrameProps["account"]> {
   const entries: MenuEntry[] = [
     { kind: "heading", label: actor.name },
     { kind: "link", label: "My page", href: "/me" },

@@ -41,7 +41,7 @@ export async function seedCandlemas(tx: Tx, companies: Companies): Promise<strin
     ["First Voice", "ensemble", 4], ["Second Voice", "ensemble", 4], ["Third Voice", "ensemble", 4], ["Fourth Voice", "ensemble", 4],
   ]);
   const production = { id: productionId, companyId };
-  await addReadNumber(tx, production, 1, "1", "stanford-sailing-at-dawn.mxl", { Solo: "The Ferryman", Soprano: "First Voice", Alto: "Second Voice", Tenor: "Third Voice", Bass: "Fourth Voice" }, roleIds);
+  await addReadNumber(tx, production, 1, "1", "stanford-sailing-at-dawn.mxl", { Solo: ["The Ferryman", "8vb"], Soprano: "First Voice", Alto: "Second Voice", Tenor: "Third Voice", Bass: "Fourth Voice" }, roleIds);
   await addReadNumber(tx, production, 2, "2", "beach-fairy-lullaby.mxl", { Voice: "The Candle-maker" }, roleIds);
   await addReadNumber(tx, production, 3, "3", "liliuokalani-aloha-oe.mxl", { Voice: "The Pedlar’s Daughter", Women: "Second Voice", Men: "Fourth Voice" }, roleIds);
   await addReadNumber(tx, production, 4, "4", "sullivan-the-lost-chord.mxl", { Voice: "The Candle-maker" }, roleIds);

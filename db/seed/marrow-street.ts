@@ -33,7 +33,7 @@ export async function seedMarrowStreet(tx: Tx, companies: Companies): Promise<st
   const opening = await addTypedNumber(tx, productionId, 1, { label: "1", title: "Shutters Up", key: "C", fifths: 0, seconds: 210, bars: 104, tempo: 120, lines: { Tessaly: [57, 74], "Mr Quill": [45, 62], Alto: [55, 72], Tenor: [48, 67] } }, roleIds);
   const duet = await addTypedNumber(tx, productionId, 2, { label: "2", title: "Across the Landing", key: "A♭", fifths: -4, seconds: 190, bars: 70, tempo: 76, lines: { Tessaly: [58, 75], Corrin: [51, 68] } }, roleIds);
   const rent = await addTypedNumber(tx, productionId, 3, { label: "3", title: "The Rent Song", key: "D", fifths: 2, seconds: 150, bars: 96, tempo: 144, lines: { "The Landlady": [54, 71], "Mr Quill": [45, 64], Corrin: [50, 66] } }, roleIds);
-  const partsong = await addReadNumber(tx, { id: productionId, companyId }, 4, "4", "sullivan-the-long-day-closes.mxl", { P1: "Alto", P2: "Tenor", P3: "First bass", P4: "Second bass" }, roleIds);
+  const partsong = await addReadNumber(tx, { id: productionId, companyId }, 4, "4", "sullivan-the-long-day-closes.mxl", { P1: ["Alto", "8vb"], P2: "Tenor", P3: "First bass", P4: "Second bass" }, roleIds);
   const lullaby = await addTypedNumber(tx, productionId, 5, { label: "5", title: "Upstairs Window", key: "F", fifths: -1, seconds: 175, bars: 60, tempo: 66, lines: { Tessaly: [57, 77] } }, roleIds);
   const finale = await addTypedNumber(tx, productionId, 6, { label: "6", title: "Marrow Street, Morning", key: "G", fifths: 1, seconds: 260, bars: 130, tempo: 108, lines: { Tessaly: [58, 76], Corrin: [50, 69], "The Landlady": [55, 72], "Mr Quill": [43, 63], Alto: [55, 72], Tenor: [48, 67], "First bass": [43, 62], "Second bass": [41, 58] } }, roleIds);
 

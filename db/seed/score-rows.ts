@@ -3,6 +3,7 @@ import path from "node:path";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
 import { files, numbers, roles, scoreParts, scores, vocalLines } from "@/db/schema";
+import { lineOfPart } from "@/lib/formats/musicxml/line-of-part";
 import { readScore } from "@/lib/formats/musicxml/read-score";
 import { pitchName } from "@/lib/music/pitch-name";
 import { storeFile } from "@/lib/services/storage/storage";
@@ -54,6 +55,9 @@ export async function addTypedNumber(tx: Tx, productionId: string, place: number
   return id;
 }
 
+/** A part for one role; "8vb" puts a part that is printed an octave high where it is sung. */
+type PartFor = string | readonly [role: string, octave: "8vb"];
+
 /** A number read from one of the public-domain scores, each named part going to a role. Returns the number's id. */
 export async function addReadNumber(
   tx: Tx,
@@ -61,7 +65,7 @@ export async function addReadNumber(
   place: number,
   label: string,
   file: string,
-  parts: Record<string, string>,
+  parts: Record<string, PartFor>,
   roleIds: Record<string, string>,
 ): Promise<string> {
   const bytes = await readFile(path.join(import.meta.dirname, "music", file));
@@ -83,21 +87,28 @@ export async function addReadNumber(
     bars: score.measures.written, seconds: Math.round(minutes === null ? (quarters / 90) * 60 : minutes * 60),
   });
   for (const [index, part] of score.parts.entries()) {
-    const figures = part.performed ?? part.written;
+    const line = lineOfPart(part);
+    const goesTo = Object.entries(parts).find(([name]) => part.name === name || part.id === name)?.[1];
+    const role = typeof goesTo === "string" ? goesTo : goesTo?.[0];
+    const shift = typeof goesTo === "object" ? -12 : 0;
     const partRow = newId();
     await tx.insert(scoreParts).values({
-      id: partRow, scoreId, partId: part.id, place: index, name: part.name.slice(0, 160), vocal: part.vocal,
-      low: part.low?.midi ?? null, high: part.high?.midi ?? null, lowSpelled: part.low?.spelling ?? null, highSpelled: part.high?.spelling ?? null,
-      histogram: figures?.histogram ?? null, warnings: part.warnings.map((w) => w.message),
+      id: partRow, scoreId, partId: part.id, place: index, name: part.name.slice(0, 160), vocal: part.vocal, octaveShift: shift,
+      low: line?.low ?? null, high: line?.high ?? null, lowSpelled: part.low?.spelling ?? null, highSpelled: part.high?.spelling ?? null,
+      histogram: line?.histogram ?? null, warnings: part.warnings.map((w) => w.message),
     });
-    const role = Object.entries(parts).find(([name]) => part.name === name || part.id === name)?.[1];
     const roleId = role === undefined ? undefined : roleIds[role];
-    if (roleId === undefined || !part.low || !part.high || !figures) continue;
+    if (roleId === undefined || !part.low || !part.high || !line) continue;
+    const histogram = Object.fromEntries(Object.entries(line.histogram ?? {}).map(([pitch, sung]) => [String(Number(pitch) + shift), sung]));
     await tx.insert(vocalLines).values({
-      id: newId(), roleId, numberId, scorePartId: partRow, partKey: part.id, source: "read", low: part.low.midi, high: part.high.midi,
-      lowSpelled: part.low.spelling, highSpelled: part.high.spelling, histogram: figures.histogram, quarters: figures.quarters,
-      lowBar: part.low.bar.slice(0, 12), highBar: part.high.bar.slice(0, 12),
+      id: newId(), roleId, numberId, scorePartId: partRow, partKey: part.id, source: "read", low: line.low + shift, high: line.high + shift,
+      lowSpelled: lowerOctave(part.low.spelling, shift), highSpelled: lowerOctave(part.high.spelling, shift), histogram,
+      quarters: (part.performed ?? part.written)?.quarters ?? null, lowBar: part.low.bar.slice(0, 12), highBar: part.high.bar.slice(0, 12),
     });
   }
   return numberId;
+}
+
+function lowerOctave(spelling: string, shift: number): string {
+  return spelling.replace(/-?\d+$/, (octave) => String(Number(octave) + shift / 12));
 }

@@ -28,7 +28,13 @@ export type ItemOnDay = {
   singer: SingerOnDay | null;
 };
 
-export type PianistOnDay = { id: string; personId: string; name: string; startsAt: string; endsAt: string };
+export type PianistOnDay = {
+  id: string;
+  personId: string;
+  name: string;
+  startsAt: string;
+  endsAt: string;
+};
 
 export type RoomOnDay = {
   id: string;

@@ -21,7 +21,8 @@ export type DayPlan = {
 export type RoomLaidOut = { roomId: string; opensAt: Date; closesAt: Date; items: DayItem[] };
 
 /** `message` says what stands in the way of a room's day and what to change. */
-export type DayLaidOut = { ok: true; rooms: RoomLaidOut[] } | { ok: false; roomId: string | null; message: string };
+export type DayLaidOut =
+  { ok: true; rooms: RoomLaidOut[] } | { ok: false; roomId: string | null; message: string };
 
 /**
  * Lays out every room of an audition day in its zone: slots, rests, lunch and holds (see `buildSlots`).
@@ -39,18 +40,29 @@ export function layOutDay(plan: DayPlan, zone: string): DayLaidOut {
         opens,
         closes,
         slotMinutes: plan.slotMinutes,
-        ...(plan.restMinutes > 0 && { rest: { afterMinutes: plan.restAfterMinutes, restMinutes: plan.restMinutes } }),
+        ...(plan.restMinutes > 0 && {
+          rest: { afterMinutes: plan.restAfterMinutes, restMinutes: plan.restMinutes },
+        }),
         ...(plan.lunchMinutes > 0 &&
           plan.lunchFrom !== null &&
           plan.lunchTo !== null && {
-            lunch: { minutes: plan.lunchMinutes, windowFrom: at(plan.lunchFrom), windowTo: at(plan.lunchTo) },
+            lunch: {
+              minutes: plan.lunchMinutes,
+              windowFrom: at(plan.lunchFrom),
+              windowTo: at(plan.lunchTo),
+            },
           }),
         ...(plan.hold && { holdEveryMinutes: 60 }),
       });
       if (!result.ok) return { ok: false, roomId: room.roomId, message: result.message };
       rooms.push({ roomId: room.roomId, opensAt: opens, closesAt: closes, items: result.items });
     } catch (error) {
-      if (error instanceof RangeError) return { ok: false, roomId: room.roomId, message: "Choose a day and write the times like 10:00." };
+      if (error instanceof RangeError)
+        return {
+          ok: false,
+          roomId: room.roomId,
+          message: "Choose a day and write the times like 10:00.",
+        };
       throw error;
     }
   }

@@ -24,13 +24,19 @@ export type Fill = {
  * bipartite graph", Naval Research Logistics Quarterly 14; cited from memory). No plan places more.
  */
 export function planFill(slots: readonly FreeSlot[], singers: readonly Asking[]): Fill {
-  const inOrder = [...slots].sort((a, b) => a.startsAt.getTime() - b.startsAt.getTime() || a.roomPlace - b.roomPlace);
+  const inOrder = [...slots].sort(
+    (a, b) => a.startsAt.getTime() - b.startsAt.getTime() || a.roomPlace - b.roomPlace,
+  );
   const suits = (slot: FreeSlot, singer: Asking): boolean =>
-    (singer.notBefore === null || slot.startsAt >= singer.notBefore) && (singer.notAfter === null || slot.endsAt <= singer.notAfter);
-  const deadline = (singer: Asking): number => singer.notAfter?.getTime() ?? Number.POSITIVE_INFINITY;
+    (singer.notBefore === null || slot.startsAt >= singer.notBefore) &&
+    (singer.notAfter === null || slot.endsAt <= singer.notAfter);
+  const deadline = (singer: Asking): number =>
+    singer.notAfter?.getTime() ?? Number.POSITIVE_INFINITY;
 
   const left = new Set(
-    [...singers].sort((a, b) => (deadline(a) === deadline(b) ? a.place - b.place : deadline(a) - deadline(b))),
+    [...singers].sort((a, b) =>
+      deadline(a) === deadline(b) ? a.place - b.place : deadline(a) - deadline(b),
+    ),
   );
   const placements: Fill["placements"] = [];
   for (const slot of inOrder) {
@@ -45,7 +51,9 @@ export function planFill(slots: readonly FreeSlot[], singers: readonly Asking[])
     .sort((a, b) => a.place - b.place)
     .map((singer) => ({
       signUpId: singer.signUpId,
-      reason: inOrder.some((slot) => suits(slot, singer)) ? ("taken" as const) : ("outside" as const),
+      reason: inOrder.some((slot) => suits(slot, singer))
+        ? ("taken" as const)
+        : ("outside" as const),
     }));
   return { placements, unplaced };
 }

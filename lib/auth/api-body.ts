@@ -5,9 +5,13 @@ import { ApiError } from "./define-api-route";
 const MAX_JSON_BYTES = 1_000_000;
 
 /** The JSON body of a request, checked by its schema. Throws 413, or 400 with where it is wrong. */
-export async function readJson<S extends z.ZodType>(request: Request, schema: S): Promise<z.output<S>> {
+export async function readJson<S extends z.ZodType>(
+  request: Request,
+  schema: S,
+): Promise<z.output<S>> {
   const text = await request.text();
-  if (text.length > MAX_JSON_BYTES) throw new ApiError(413, "request.too-large", "Send at most 1 MB of JSON.");
+  if (text.length > MAX_JSON_BYTES)
+    throw new ApiError(413, "request.too-large", "Send at most 1 MB of JSON.");
   let value: unknown;
   try {
     value = JSON.parse(text);
@@ -17,17 +21,33 @@ export async function readJson<S extends z.ZodType>(request: Request, schema: S)
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   const issue = parsed.error.issues[0];
-  throw new ApiError(400, "request.invalid", issue?.message ?? "The body has not the form it should have.", issue?.path.join("."));
+  throw new ApiError(
+    400,
+    "request.invalid",
+    issue?.message ?? "The body has not the form it should have.",
+    issue?.path.join("."),
+  );
 }
 
 /** The one uploaded file of a multipart request, field `file`. Throws 400, 413 or 415. */
-export async function readFileField(request: Request, maxBytes: number): Promise<{ name: string; bytes: Uint8Array }> {
+export async function readFileField(
+  request: Request,
+  maxBytes: number,
+): Promise<{ name: string; bytes: Uint8Array }> {
   if (!(request.headers.get("content-type") ?? "").startsWith("multipart/form-data")) {
-    throw new ApiError(415, "request.not-multipart", "Send the file as multipart/form-data, in the field `file`.");
+    throw new ApiError(
+      415,
+      "request.not-multipart",
+      "Send the file as multipart/form-data, in the field `file`.",
+    );
   }
   // The length is told before the body is read; a body that lies about it is counted below.
   if (Number(request.headers.get("content-length") ?? 0) > maxBytes + 10_000) {
-    throw new ApiError(413, "request.too-large", `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`);
+    throw new ApiError(
+      413,
+      "request.too-large",
+      `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`,
+    );
   }
   let form: FormData;
   try {
@@ -36,7 +56,13 @@ export async function readFileField(request: Request, maxBytes: number): Promise
     throw new ApiError(400, "request.broken-upload", "The upload broke off. Send it again.");
   }
   const file = form.get("file");
-  if (!(file instanceof File)) throw new ApiError(400, "request.no-file", "There is no file in the field `file`.", "file");
-  if (file.size > maxBytes) throw new ApiError(413, "request.too-large", `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`);
+  if (!(file instanceof File))
+    throw new ApiError(400, "request.no-file", "There is no file in the field `file`.", "file");
+  if (file.size > maxBytes)
+    throw new ApiError(
+      413,
+      "request.too-large",
+      `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`,
+    );
   return { name: file.name, bytes: new Uint8Array(await file.arrayBuffer()) };
 }

@@ -36,10 +36,20 @@ const adapter: Adapter = {
 
 const nextAuth = NextAuth({
   adapter,
-  session: { strategy: "database", maxAge: SESSION_DAYS * 86_400, updateAge: 86_400, generateSessionToken: newSecret },
+  session: {
+    strategy: "database",
+    maxAge: SESSION_DAYS * 86_400,
+    updateAge: 86_400,
+    generateSessionToken: newSecret,
+  },
   secret: env().AUTH_SECRET,
   trustHost: true,
-  pages: { signIn: "/sign-in", error: "/sign-in", verifyRequest: "/sign-in/sent", signOut: "/account" },
+  pages: {
+    signIn: "/sign-in",
+    error: "/sign-in",
+    verifyRequest: "/sign-in/sent",
+    signOut: "/account",
+  },
   providers: [
     Nodemailer({
       server: env().SMTP_URL,
@@ -75,5 +85,7 @@ const CALLBACK = "/api/auth/callback/nodemailer";
  */
 export const handlers = {
   GET: (request: NextRequest): Promise<Response> =>
-    request.nextUrl.pathname === CALLBACK ? nextAuth.handlers.GET(request) : Promise.resolve(new Response(null, { status: 404 })),
+    request.nextUrl.pathname === CALLBACK
+      ? nextAuth.handlers.GET(request)
+      : Promise.resolve(new Response(null, { status: 404 })),
 };

@@ -55,8 +55,23 @@ async function answer<T>(work: () => Promise<T>): Promise<ActionResult<T>> {
 export function describeError(error: unknown): ActionError {
   const known = asAppError(error);
   if (known) {
-    return { code: known.code, message: known.message, ...(known.fields ? { fields: known.fields } : {}) };
+    return {
+      code: known.code,
+      message: known.message,
+      ...(known.fields ? { fields: known.fields } : {}),
+    };
   }
-  log.error({ err: error instanceof Error ? { type: error.name, message: error.message, stack: error.stack } : "unknown" }, "fault");
-  return { code: "fault", message: "Something went wrong on our side. Nothing you typed is lost: try again in a moment." };
+  log.error(
+    {
+      err:
+        error instanceof Error
+          ? { type: error.name, message: error.message, stack: error.stack }
+          : "unknown",
+    },
+    "fault",
+  );
+  return {
+    code: "fault",
+    message: "Something went wrong on our side. Nothing you typed is lost: try again in a moment.",
+  };
 }

@@ -39,12 +39,16 @@ const REASONS: Record<ErrorCode, string> = {
  * Makes a route of the public API: a personal token or the session cookie, a rate limit per login, JSON out, and errors as
  * `{error:{code:"area.reason", message, path?}}` with their status.
  */
-export function defineApiRoute(run: (request: Request) => Promise<unknown>): (request: Request) => Promise<Response> {
+export function defineApiRoute(
+  run: (request: Request) => Promise<unknown>,
+): (request: Request) => Promise<Response> {
   return async (request) => {
     try {
       const userId = await identify(request);
       await countTry(RATES.apiOfToken, userId);
-      return Response.json(await run(request), { headers: { "cache-control": "private, no-store" } });
+      return Response.json(await run(request), {
+        headers: { "cache-control": "private, no-store" },
+      });
     } catch (error) {
       return refuse(error);
     }
@@ -56,12 +60,22 @@ async function identify(request: Request): Promise<string> {
   if (header !== null) {
     const token = /^Bearer\s+(\S+)$/i.exec(header)?.[1];
     const userId = token === undefined ? null : await userOfToken(token);
-    if (userId === null) throw new ApiError(401, "auth.token", "This token is not known or was revoked. Make a new one on the account page.");
+    if (userId === null)
+      throw new ApiError(
+        401,
+        "auth.token",
+        "This token is not known or was revoked. Make a new one on the account page.",
+      );
     return userId;
   }
   assertOwnOrigin(request);
   const userId = await currentUserId();
-  if (userId === null) throw new ApiError(401, "auth.required", "Send a personal token as `Authorization: Bearer …`; make one on the account page.");
+  if (userId === null)
+    throw new ApiError(
+      401,
+      "auth.required",
+      "Send a personal token as `Authorization: Bearer …`; make one on the account page.",
+    );
   return userId;
 }
 
@@ -72,15 +86,27 @@ function refuse(error: unknown): Response {
   const known = asAppError(error);
   if (known) {
     const response = answer(known.status, REASONS[known.code], known.message);
-    if (known.retryAfter !== undefined) response.headers.set("retry-after", String(known.retryAfter));
+    if (known.retryAfter !== undefined)
+      response.headers.set("retry-after", String(known.retryAfter));
     return response;
   }
-  log.error({ err: error instanceof Error ? { type: error.name, message: error.message, stack: error.stack } : "unknown" }, "fault");
+  log.error(
+    {
+      err:
+        error instanceof Error
+          ? { type: error.name, message: error.message, stack: error.stack }
+          : "unknown",
+    },
+    "fault",
+  );
   return answer(500, "server.fault", "Something went wrong on our side. Try again in a moment.");
 }
 
 function answer(status: number, code: string, message: string, path?: string): Response {
   const headers: Record<string, string> = { "cache-control": "no-store" };
   if (status === 401) headers["www-authenticate"] = 'Bearer realm="Cembalo"';
-  return Response.json({ error: { code, message, ...(path === undefined ? {} : { path }) } }, { status, headers });
+  return Response.json(
+    { error: { code, message, ...(path === undefined ? {} : { path }) } },
+    { status, headers },
+  );
 }

@@ -6,12 +6,14 @@ import { AppError } from "@/lib/errors";
 export function assertOwnOrigin(request: Request): void {
   if (request.method === "GET" || request.method === "HEAD") return;
   const site = request.headers.get("sec-fetch-site");
-  if (site !== null && site !== "same-origin" && site !== "none") throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
+  if (site !== null && site !== "same-origin" && site !== "none")
+    throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
   const origin = request.headers.get("origin");
   if (origin === null) return;
   const host = request.headers.get("host");
   const own = [new URL(env().AUTH_URL).host, host];
-  if (!own.includes(hostOf(origin))) throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
+  if (!own.includes(hostOf(origin)))
+    throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
 }
 
 // "null" is what sandboxed pages send as their origin: no host of ours.

@@ -8,7 +8,13 @@ const LONGEST = 1000;
  */
 export function ownPath(raw: unknown, fallback: string): string {
   // eslint-disable-next-line no-control-regex -- these are what browsers drop or read as a slash
-  if (typeof raw !== "string" || raw.length > LONGEST || !raw.startsWith("/") || /[\\\u0000-\u001f\u007f]/.test(raw)) return fallback;
+  if (
+    typeof raw !== "string" ||
+    raw.length > LONGEST ||
+    !raw.startsWith("/") ||
+    /[\\\u0000-\u001f\u007f]/.test(raw)
+  )
+    return fallback;
   let url: URL;
   try {
     url = new URL(raw, SOMEWHERE);

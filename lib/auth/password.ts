@@ -26,7 +26,11 @@ export async function verifyPassword(password: string, stored: string): Promise<
   const [kind, n, r, p, salt, key] = stored.split("$");
   if (kind !== "scrypt" || !n || !r || !p || !salt || !key) return false;
   const expected = Buffer.from(key, "base64url");
-  const actual = await derive(password, Buffer.from(salt, "base64url"), { N: Number(n), r: Number(r), p: Number(p) });
+  const actual = await derive(password, Buffer.from(salt, "base64url"), {
+    N: Number(n),
+    r: Number(r),
+    p: Number(p),
+  });
   return expected.length === actual.length && timingSafeEqual(expected, actual);
 }
 

@@ -14,5 +14,6 @@ export async function sendLink(email: string, redirectTo: string): Promise<void>
     if (error instanceof AuthError) throw new AppError("refused", NOT_SENT);
     throw error;
   }
-  if (typeof answer !== "string" || new URL(answer, "http://own.invalid").searchParams.has("error")) throw new AppError("refused", NOT_SENT);
+  if (typeof answer !== "string" || new URL(answer, "http://own.invalid").searchParams.has("error"))
+    throw new AppError("refused", NOT_SENT);
 }

@@ -7,7 +7,8 @@ export const SESSION_DAYS = 30;
 
 const behindHttps = (): boolean => env().AUTH_URL.startsWith("https:");
 
-const attributes = () => ({ httpOnly: true, sameSite: "lax", path: "/", secure: behindHttps() }) as const;
+const attributes = () =>
+  ({ httpOnly: true, sameSite: "lax", path: "/", secure: behindHttps() }) as const;
 
 /** The name Auth.js gives its session cookie: with `__Secure-` behind HTTPS. */
 export function sessionCookieName(): string {

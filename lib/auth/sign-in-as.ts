@@ -10,7 +10,11 @@ import { startSession } from "./start-session";
  */
 export async function signInAs(userId: string): Promise<void> {
   const before = await currentSessionToken();
-  const session = { sessionToken: newSecret(), userId, expires: new Date(Date.now() + SESSION_DAYS * 86_400_000) };
+  const session = {
+    sessionToken: newSecret(),
+    userId,
+    expires: new Date(Date.now() + SESSION_DAYS * 86_400_000),
+  };
   await startSession(session);
   await setSessionCookie(session.sessionToken, session.expires);
   if (before) await deleteSession(before);

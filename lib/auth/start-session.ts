@@ -12,10 +12,26 @@ export async function startSession(session: AdapterSession): Promise<AdapterSess
 
 /** "Firefox on Android" from a user-agent string; "An unknown device" when it says nothing. */
 export function describeDevice(agent: string): string {
-  const browser =
-    /Edg\//.test(agent) ? "Edge" : /Firefox\//.test(agent) ? "Firefox" : /Chrom(e|ium)\//.test(agent) ? "Chrome" : /Safari\//.test(agent) ? "Safari" : null;
-  const system =
-    /iPhone|iPad/.test(agent) ? "iOS" : /Android/.test(agent) ? "Android" : /Windows/.test(agent) ? "Windows" : /Mac OS X/.test(agent) ? "macOS" : /Linux|X11/.test(agent) ? "Linux" : null;
+  const browser = /Edg\//.test(agent)
+    ? "Edge"
+    : /Firefox\//.test(agent)
+      ? "Firefox"
+      : /Chrom(e|ium)\//.test(agent)
+        ? "Chrome"
+        : /Safari\//.test(agent)
+          ? "Safari"
+          : null;
+  const system = /iPhone|iPad/.test(agent)
+    ? "iOS"
+    : /Android/.test(agent)
+      ? "Android"
+      : /Windows/.test(agent)
+        ? "Windows"
+        : /Mac OS X/.test(agent)
+          ? "macOS"
+          : /Linux|X11/.test(agent)
+            ? "Linux"
+            : null;
   if (!browser && !system) return "An unknown device";
   return [browser ?? "A browser", system ? `on ${system}` : ""].join(" ").trim();
 }

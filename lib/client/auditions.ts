@@ -1,16 +1,7 @@
 import { queryOptions } from "@tanstack/react-query";
 import type { AuditionDayView, ItemOnDay, SingerOnDay } from "@/lib/auditions/day-view";
 import type { DoorView } from "@/lib/auditions/door-view";
-
-async function readJson<T>(address: string): Promise<T> {
-  const response = await fetch(address, { headers: { accept: "application/json" } });
-  if (response.ok) return (await response.json()) as T;
-  const body = (await response.json().catch(() => null)) as { error?: { message?: string } } | null;
-  throw new Error(
-    body?.error?.message ??
-      "The server did not answer. What you see may be old: check the connection.",
-  );
-}
+import { readJson } from "./read-json";
 
 /** One audition day, read again every few seconds while it is looked at. */
 export function auditionDayQuery(productionId: string, dayId: string) {

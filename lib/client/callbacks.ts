@@ -8,12 +8,11 @@ export type DraftSinger = AsJson<CallbackSinger>;
 export type DraftRound = NonNullable<Draft["round"]>;
 export type DraftRole = Draft["roles"][number];
 
-/** The callback list being drafted, read again every few seconds while it is looked at. */
+/** The callback list being drafted as the server has it. */
 export function callbacksQuery(productionId: string) {
   return queryOptions({
     queryKey: ["callbacks", productionId],
     queryFn: () => readJson<Draft>(`/api/productions/${productionId}/callbacks`),
-    refetchInterval: 4_000,
   });
 }
 

@@ -22,7 +22,14 @@ export type Account = {
   email: string;
   passwordSetAt: Date | null;
   /** What each company has written down of this person. */
-  records: { company: string; name: string; email: string | null; phone: string | null; pronouns: string | null; positions: string[] }[];
+  records: {
+    company: string;
+    name: string;
+    email: string | null;
+    phone: string | null;
+    pronouns: string | null;
+    positions: string[];
+  }[];
 };
 
 /** What the account page shows: the login's own, and what companies keep of its owner. */
@@ -31,7 +38,12 @@ export async function readAccount(actor: Actor): Promise<Account> {
     .select({ updatedAt: passwordHashes.updatedAt })
     .from(passwordHashes)
     .where(eq(passwordHashes.userId, actor.userId));
-  return { name: actor.name, email: actor.email, passwordSetAt: password?.updatedAt ?? null, records: await readRecords(actor) };
+  return {
+    name: actor.name,
+    email: actor.email,
+    passwordSetAt: password?.updatedAt ?? null,
+    records: await readRecords(actor),
+  };
 }
 
 async function readRecords(actor: Actor): Promise<Account["records"]> {
@@ -51,13 +63,19 @@ async function readRecords(actor: Actor): Promise<Account["records"]> {
     .from(people)
     .innerJoin(companies, eq(companies.id, people.companyId))
     .leftJoin(positions, and(eq(positions.personId, people.id), isNull(positions.endedAt)))
-    .leftJoin(productions, and(eq(productions.id, positions.productionId), isNull(productions.removedAt)))
+    .leftJoin(
+      productions,
+      and(eq(productions.id, positions.productionId), isNull(productions.removedAt)),
+    )
     .where(inArray(people.id, own))
     .orderBy(asc(companies.name), asc(productions.title), asc(positions.kind));
   const records = new Map<string, Account["records"][number]>();
   for (const { personId, kind, production, ...record } of rows) {
     const entry = records.get(personId) ?? { ...record, positions: [] };
-    if (kind !== null) entry.positions.push(production === null ? POSITION_NAMES[kind] : `${POSITION_NAMES[kind]}, ${production}`);
+    if (kind !== null)
+      entry.positions.push(
+        production === null ? POSITION_NAMES[kind] : `${POSITION_NAMES[kind]}, ${production}`,
+      );
     records.set(personId, entry);
   }
   return [...records.values()];
@@ -73,7 +91,8 @@ export async function setPassword(
   currentToken: string | null,
 ): Promise<void> {
   const weakness = passwordWeakness(input.password, { email: actor.email, name: actor.name });
-  if (weakness !== null) throw new AppError("invalid", undefined, { fields: { password: weakness } });
+  if (weakness !== null)
+    throw new AppError("invalid", undefined, { fields: { password: weakness } });
   await proveOwner(actor, input.current, currentToken);
   // Slow on purpose: before the transaction, so that no lock waits for it.
   const hash = await hashPassword(input.password);
@@ -87,11 +106,16 @@ export async function setPassword(
 }
 
 /** Removes the password: from then on only links by e-mail sign in. The same proof, mail and end of other sessions as a change. */
-export async function removePassword(actor: Actor, input: { current: string }, currentToken: string | null): Promise<void> {
+export async function removePassword(
+  actor: Actor,
+  input: { current: string },
+  currentToken: string | null,
+): Promise<void> {
   await proveOwner(actor, input.current, currentToken);
   await inTransaction(async (tx) => {
     const [result] = await tx.delete(passwordHashes).where(eq(passwordHashes.userId, actor.userId));
-    if (result.affectedRows === 0) throw new AppError("refused", "There is no password to remove: you sign in by e-mail link.");
+    if (result.affectedRows === 0)
+      throw new AppError("refused", "There is no password to remove: you sign in by e-mail link.");
     await tellChanged(tx, actor, currentToken);
   });
 }
@@ -106,7 +130,11 @@ export async function asksForPassword(actor: Actor, currentToken: string | null)
 }
 
 /** An unlocked phone that someone left lying about must not be enough to take an account over. */
-async function proveOwner(actor: Actor, current: string, currentToken: string | null): Promise<void> {
+async function proveOwner(
+  actor: Actor,
+  current: string,
+  currentToken: string | null,
+): Promise<void> {
   const [password] = await db
     .select({ hash: passwordHashes.hash })
     .from(passwordHashes)
@@ -114,7 +142,8 @@ async function proveOwner(actor: Actor, current: string, currentToken: string | 
   if (!password || (await isFresh(actor, currentToken))) return;
   await countTry(RATES.passwordOfAccount, actor.email);
   if (current !== "" && (await verifyPassword(current, password.hash))) return;
-  const message = "Write the password you have now. Forgotten? Sign out, sign in with a link by e-mail, and change it within the hour.";
+  const message =
+    "Write the password you have now. Forgotten? Sign out, sign in with a link by e-mail, and change it within the hour.";
   throw new AppError("invalid", undefined, { fields: { current: message } });
 }
 

@@ -49,7 +49,13 @@ export async function listOwnConflicts(actor: Actor, now = new Date()): Promise<
     .from(conflicts)
     .innerJoin(people, eq(people.id, conflicts.personId))
     .innerJoin(companies, eq(companies.id, people.companyId))
-    .where(and(inArray(conflicts.personId, own), isNull(conflicts.removedAt), gte(conflicts.endsAt, now)))
+    .where(
+      and(
+        inArray(conflicts.personId, own),
+        isNull(conflicts.removedAt),
+        gte(conflicts.endsAt, now),
+      ),
+    )
     .orderBy(asc(conflicts.localFrom), asc(conflicts.timeFrom), asc(companies.name));
   const entries = new Map<string, OwnConflict>();
   for (const { id, state, company, ...dates } of rows) {
@@ -66,13 +72,26 @@ export async function listOwnConflicts(actor: Actor, now = new Date()): Promise<
  * Writes that the actor cannot come, for each chosen company's record of them, in that company's zone. Telling the same
  * twice is telling it once. Returns the ids, for the way back. Throws `not-found` for a record that is not theirs.
  */
-export async function addConflict(actor: Actor, input: NewConflict, now = new Date()): Promise<string[]> {
+export async function addConflict(
+  actor: Actor,
+  input: NewConflict,
+  now = new Date(),
+): Promise<string[]> {
   for (const personId of input.personIds) assertOwn(actor, personId);
   return inTransaction(async (tx) => {
     // One writer a person at a time, so that a second press finds what the first wrote.
-    await tx.select({ id: people.id }).from(people).where(inArray(people.id, input.personIds)).for("update");
+    await tx
+      .select({ id: people.id })
+      .from(people)
+      .where(inArray(people.id, input.personIds))
+      .for("update");
     const told = await tx
-      .select({ personId: people.id, companyId: companies.id, zone: companies.zone, locale: companies.locale })
+      .select({
+        personId: people.id,
+        companyId: companies.id,
+        zone: companies.zone,
+        locale: companies.locale,
+      })
       .from(people)
       .innerJoin(companies, eq(companies.id, people.companyId))
       .where(inArray(people.id, input.personIds));
@@ -85,31 +104,73 @@ export async function addConflict(actor: Actor, input: NewConflict, now = new Da
 
 type Told = { personId: string; companyId: string; zone: string; locale: string };
 
-async function writeConflict(tx: Tx, actor: Actor, input: NewConflict, told: Told, now: Date): Promise<string> {
+async function writeConflict(
+  tx: Tx,
+  actor: Actor,
+  input: NewConflict,
+  told: Told,
+  now: Date,
+): Promise<string> {
   if (input.to < localDay(now, told.zone)) {
-    throw new AppError("invalid", undefined, { fields: { from: "That is over already. Choose a day from today on." } });
+    throw new AppError("invalid", undefined, {
+      fields: { from: "That is over already. Choose a day from today on." },
+    });
   }
-  const dates = { localFrom: input.from, localTo: input.to, timeFrom: input.timeFrom, timeTo: input.timeTo };
+  const dates = {
+    localFrom: input.from,
+    localTo: input.to,
+    timeFrom: input.timeFrom,
+    timeTo: input.timeTo,
+  };
   const open = await tx
-    .select({ id: conflicts.id, localFrom: conflicts.localFrom, localTo: conflicts.localTo, timeFrom: conflicts.timeFrom, timeTo: conflicts.timeTo })
+    .select({
+      id: conflicts.id,
+      localFrom: conflicts.localFrom,
+      localTo: conflicts.localTo,
+      timeFrom: conflicts.timeFrom,
+      timeTo: conflicts.timeTo,
+    })
     .from(conflicts)
-    .where(and(eq(conflicts.personId, told.personId), isNull(conflicts.removedAt), gte(conflicts.endsAt, now)));
+    .where(
+      and(
+        eq(conflicts.personId, told.personId),
+        isNull(conflicts.removedAt),
+        gte(conflicts.endsAt, now),
+      ),
+    );
   const same = open.find(
-    (c) => c.localFrom === dates.localFrom && c.localTo === dates.localTo && c.timeFrom === dates.timeFrom && c.timeTo === dates.timeTo,
+    (c) =>
+      c.localFrom === dates.localFrom &&
+      c.localTo === dates.localTo &&
+      c.timeFrom === dates.timeFrom &&
+      c.timeTo === dates.timeTo,
   );
   if (same) return same.id;
-  if (open.length >= MOST_OPEN) throw new AppError("refused", "That is more dates than fit here. Join some into ranges, or speak to the company.");
+  if (open.length >= MOST_OPEN)
+    throw new AppError(
+      "refused",
+      "That is more dates than fit here. Join some into ranges, or speak to the company.",
+    );
   const id = newId();
   await tx.insert(conflicts).values({
     id,
     personId: told.personId,
     ...dates,
     zone: told.zone,
-    startsAt: input.timeFrom === null ? localDateRange(input.from, told.zone).from : toInstant(input.from, input.timeFrom, told.zone).instant,
-    endsAt: input.timeTo === null ? localDateRange(input.to, told.zone).to : toInstant(input.to, input.timeTo, told.zone).instant,
+    startsAt:
+      input.timeFrom === null
+        ? localDateRange(input.from, told.zone).from
+        : toInstant(input.from, input.timeFrom, told.zone).instant,
+    endsAt:
+      input.timeTo === null
+        ? localDateRange(input.to, told.zone).to
+        : toInstant(input.to, input.timeTo, told.zone).instant,
     reason: input.reason,
   });
-  const days = input.from === input.to ? shortDay(input.from, told.locale) : `${shortDay(input.from, told.locale)} to ${shortDay(input.to, told.locale)}`;
+  const days =
+    input.from === input.to
+      ? shortDay(input.from, told.locale)
+      : `${shortDay(input.from, told.locale)} to ${shortDay(input.to, told.locale)}`;
   await recordAudit(tx, actor, {
     companyId: told.companyId,
     action: "conflict.tell",
@@ -121,12 +182,18 @@ async function writeConflict(tx: Tx, actor: Actor, input: NewConflict, told: Tol
 }
 
 /** Takes own dates back. All or none: throws `not-found` when one of them is not the actor's. */
-export async function removeConflicts(actor: Actor, input: z.output<typeof conflictIdsSchema>): Promise<void> {
+export async function removeConflicts(
+  actor: Actor,
+  input: z.output<typeof conflictIdsSchema>,
+): Promise<void> {
   await setRemoved(actor, input.conflictIds, true);
 }
 
 /** Puts dates back that were taken back: the undo of `removeConflicts`. */
-export async function restoreConflicts(actor: Actor, input: z.output<typeof conflictIdsSchema>): Promise<void> {
+export async function restoreConflicts(
+  actor: Actor,
+  input: z.output<typeof conflictIdsSchema>,
+): Promise<void> {
   await setRemoved(actor, input.conflictIds, false);
 }
 
@@ -152,7 +219,9 @@ async function setRemoved(actor: Actor, conflictIds: string[], removed: boolean)
         action: removed ? "conflict.take-back" : "conflict.restore",
         subjectKind: "conflict",
         subjectId: row.id,
-        summary: removed ? `${actor.name} took an impossible date back` : `${actor.name} put an impossible date back`,
+        summary: removed
+          ? `${actor.name} took an impossible date back`
+          : `${actor.name} put an impossible date back`,
       });
     }
   });

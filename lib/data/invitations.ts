@@ -4,7 +4,15 @@ import type { SQL } from "drizzle-orm";
 import { db } from "@/db/client";
 import type { Db, Tx } from "@/db/client";
 import { newId } from "@/db/columns";
-import { companies, invitations, people, pianistSessions, positions, productions, users } from "@/db/schema";
+import {
+  companies,
+  invitations,
+  people,
+  pianistSessions,
+  positions,
+  productions,
+  users,
+} from "@/db/schema";
 import { hashToken, newSecret } from "@/lib/auth/hash-token";
 import { env } from "@/lib/env";
 import { AppError } from "@/lib/errors";
@@ -42,7 +50,15 @@ export async function makeInvitationLink(
 export async function sendInvitation(
   tx: Db | Tx,
   actor: Actor,
-  invitation: { positionId: string; companyId: string; companyName: string; productionTitle: string | null; kind: PositionKind; name: string; email: string },
+  invitation: {
+    positionId: string;
+    companyId: string;
+    companyName: string;
+    productionTitle: string | null;
+    kind: PositionKind;
+    name: string;
+    email: string;
+  },
 ): Promise<void> {
   const link = await makeInvitationLink(tx, actor, invitation);
   await queueMail(tx, {
@@ -61,7 +77,14 @@ export async function sendInvitation(
   });
 }
 
-export type InvitationShown = { company: string; production: string | null; position: string; name: string; email: string; from: string | null };
+export type InvitationShown = {
+  company: string;
+  production: string | null;
+  position: string;
+  name: string;
+  email: string;
+  from: string | null;
+};
 
 const USED = "This invitation was accepted already. Sign in with your e-mail address.";
 const RUN_OUT = "This invitation has run out. Ask the company to send it again.";
@@ -99,7 +122,13 @@ function findInvitations(where: SQL | undefined) {
 
 async function openInvitation(where: SQL | undefined): Promise<OpenInvitation> {
   const [row] = await findInvitations(where);
-  if (!row || row.endedAt !== null || row.personRemovedAt !== null || row.productionRemovedAt !== null) throw new AppError("not-found");
+  if (
+    !row ||
+    row.endedAt !== null ||
+    row.personRemovedAt !== null ||
+    row.productionRemovedAt !== null
+  )
+    throw new AppError("not-found");
   if (row.acceptedAt !== null) throw new AppError("refused", USED);
   if (row.expiresAt < new Date()) throw new AppError("refused", RUN_OUT);
   return row;
@@ -108,7 +137,14 @@ async function openInvitation(where: SQL | undefined): Promise<OpenInvitation> {
 /** What an invitation says, for the page that asks to accept it. Throws `not-found` or `refused` with what to do. */
 export async function showInvitation(secret: string): Promise<InvitationShown> {
   const row = await openInvitation(eq(invitations.tokenHash, hashToken(secret)));
-  return { company: row.company, production: row.production, position: POSITION_NAMES[row.kind], name: row.personName, email: row.email, from: row.from };
+  return {
+    company: row.company,
+    production: row.production,
+    position: POSITION_NAMES[row.kind],
+    name: row.personName,
+    email: row.email,
+    from: row.from,
+  };
 }
 
 /**
@@ -119,26 +155,53 @@ export async function acceptInvitation(secret: string): Promise<string> {
   return accept(await openInvitation(eq(invitations.tokenHash, hashToken(secret))));
 }
 
-export type OwnInvitation = { id: string; company: string; production: string | null; position: string; from: string | null };
+export type OwnInvitation = {
+  id: string;
+  company: string;
+  production: string | null;
+  position: string;
+  from: string | null;
+};
 
 /** The invitations that wait for the actor's address, which a link by e-mail has proved to be theirs. One a position. */
 export async function listOwnInvitations(actor: Actor): Promise<OwnInvitation[]> {
   if (!(await hasProvedAddress(actor))) return [];
   const rows = await findInvitations(
-    and(eq(invitations.email, actor.email), isNull(invitations.acceptedAt), gt(invitations.expiresAt, new Date()), isNull(positions.endedAt), isNull(people.removedAt), isNull(productions.removedAt), isNull(people.userId)),
+    and(
+      eq(invitations.email, actor.email),
+      isNull(invitations.acceptedAt),
+      gt(invitations.expiresAt, new Date()),
+      isNull(positions.endedAt),
+      isNull(people.removedAt),
+      isNull(productions.removedAt),
+      isNull(people.userId),
+    ),
   );
-  const byPosition = new Map(rows.map((row) => [`${row.personId} ${row.kind} ${row.production ?? ""}`, row]));
-  return [...byPosition.values()].map((row) => ({ id: row.id, company: row.company, production: row.production, position: POSITION_NAMES[row.kind], from: row.from }));
+  const byPosition = new Map(
+    rows.map((row) => [`${row.personId} ${row.kind} ${row.production ?? ""}`, row]),
+  );
+  return [...byPosition.values()].map((row) => ({
+    id: row.id,
+    company: row.company,
+    production: row.production,
+    position: POSITION_NAMES[row.kind],
+    from: row.from,
+  }));
 }
 
 /** Accepts an invitation that waits for the actor's own address, without its link. Throws `not-found` when it is not for them. */
 export async function acceptOwnInvitation(actor: Actor, invitationId: string): Promise<void> {
   if (!(await hasProvedAddress(actor))) throw new AppError("not-found");
-  await accept(await openInvitation(and(eq(invitations.id, invitationId), eq(invitations.email, actor.email))));
+  await accept(
+    await openInvitation(and(eq(invitations.id, invitationId), eq(invitations.email, actor.email))),
+  );
 }
 
 async function hasProvedAddress(actor: Actor): Promise<boolean> {
-  const [user] = await db.select({ emailVerified: users.emailVerified }).from(users).where(eq(users.id, actor.userId));
+  const [user] = await db
+    .select({ emailVerified: users.emailVerified })
+    .from(users)
+    .where(eq(users.id, actor.userId));
   return user?.emailVerified != null;
 }
 
@@ -152,11 +215,17 @@ async function accept(row: OpenInvitation): Promise<string> {
       if (taken.affectedRows === 0) throw new AppError("refused", USED);
       const userId = await loginOf(tx, row.email, row.personName);
       if (row.personUserId !== null && row.personUserId !== userId) {
-        throw new AppError("refused", "This record is already linked to another sign-in. Ask the company to invite the right address.");
+        throw new AppError(
+          "refused",
+          "This record is already linked to another sign-in. Ask the company to invite the right address.",
+        );
       }
       await tx.update(people).set({ userId }).where(eq(people.id, row.personId));
       // From now on the login is what cannot be in two places, across companies.
-      await tx.update(pianistSessions).set({ bookeeId: userId }).where(eq(pianistSessions.personId, row.personId));
+      await tx
+        .update(pianistSessions)
+        .set({ bookeeId: userId })
+        .where(eq(pianistSessions.personId, row.personId));
       return userId;
     });
   } catch (error) {
@@ -166,9 +235,16 @@ async function accept(row: OpenInvitation): Promise<string> {
 
 /** The login of an address that its owner has just proved, made if there is none. */
 async function loginOf(tx: Tx, email: string, name: string): Promise<string> {
-  const [user] = await tx.select({ id: users.id, name: users.name }).from(users).where(eq(users.email, email)).for("update");
+  const [user] = await tx
+    .select({ id: users.id, name: users.name })
+    .from(users)
+    .where(eq(users.email, email))
+    .for("update");
   if (user) {
-    await tx.update(users).set({ emailVerified: new Date(), name: user.name ?? name }).where(eq(users.id, user.id));
+    await tx
+      .update(users)
+      .set({ emailVerified: new Date(), name: user.name ?? name })
+      .where(eq(users.id, user.id));
     return user.id;
   }
   const id = newId();
@@ -181,9 +257,15 @@ function acceptError(error: unknown): AppError | null {
     case null:
       return null;
     case "people_company_user":
-      return new AppError("refused", "You are in this company already, under another record. Ask the company to put the two together.");
+      return new AppError(
+        "refused",
+        "You are in this company already, under another record. Ask the company to put the two together.",
+      );
     case "pianist_sessions_held":
-      return new AppError("refused", "You are booked elsewhere at the time of a session of this company. Ask the company to change it, then accept.");
+      return new AppError(
+        "refused",
+        "You are booked elsewhere at the time of a session of this company. Ask the company to change it, then accept.",
+      );
     default:
       return new AppError("stale", "Something changed at the same moment. Load the page again.");
   }

@@ -1,5 +1,5 @@
 import "server-only";
-import { and, asc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, eq, gt, inArray, isNull } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Db, Tx } from "@/db/client";
@@ -24,14 +24,19 @@ export type NewPerson = {
 };
 
 /** The company's record of the person with this address, made if there is none. An existing record keeps its name. */
-export async function findOrCreatePerson(tx: Db | Tx, companyId: string, person: NewPerson): Promise<{ id: string; created: boolean }> {
+export async function findOrCreatePerson(
+  tx: Db | Tx,
+  companyId: string,
+  person: NewPerson,
+): Promise<{ id: string; created: boolean }> {
   if (person.email !== null) {
     const [known] = await tx
       .select({ id: people.id, removedAt: people.removedAt })
       .from(people)
       .where(and(eq(people.companyId, companyId), eq(people.email, person.email)));
     if (known) {
-      if (known.removedAt !== null) await tx.update(people).set({ removedAt: null }).where(eq(people.id, known.id));
+      if (known.removedAt !== null)
+        await tx.update(people).set({ removedAt: null }).where(eq(people.id, known.id));
       return { id: known.id, created: false };
     }
   }
@@ -51,7 +56,12 @@ export async function findOrCreatePerson(tx: Db | Tx, companyId: string, person:
 /** The person's open position of this kind in the production (or the company), made if there is none. Returns its id. */
 export async function ensurePosition(
   tx: Db | Tx,
-  position: { companyId: string; productionId: string | null; personId: string; kind: PositionKind },
+  position: {
+    companyId: string;
+    productionId: string | null;
+    personId: string;
+    kind: PositionKind;
+  },
 ): Promise<string> {
   const [held] = await tx
     .select({ id: positions.id })
@@ -60,7 +70,9 @@ export async function ensurePosition(
       and(
         eq(positions.personId, position.personId),
         eq(positions.kind, position.kind),
-        position.productionId === null ? isNull(positions.productionId) : eq(positions.productionId, position.productionId),
+        position.productionId === null
+          ? isNull(positions.productionId)
+          : eq(positions.productionId, position.productionId),
         isNull(positions.endedAt),
       ),
     );
@@ -71,7 +83,10 @@ export async function ensurePosition(
 }
 
 /** Puts someone into a position and sends the invitation. Returns the person's id. */
-export async function invitePerson(actor: Actor, input: z.output<typeof invitePersonSchema>): Promise<string> {
+export async function invitePerson(
+  actor: Actor,
+  input: z.output<typeof invitePersonSchema>,
+): Promise<string> {
   const scope =
     input.productionId === null
       ? { ...(await companyFor(actor, input.companyId, "members:manage")), title: null }
@@ -82,7 +97,12 @@ export async function invitePerson(actor: Actor, input: z.output<typeof invitePe
   try {
     return await inTransaction(async (tx) => {
       const person = await findOrCreatePerson(tx, companyId, input);
-      const positionId = await ensurePosition(tx, { companyId, productionId: input.productionId, personId: person.id, kind: input.kind });
+      const positionId = await ensurePosition(tx, {
+        companyId,
+        productionId: input.productionId,
+        personId: person.id,
+        kind: input.kind,
+      });
       await sendInvitation(tx, actor, {
         positionId,
         companyId,
@@ -103,15 +123,26 @@ export async function invitePerson(actor: Actor, input: z.output<typeof invitePe
       return person.id;
     });
   } catch (error) {
-    if (duplicateKey(error) !== null) throw new AppError("stale", "Someone invited this person at the same moment. Load the page again.");
+    if (duplicateKey(error) !== null)
+      throw new AppError(
+        "stale",
+        "Someone invited this person at the same moment. Load the page again.",
+      );
     throw error;
   }
 }
 
 /** Ends a position: from then on it gives nothing. The last music director of a production cannot be ended. */
-export async function endPosition(actor: Actor, input: z.output<typeof endPositionSchema>): Promise<void> {
-  const [position] = await db.select().from(positions).where(and(eq(positions.id, input.positionId), isNull(positions.endedAt)));
-  if (!position || !can(actor, "company:see", { companyId: position.companyId })) throw new AppError("not-found");
+export async function endPosition(
+  actor: Actor,
+  input: z.output<typeof endPositionSchema>,
+): Promise<void> {
+  const [position] = await db
+    .select()
+    .from(positions)
+    .where(and(eq(positions.id, input.positionId), isNull(positions.endedAt)));
+  if (!position || !can(actor, "company:see", { companyId: position.companyId }))
+    throw new AppError("not-found");
   if (position.productionId === null) await companyFor(actor, position.companyId, "members:manage");
   else await productionFor(actor, position.productionId, "positions:manage");
   await inTransaction(async (tx) => {
@@ -121,14 +152,22 @@ export async function endPosition(actor: Actor, input: z.output<typeof endPositi
       .where(
         and(
           eq(positions.companyId, position.companyId),
-          position.productionId === null ? isNull(positions.productionId) : eq(positions.productionId, position.productionId),
+          position.productionId === null
+            ? isNull(positions.productionId)
+            : eq(positions.productionId, position.productionId),
           eq(positions.kind, position.kind),
           isNull(positions.endedAt),
         ),
       )
       .for("update");
-    if (same.length <= 1 && (position.kind === "music_director" || position.kind === "company_admin")) {
-      throw new AppError("refused", `Someone has to be ${POSITION_NAMES[position.kind].toLowerCase()}. Invite the next one first.`);
+    if (
+      same.length <= 1 &&
+      (position.kind === "music_director" || position.kind === "company_admin")
+    ) {
+      throw new AppError(
+        "refused",
+        `Someone has to be ${POSITION_NAMES[position.kind].toLowerCase()}. Invite the next one first.`,
+      );
     }
     await tx.update(positions).set({ endedAt: new Date() }).where(eq(positions.id, position.id));
     await recordAudit(tx, actor, {
@@ -143,15 +182,32 @@ export async function endPosition(actor: Actor, input: z.output<typeof endPositi
 }
 
 /** Opens an ended position again: the undo of `endPosition`. */
-export async function reopenPosition(actor: Actor, input: z.output<typeof endPositionSchema>): Promise<void> {
+export async function reopenPosition(
+  actor: Actor,
+  input: z.output<typeof endPositionSchema>,
+): Promise<void> {
   const [position] = await db.select().from(positions).where(eq(positions.id, input.positionId));
-  if (!position || !can(actor, "company:see", { companyId: position.companyId })) throw new AppError("not-found");
+  if (!position || !can(actor, "company:see", { companyId: position.companyId }))
+    throw new AppError("not-found");
   if (position.productionId === null) await companyFor(actor, position.companyId, "members:manage");
   else await productionFor(actor, position.productionId, "positions:manage");
+  // Pressed twice: it is open already.
+  if (position.endedAt === null) return;
   try {
-    await db.update(positions).set({ endedAt: null }).where(eq(positions.id, position.id));
+    await inTransaction(async (tx) => {
+      await tx.update(positions).set({ endedAt: null }).where(eq(positions.id, position.id));
+      await recordAudit(tx, actor, {
+        companyId: position.companyId,
+        productionId: position.productionId ?? undefined,
+        action: "position.reopen",
+        subjectKind: "position",
+        subjectId: position.id,
+        summary: `Opened a position again: ${POSITION_NAMES[position.kind].toLowerCase()}`,
+      });
+    });
   } catch (error) {
-    if (duplicateKey(error) !== null) throw new AppError("stale", "This person holds that position again already.");
+    if (duplicateKey(error) !== null)
+      throw new AppError("stale", "This person holds that position again already.");
     throw error;
   }
 }
@@ -165,24 +221,36 @@ export type PersonListed = {
   /** Null when the reader may not see contacts. */
   email: string | null;
   phone: string | null;
-  /** Joined: signs in already. Invited: has an open invitation. */
+  /** Joined: signs in already. Invited: has an invitation that has not run out. */
   standing: "joined" | "invited" | "not invited";
 };
 
 /** Who holds which open position in the production; contacts only for those who may see them. */
-export async function listProductionPeople(actor: Actor, productionId: string): Promise<PersonListed[]> {
+export async function listProductionPeople(
+  actor: Actor,
+  productionId: string,
+): Promise<PersonListed[]> {
   const scope = await productionFor(actor, productionId, "people:read");
-  const contacts = can(actor, "contacts:read", { companyId: scope.companyId, productionId: scope.id });
+  const contacts = can(actor, "contacts:read", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+  });
   return listPositions(eq(positions.productionId, scope.id), contacts);
 }
 
 /** Who holds a position in the company itself. */
 export async function listCompanyMembers(actor: Actor, companyId: string): Promise<PersonListed[]> {
   const company = await companyFor(actor, companyId, "members:manage");
-  return listPositions(and(eq(positions.companyId, company.id), isNull(positions.productionId)), true);
+  return listPositions(
+    and(eq(positions.companyId, company.id), isNull(positions.productionId)),
+    true,
+  );
 }
 
-async function listPositions(where: ReturnType<typeof eq> | ReturnType<typeof and>, contacts: boolean): Promise<PersonListed[]> {
+async function listPositions(
+  where: ReturnType<typeof eq> | ReturnType<typeof and>,
+  contacts: boolean,
+): Promise<PersonListed[]> {
   const rows = await db
     .select({
       positionId: positions.id,
@@ -212,6 +280,12 @@ async function invitedPositions(positionIds: string[]): Promise<Set<string>> {
   const rows = await db
     .select({ positionId: invitations.positionId })
     .from(invitations)
-    .where(and(inArray(invitations.positionId, positionIds), isNull(invitations.acceptedAt)));
+    .where(
+      and(
+        inArray(invitations.positionId, positionIds),
+        isNull(invitations.acceptedAt),
+        gt(invitations.expiresAt, new Date()),
+      ),
+    );
   return new Set(rows.map((row) => row.positionId));
 }

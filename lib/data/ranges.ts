@@ -21,10 +21,17 @@ export type RangeOnFile = {
   at: Date;
 };
 
-export type PersonRanges = { claimed: RangeOnFile | null; heard: RangeOnFile | null; best: RangeOnFile | null };
+export type PersonRanges = {
+  claimed: RangeOnFile | null;
+  heard: RangeOnFile | null;
+  best: RangeOnFile | null;
+};
 
 /** The newest claimed and heard range of each person; `best` is the heard one where there is one. Asks no permission: the caller has. */
-export async function rangesOf(tx: Db | Tx, personIds: string[]): Promise<Map<string, PersonRanges>> {
+export async function rangesOf(
+  tx: Db | Tx,
+  personIds: string[],
+): Promise<Map<string, PersonRanges>> {
   const found = new Map<string, PersonRanges>();
   if (personIds.length === 0) return found;
   const rows = await tx
@@ -49,28 +56,43 @@ export async function rangesOf(tx: Db | Tx, personIds: string[]): Promise<Map<st
   return found;
 }
 
-/** A singer writes their own range. */
-export async function claimRange(actor: Actor, input: z.output<typeof claimRangeSchema>): Promise<void> {
-  assertOwn(actor, input.personId);
-  await db.insert(ranges).values({
-    id: newId(),
-    personId: input.personId,
-    kind: "claimed",
-    low: input.low,
-    high: input.high,
-    comfortableLow: input.comfortableLow,
-    comfortableHigh: input.comfortableHigh,
-    givenBy: actor.userId,
-  });
+/** A singer writes their own range, to each chosen company's record of them. Throws `not-found` for one that is not theirs. */
+export async function claimRange(
+  actor: Actor,
+  input: z.output<typeof claimRangeSchema>,
+): Promise<void> {
+  for (const personId of input.personIds) assertOwn(actor, personId);
+  await db.insert(ranges).values(
+    input.personIds.map((personId) => ({
+      id: newId(),
+      personId,
+      kind: "claimed" as const,
+      low: input.low,
+      high: input.high,
+      comfortableLow: input.comfortableLow,
+      comfortableHigh: input.comfortableHigh,
+      givenBy: actor.userId,
+    })),
+  );
 }
 
 /** The music team or the table writes the range they heard from a singer of this production. */
-export async function hearRange(actor: Actor, input: z.output<typeof hearRangeSchema>): Promise<void> {
+export async function hearRange(
+  actor: Actor,
+  input: z.output<typeof hearRangeSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "range:hear");
   const [person] = await db
     .select({ id: people.id, name: people.name })
     .from(people)
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), eq(positions.kind, "actor")))
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "actor"),
+      ),
+    )
     .where(and(eq(people.id, input.personId), eq(people.companyId, scope.companyId)));
   if (!person) throw new AppError("not-found");
   await inTransaction(async (tx) => {

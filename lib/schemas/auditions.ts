@@ -1,6 +1,13 @@
 import { z } from "zod";
 import { parsePitch } from "@/lib/music/parse-pitch";
-import { emailField, idField, localDateField, localTimeField, optionalText, requiredText } from "./common";
+import {
+  emailField,
+  idField,
+  localDateField,
+  localTimeField,
+  optionalText,
+  requiredText,
+} from "./common";
 
 const minutes = (least: number, most: number) =>
   z.coerce
@@ -32,13 +39,20 @@ const dayShape = {
 
 type DayInput = z.output<z.ZodObject<typeof dayShape>>;
 
-const LUNCH = { path: ["lunchFrom"], message: "Write between which times lunch may lie, or set lunch to 0 minutes." };
+const LUNCH = {
+  path: ["lunchFrom"],
+  message: "Write between which times lunch may lie, or set lunch to 0 minutes.",
+};
 const lunchHasTimes = (d: Pick<DayInput, "lunchMinutes" | "lunchFrom" | "lunchTo">): boolean =>
   d.lunchMinutes === 0 || (d.lunchFrom !== null && d.lunchTo !== null);
 const ONCE = { path: ["rooms"], message: "The same room is there twice. Keep it once." };
-const roomsOnce = (d: Pick<DayInput, "rooms">): boolean => new Set(d.rooms.map((r) => r.roomId)).size === d.rooms.length;
+const roomsOnce = (d: Pick<DayInput, "rooms">): boolean =>
+  new Set(d.rooms.map((r) => r.roomId)).size === d.rooms.length;
 
-export const createDaySchema = z.object(dayShape).refine(lunchHasTimes, LUNCH).refine(roomsOnce, ONCE);
+export const createDaySchema = z
+  .object(dayShape)
+  .refine(lunchHasTimes, LUNCH)
+  .refine(roomsOnce, ONCE);
 
 export const changeDaySchema = z
   .object({
@@ -61,18 +75,31 @@ const optionalPitch = z
     if (given === undefined || given === null || given === "") return null;
     const midi = typeof given === "number" ? given : parsePitch(given.replaceAll(" ", ""))?.midi;
     if (midi === undefined) {
-      context.addIssue({ code: "custom", message: "Write letter and octave, like A3, Bb3 or F#5 (C4 is middle C)." });
+      context.addIssue({
+        code: "custom",
+        message: "Write letter and octave, like A3, Bb3 or F#5 (C4 is middle C).",
+      });
       return z.NEVER;
     }
     if (midi < 24 || midi > 100) {
-      context.addIssue({ code: "custom", message: "Nobody sings that note: check the octave (C4 is middle C)." });
+      context.addIssue({
+        code: "custom",
+        message: "Nobody sings that note: check the octave (C4 is middle C).",
+      });
       return z.NEVER;
     }
     return midi;
   });
 
 const optionalBars = z
-  .union([z.literal(""), z.coerce.number({ error: "Write a number of bars." }).int("Write whole bars.").min(1, "At least one bar.").max(9999, "At most 9999 bars.")])
+  .union([
+    z.literal(""),
+    z.coerce
+      .number({ error: "Write a number of bars." })
+      .int("Write whole bars.")
+      .min(1, "At least one bar.")
+      .max(9999, "At most 9999 bars."),
+  ])
   .nullish()
   .transform((bars) => (bars === undefined || bars === null || bars === "" ? null : bars));
 
@@ -81,7 +108,10 @@ const singerShape = {
   email: emailField,
   phone: optionalText(40),
   pronouns: optionalText(40),
-  minor: z.boolean().nullish().transform((minor) => minor ?? false),
+  minor: z
+    .boolean()
+    .nullish()
+    .transform((minor) => minor ?? false),
   asksFor: optionalText(200),
   song: optionalText(200),
   bars: optionalBars,
@@ -91,16 +121,28 @@ const singerShape = {
   notAfter: optionalTime,
 };
 
-type SingerInput = { low: number | null; high: number | null; notBefore: string | null; notAfter: string | null };
+type SingerInput = {
+  low: number | null;
+  high: number | null;
+  notBefore: string | null;
+  notAfter: string | null;
+};
 
-const notesInOrder = (s: SingerInput): boolean => s.low === null || s.high === null || s.low < s.high;
+const notesInOrder = (s: SingerInput): boolean =>
+  s.low === null || s.high === null || s.low < s.high;
 const NOTES = { path: ["low"], message: "The lowest note has to lie below the highest." };
 const timesInOrder = (s: Pick<SingerInput, "notBefore" | "notAfter">): boolean =>
   s.notBefore === null || s.notAfter === null || s.notBefore < s.notAfter;
-const TIMES = { path: ["notBefore"], message: "Nothing lies between these times. Change one of them." };
+const TIMES = {
+  path: ["notBefore"],
+  message: "Nothing lies between these times. Change one of them.",
+};
 
 /** One singer of a list, as the import previews and saves it. */
-export const singerRowSchema = z.object(singerShape).refine(notesInOrder, NOTES).refine(timesInOrder, TIMES);
+export const singerRowSchema = z
+  .object(singerShape)
+  .refine(notesInOrder, NOTES)
+  .refine(timesInOrder, TIMES);
 
 export type SingerRowInput = z.input<typeof singerRowSchema>;
 export type SingerRowValues = z.output<typeof singerRowSchema>;
@@ -112,7 +154,10 @@ export const addSingerSchema = z
 
 export const importSingersSchema = z.object({
   productionId: idField,
-  rows: z.array(singerRowSchema).min(1, "Choose at least one row.").max(2000, "Import at most 2,000 rows at once."),
+  rows: z
+    .array(singerRowSchema)
+    .min(1, "Choose at least one row.")
+    .max(2000, "Import at most 2,000 rows at once."),
 });
 
 export const signUpSchema = z.object({ productionId: idField, signUpId: idField });
@@ -147,7 +192,10 @@ export const swapSingersSchema = z.object({
 export const acceptFillSchema = z.object({
   productionId: idField,
   dayId: idField,
-  placements: z.array(z.object({ signUpId: idField, slotId: idField })).min(1).max(2000),
+  placements: z
+    .array(z.object({ signUpId: idField, slotId: idField }))
+    .min(1)
+    .max(2000),
 });
 
 export const assignPianistSchema = z
@@ -158,7 +206,10 @@ export const assignPianistSchema = z
     from: localTimeField,
     to: localTimeField,
   })
-  .refine((a) => a.from < a.to, { path: ["to"], message: "The end has to come after the beginning." });
+  .refine((a) => a.from < a.to, {
+    path: ["to"],
+    error: "The end has to come after the beginning.",
+  });
 
 export const removePianistSchema = z.object({ productionId: idField, sessionId: idField });
 

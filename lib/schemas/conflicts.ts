@@ -22,17 +22,33 @@ export const addConflictSchema = z
   })
   .superRefine((c, ctx) => {
     if (c.span === "days") {
-      if (c.to === null) ctx.addIssue({ code: "custom", path: ["to"], message: "Choose the last day." });
-      else if (c.to < c.from) ctx.addIssue({ code: "custom", path: ["to"], message: "The last day cannot come before the first." });
+      if (c.to === null)
+        ctx.addIssue({ code: "custom", path: ["to"], message: "Choose the last day." });
+      else if (c.to < c.from)
+        ctx.addIssue({
+          code: "custom",
+          path: ["to"],
+          message: "The last day cannot come before the first.",
+        });
       else if (Date.parse(c.to) - Date.parse(c.from) > LONGEST_DAYS * 86_400_000) {
-        ctx.addIssue({ code: "custom", path: ["to"], message: "That is more than a year. Check the dates, or speak to the company." });
+        ctx.addIssue({
+          code: "custom",
+          path: ["to"],
+          message: "That is more than a year. Check the dates, or speak to the company.",
+        });
       }
     }
     if (c.span === "part") {
-      if (c.timeFrom === null) ctx.addIssue({ code: "custom", path: ["timeFrom"], message: "Write when it begins." });
-      if (c.timeTo === null) ctx.addIssue({ code: "custom", path: ["timeTo"], message: "Write when it ends." });
+      if (c.timeFrom === null)
+        ctx.addIssue({ code: "custom", path: ["timeFrom"], message: "Write when it begins." });
+      if (c.timeTo === null)
+        ctx.addIssue({ code: "custom", path: ["timeTo"], message: "Write when it ends." });
       if (c.timeFrom !== null && c.timeTo !== null && c.timeTo <= c.timeFrom) {
-        ctx.addIssue({ code: "custom", path: ["timeTo"], message: "The end has to come after the beginning." });
+        ctx.addIssue({
+          code: "custom",
+          path: ["timeTo"],
+          message: "The end has to come after the beginning.",
+        });
       }
     }
   })

@@ -17,10 +17,12 @@ const optionalParsed = <T>(read: (text: string) => T | null, message: string) =>
       return value;
     });
 
-const wholeNumber = (low: number, high: number) => (text: string): number | null => {
-  const value = Number(text);
-  return Number.isInteger(value) && value >= low && value <= high ? value : null;
-};
+const wholeNumber =
+  (low: number, high: number) =>
+  (text: string): number | null => {
+    const value = Number(text);
+    return Number.isInteger(value) && value >= low && value <= high ? value : null;
+  };
 
 const METRE = /^(\d{1,2}(\+\d{1,2})*\/(1|2|4|8|16|32)|free)$/;
 
@@ -30,25 +32,44 @@ const numberShape = {
   key: optionalParsed(parseKey, "Write a key such as E♭ or Eb; small letters are minor: c♯."),
   /** Fifths of the signature, kept when the key's name is left open. */
   keyFifths: optionalParsed(wholeNumber(-7, 7), "A key signature has at most seven signs."),
-  metre: optionalParsed((text) => (METRE.test(text.toLowerCase()) ? text.toLowerCase() : null), "Write a metre such as 3/4 or 6/8, or free."),
-  tempo: optionalParsed(wholeNumber(20, 400), "Write the crotchets a minute as a whole number from 20 to 400."),
+  metre: optionalParsed(
+    (text) => (METRE.test(text.toLowerCase()) ? text.toLowerCase() : null),
+    "Write a metre such as 3/4 or 6/8, or free.",
+  ),
+  tempo: optionalParsed(
+    wholeNumber(20, 400),
+    "Write the crotchets a minute as a whole number from 20 to 400.",
+  ),
   bars: optionalParsed(wholeNumber(1, 9999), "Write how many bars, as a whole number."),
   length: optionalParsed(parseLength, "Write minutes and seconds, such as 3:20."),
 };
 
 export const addNumberSchema = z.object({ productionId: idField, ...numberShape });
 
-export const changeNumberSchema = z.object({ productionId: idField, numberId: idField, version: z.coerce.number().int(), ...numberShape });
+export const changeNumberSchema = z.object({
+  productionId: idField,
+  numberId: idField,
+  version: z.coerce.number().int(),
+  ...numberShape,
+});
 
 export type NumberFields = Omit<z.output<typeof addNumberSchema>, "productionId">;
 
 export const numberIdSchema = z.object({ productionId: idField, numberId: idField });
 
-export const moveNumberSchema = z.object({ productionId: idField, numberId: idField, direction: z.enum(["up", "down"]) });
+export const moveNumberSchema = z.object({
+  productionId: idField,
+  numberId: idField,
+  direction: z.enum(["up", "down"]),
+});
 
-const people = (low: number, high: number, message: string) => z.coerce.number(message).int(message).min(low, message).max(high, message);
+const people = (low: number, high: number, message: string) =>
+  z.coerce.number(message).int(message).min(low, message).max(high, message);
 
-const roleKind = z.enum(["principal", "supporting", "ensemble"], "Choose what kind of role this is.");
+const roleKind = z.enum(
+  ["principal", "supporting", "ensemble"],
+  "Choose what kind of role this is.",
+);
 
 const roleShape = {
   name: requiredText("the role's name", 120),
@@ -60,7 +81,12 @@ const roleShape = {
 
 export const addRoleSchema = z.object({ productionId: idField, ...roleShape });
 
-export const changeRoleSchema = z.object({ productionId: idField, roleId: idField, version: z.coerce.number().int(), ...roleShape });
+export const changeRoleSchema = z.object({
+  productionId: idField,
+  roleId: idField,
+  version: z.coerce.number().int(),
+  ...roleShape,
+});
 
 export const roleIdSchema = z.object({ productionId: idField, roleId: idField });
 
@@ -75,8 +101,13 @@ const pitchField = (which: string) =>
     .min(1, `Write the ${which} note, such as B♭3.`)
     .transform((text, context) => {
       const pitch = parsePitch(text);
-      if (!pitch) context.addIssue({ code: "custom", message: "Write a note with its octave, such as B♭3, Bb3 or F#5. Middle C is C4." });
-      else if (pitch.midi < LOWEST || pitch.midi > HIGHEST) context.addIssue({ code: "custom", message: "No voice sings that. Middle C is C4." });
+      if (!pitch)
+        context.addIssue({
+          code: "custom",
+          message: "Write a note with its octave, such as B♭3, Bb3 or F#5. Middle C is C4.",
+        });
+      else if (pitch.midi < LOWEST || pitch.midi > HIGHEST)
+        context.addIssue({ code: "custom", message: "No voice sings that. Middle C is C4." });
       return pitch ?? { midi: 0, spelling: "" };
     });
 
@@ -90,13 +121,24 @@ export const writeLineSchema = z
     /** Set when lines read from a score are to give way to this one. */
     replaceRead: z.boolean().default(false),
   })
-  .refine((line) => line.low.midi <= line.high.midi, { path: ["low"], message: "The lowest note has to lie below the highest." });
+  .refine((line) => line.low.midi <= line.high.midi, {
+    path: ["low"],
+    message: "The lowest note has to lie below the highest.",
+  });
 
 export const lineIdSchema = z.object({ productionId: idField, lineId: idField });
 
-const octaveShift = z.coerce.number().int().min(-2, "Two octaves down at most.").max(2, "Two octaves up at most.");
+const octaveShift = z.coerce
+  .number()
+  .int()
+  .min(-2, "Two octaves down at most.")
+  .max(2, "Two octaves up at most.");
 
-export const shiftPartSchema = z.object({ productionId: idField, scorePartId: idField, octaveShift });
+export const shiftPartSchema = z.object({
+  productionId: idField,
+  scorePartId: idField,
+  octaveShift,
+});
 
 const partPlan = z
   .object({
@@ -106,7 +148,10 @@ const partPlan = z
     kind: roleKind.default("principal"),
     octaveShift,
   })
-  .refine((part) => part.to !== "new" || part.name !== "", { path: ["name"], message: "Write the new role's name." });
+  .refine((part) => part.to !== "new" || part.name !== "", {
+    path: ["name"],
+    message: "Write the new role's name.",
+  });
 
 export const confirmReadingSchema = z.object({
   productionId: idField,

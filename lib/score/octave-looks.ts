@@ -30,7 +30,9 @@ export type OctaveLooks = {
 };
 
 function voiceNamed(name: string): Omit<Voice, "words"> {
-  const found = VOICES.map((voice) => ({ voice, at: name.search(voice.words) })).filter(({ at }) => at >= 0);
+  const found = VOICES.map((voice) => ({ voice, at: name.search(voice.words) })).filter(
+    ({ at }) => at >= 0,
+  );
   return found.sort((a, b) => a.at - b.at)[0]?.voice ?? ANY;
 }
 
@@ -39,9 +41,13 @@ function voiceNamed(name: string): Omit<Voice, "words"> {
  * speaks of (the first one named), and an octave down or up would bring it inside. In: the part's name, its range and what
  * is known of its sung time. Out: what would put it right, or null when nothing looks wrong.
  */
-export function octaveLooks(name: string, line: PitchSpan & { histogram?: Histogram | null | undefined }): OctaveLooks | null {
+export function octaveLooks(
+  name: string,
+  line: PitchSpan & { histogram?: Histogram | null | undefined },
+): OctaveLooks | null {
   const voice = voiceNamed(name);
-  const middle = (line.histogram ? quantile(line.histogram, 0.5) : null) ?? (line.low + line.high) / 2;
+  const middle =
+    (line.histogram ? quantile(line.histogram, 0.5) : null) ?? (line.low + line.high) / 2;
   const inside = (pitch: number): boolean => pitch >= voice.low && pitch <= voice.high;
   if (inside(middle)) return null;
   const shift = middle > voice.high ? -1 : 1;

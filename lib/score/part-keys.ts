@@ -8,8 +8,12 @@ export function partKeys(parts: readonly { id: string }[]): string[] {
   const seen = new Set<string>();
   return parts.map(({ id }, place) => {
     const plain = id.trim().slice(0, MAX) || "part";
-    const folded = (text: string): string => text.normalize("NFKD").replace(/\p{M}/gu, "").toLowerCase();
-    const key = seen.has(folded(plain)) || plain.length < id.trim().length ? `${plain.slice(0, MAX - 5)}#${String(place)}` : plain;
+    const folded = (text: string): string =>
+      text.normalize("NFKD").replace(/\p{M}/gu, "").toLowerCase();
+    const key =
+      seen.has(folded(plain)) || plain.length < id.trim().length
+        ? `${plain.slice(0, MAX - 5)}#${String(place)}`
+        : plain;
     seen.add(folded(key));
     return key;
   });

@@ -1,7 +1,11 @@
 import type { PitchSpan } from "@/lib/music/types";
 import type { OctaveLooks } from "./octave-looks";
 
-export const ROLE_KIND_NAMES = { principal: "Principal", supporting: "Supporting", ensemble: "Ensemble" } as const;
+export const ROLE_KIND_NAMES = {
+  principal: "Principal",
+  supporting: "Supporting",
+  ensemble: "Ensemble",
+} as const;
 export type RoleKind = keyof typeof ROLE_KIND_NAMES;
 
 /** A part of a score that was read and is not placed yet. */
@@ -12,14 +16,20 @@ export type ReviewPart = {
   /** Has words under its notes, or a voice's name. */
   vocal: boolean;
   /** Null where the part has no sung pitch: it cannot become a line. */
-  line: (PitchSpan & { lowSpelled: string; highSpelled: string; tessitura: PitchSpan | null }) | null;
+  line:
+    (PitchSpan & { lowSpelled: string; highSpelled: string; tessitura: PitchSpan | null }) | null;
   /** Set where the part, as written, looks an octave off. */
   looksOff: OctaveLooks | null;
   warnings: string[];
 };
 
 /** A line that stands in a number already. */
-export type StandingLine = { roleId: string; source: "read" | "typed"; partKey: string; octaveShift: number };
+export type StandingLine = {
+  roleId: string;
+  source: "read" | "typed";
+  partKey: string;
+  octaveShift: number;
+};
 
 export type ReviewNumber = {
   id: string;
@@ -43,7 +53,16 @@ export type ScoreReview = {
   roles: ReviewRole[];
   /** The number this file seems to be a newer reading of, if any. */
   numberId: string | null;
-  proposed: { label: string; title: string; key: string; keyFifths: number | null; metre: string; tempo: string; bars: string; length: string };
+  proposed: {
+    label: string;
+    title: string;
+    key: string;
+    keyFifths: number | null;
+    metre: string;
+    tempo: string;
+    bars: string;
+    length: string;
+  };
 };
 
 /** What becomes of one part. */

@@ -57,9 +57,17 @@ export type ScoreView = {
 };
 
 /** What is drawn of one or several lines: their whole range, and where most of the singing lies if all of it is known. */
-export function drawnLine(lines: readonly ScoreLine[]): (PitchSpan & { tessitura: PitchSpan | null }) | null {
+export function drawnLine(
+  lines: readonly ScoreLine[],
+): (PitchSpan & { tessitura: PitchSpan | null }) | null {
   const whole = mergeLines(lines.map(asVocalLine));
-  return whole && { low: whole.low, high: whole.high, tessitura: whole.histogram ? tessitura(whole.histogram) : null };
+  return (
+    whole && {
+      low: whole.low,
+      high: whole.high,
+      tessitura: whole.histogram ? tessitura(whole.histogram) : null,
+    }
+  );
 }
 
 function asVocalLine(line: ScoreLine): VocalLine {
@@ -69,5 +77,8 @@ function asVocalLine(line: ScoreLine): VocalLine {
 /** One scale for all lines of a page, a tone wider than they are at either end. */
 export function scaleOf(lines: readonly PitchSpan[]): PitchSpan {
   if (lines.length === 0) return { low: 48, high: 84 };
-  return { low: Math.min(...lines.map((line) => line.low)) - 2, high: Math.max(...lines.map((line) => line.high)) + 2 };
+  return {
+    low: Math.min(...lines.map((line) => line.low)) - 2,
+    high: Math.max(...lines.map((line) => line.high)) + 2,
+  };
 }

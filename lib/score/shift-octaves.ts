@@ -11,7 +11,8 @@ export type SpelledLine = PitchSpan & {
 const respell = (spelling: string, octaves: number): string =>
   spelling.replace(/-?\d+$/, (octave) => String(Number(octave) + octaves));
 
-const move = (pitch: number | null, octaves: number): number | null => (pitch === null ? null : pitch + 12 * octaves);
+const move = (pitch: number | null, octaves: number): number | null =>
+  pitch === null ? null : pitch + 12 * octaves;
 
 /**
  * A line put some octaves up (or down, negative), with its spellings and its histogram. Null when a note would leave
@@ -30,8 +31,18 @@ export function shiftOctaves<T extends SpelledLine>(line: T, octaves: number): T
     histogram:
       line.histogram === null
         ? null
-        : Object.fromEntries(Object.entries(line.histogram).map(([pitch, quarters]) => [String(Number(pitch) + 12 * octaves), quarters])),
+        : Object.fromEntries(
+            Object.entries(line.histogram).map(([pitch, quarters]) => [
+              String(Number(pitch) + 12 * octaves),
+              quarters,
+            ]),
+          ),
   };
-  const outermost = [shifted.low, shifted.high, shifted.optionalLow ?? shifted.low, shifted.optionalHigh ?? shifted.high];
+  const outermost = [
+    shifted.low,
+    shifted.high,
+    shifted.optionalLow ?? shifted.low,
+    shifted.optionalHigh ?? shifted.high,
+  ];
   return outermost.some((pitch) => pitch < 0 || pitch > 127) ? null : shifted;
 }

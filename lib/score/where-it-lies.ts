@@ -43,7 +43,8 @@ function place(line: LineInNumber, end: "high" | "low"): HardPlace {
     midi,
     bar: end === "high" ? line.highBar : line.lowBar,
     quarters: quarters === undefined || quarters === 0 ? null : quarters,
-    optional: optional !== null && (end === "high" ? optional > midi : optional < midi) ? optional : null,
+    optional:
+      optional !== null && (end === "high" ? optional > midi : optional < midi) ? optional : null,
   };
 }
 
@@ -51,10 +52,15 @@ function place(line: LineInNumber, end: "high" | "low"): HardPlace {
  * Where a role lies highest and lowest: of its numbers, at most `atMost` per end whose highest (lowest) note is within two
  * semitones of the highest (lowest) of all, the outermost first, the longer sung before the shorter.
  */
-export function whereItLies(lines: readonly LineInNumber[], atMost = 3): { high: HardPlace[]; low: HardPlace[] } {
+export function whereItLies(
+  lines: readonly LineInNumber[],
+  atMost = 2,
+): { high: HardPlace[]; low: HardPlace[] } {
   const pick = (end: "high" | "low"): HardPlace[] => {
     const outward = end === "high" ? 1 : -1;
-    const places = lines.map((line) => place(line, end)).sort((a, b) => (b.midi - a.midi) * outward || (b.quarters ?? 0) - (a.quarters ?? 0));
+    const places = lines
+      .map((line) => place(line, end))
+      .sort((a, b) => (b.midi - a.midi) * outward || (b.quarters ?? 0) - (a.quarters ?? 0));
     const outermost = places[0];
     if (!outermost) return [];
     return places.filter((each) => Math.abs(each.midi - outermost.midi) <= NEAR).slice(0, atMost);

@@ -37,42 +37,57 @@ describe("an audition day", () => {
     // By hand, from the rules alone: ten slots of 8 fill 80 minutes, 10:00–11:20; the pianist rests to 11:30; ten more to
     // 12:50, when the next rest falls due inside the lunch window (12:30–14:00) and becomes lunch, to 13:50; ten to 15:10,
     // rest to 15:20, five to 16:00.
-    expect(items.filter((i) => i.kind !== "slot").map((i) => `${i.kind} ${at(i.startsAt)}–${at(i.endsAt)}`)).toEqual([
-      "rest 11:20–11:30",
-      "lunch 12:50–13:50",
-      "rest 15:10–15:20",
-    ]);
+    expect(
+      items
+        .filter((i) => i.kind !== "slot")
+        .map((i) => `${i.kind} ${at(i.startsAt)}–${at(i.endsAt)}`),
+    ).toEqual(["rest 11:20–11:30", "lunch 12:50–13:50", "rest 15:10–15:20"]);
     expect(items.filter((i) => i.kind === "slot")).toHaveLength(35);
     expect(at(items.at(-1)?.endsAt ?? "")).toBe("16:00");
     // 20 March 2027 lies before the British clocks change (28 March), so that local time is UTC.
     expect(items[0]?.startsAt).toBe("2027-03-20T10:00:00.000Z");
     as(world.people.md.userId);
-    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({ ok: true });
+    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({
+      ok: true,
+    });
   });
 
   test("books its rooms: a taken one is refused with who has it, when, and what to do", async () => {
     const dayId = await makeDay(world, "2027-03-21", [world.roomId]);
     as(world.people.siblingMd.userId);
-    const clash = await createDay({ ...dayInput(world, "2027-03-21", [world.secondRoomId, world.roomId]), productionId: world.siblingProductionId });
+    const clash = await createDay({
+      ...dayInput(world, "2027-03-21", [world.secondRoomId, world.roomId]),
+      productionId: world.siblingProductionId,
+    });
     expect(clash).toMatchObject({
       ok: false,
       error: {
         code: "taken",
-        message: "Room 1 is taken by the auditions of The Tidewatcher, 10:00–16:00. Choose another room, or times outside that.",
+        message:
+          "Room 1 is taken by the auditions of The Tidewatcher, 10:00–16:00. Choose another room, or times outside that.",
       },
     });
-    expect(await listDays(await actorOf(world.people.siblingMd.userId), world.siblingProductionId)).toEqual([]);
+    expect(
+      await listDays(await actorOf(world.people.siblingMd.userId), world.siblingProductionId),
+    ).toEqual([]);
     as(world.people.md.userId);
-    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({ ok: true });
+    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({
+      ok: true,
+    });
     as(world.people.siblingMd.userId);
-    const free = await createDay({ ...dayInput(world, "2027-03-21", [world.roomId]), productionId: world.siblingProductionId });
+    const free = await createDay({
+      ...dayInput(world, "2027-03-21", [world.roomId]),
+      productionId: world.siblingProductionId,
+    });
     expect(free).toMatchObject({ ok: true });
   });
 
   test("of ten made at once in one room, one stands", async () => {
     as(world.people.md.userId);
     const rooms = [world.roomId];
-    const made = await Promise.all(Array.from({ length: 10 }, () => createDay(dayInput(world, "2027-03-22", rooms))));
+    const made = await Promise.all(
+      Array.from({ length: 10 }, () => createDay(dayInput(world, "2027-03-22", rooms))),
+    );
     expect(made.filter((result) => result.ok)).toHaveLength(1);
     expect(made.filter((result) => !result.ok && result.error.code === "taken")).toHaveLength(9);
   });
@@ -80,13 +95,29 @@ describe("an audition day", () => {
   test("names what stands in the way beside the field", async () => {
     as(world.people.md.userId);
     const base = dayInput(world, "2027-03-23");
-    expect(await createDay({ ...base, rooms: [] })).toMatchObject({ ok: false, error: { fields: { rooms: "Choose at least one room." } } });
-    expect(await createDay({ ...base, rooms: [{ roomId: world.roomId, opens: "16:00", closes: "10:00" }] })).toMatchObject({
+    expect(await createDay({ ...base, rooms: [] })).toMatchObject({
+      ok: false,
+      error: { fields: { rooms: "Choose at least one room." } },
+    });
+    expect(
+      await createDay({
+        ...base,
+        rooms: [{ roomId: world.roomId, opens: "16:00", closes: "10:00" }],
+      }),
+    ).toMatchObject({
       ok: false,
       error: { fields: { rooms: "The room closes before it opens. Change one of the times." } },
     });
-    expect(await createDay({ ...base, lunchFrom: "" })).toMatchObject({ ok: false, error: { code: "invalid" } });
-    expect(await createDay({ ...base, rooms: [{ roomId: world.otherRoomId, opens: "10:00", closes: "12:00" }] })).toMatchObject({
+    expect(await createDay({ ...base, lunchFrom: "" })).toMatchObject({
+      ok: false,
+      error: { code: "invalid" },
+    });
+    expect(
+      await createDay({
+        ...base,
+        rooms: [{ roomId: world.otherRoomId, opens: "10:00", closes: "12:00" }],
+      }),
+    ).toMatchObject({
       ok: false,
       error: { code: "not-found" },
     });
@@ -104,10 +135,22 @@ describe("an audition day", () => {
     const p = world.people;
     expect(await outcome(p.assistant.userId)).toBe("ok");
     expect(await outcome(p.stageManager.userId)).toBe("ok");
-    for (const person of [p.director, p.choreographer, p.producer, p.accompanist, p.actor, p.admin]) {
+    for (const person of [
+      p.director,
+      p.choreographer,
+      p.producer,
+      p.accompanist,
+      p.actor,
+      p.admin,
+    ]) {
       expect(await outcome(person.userId), person.name).toBe("not-allowed");
     }
-    for (const userId of [p.siblingMd.userId, p.outsiderMd.userId, p.outsiderAdmin.userId, world.strangerId]) {
+    for (const userId of [
+      p.siblingMd.userId,
+      p.outsiderMd.userId,
+      p.outsiderAdmin.userId,
+      world.strangerId,
+    ]) {
       expect(await outcome(userId)).toBe("not-found");
     }
     expect(await outcome(null)).toBe("signed-out");
@@ -120,8 +163,18 @@ describe("changing a day", () => {
     const [early, late] = await makeSignUps(world, 2, "change");
     const slots = await slotIds(dayId);
     if (!early || !late) throw new Error("no sign-ups");
-    await placeSinger({ productionId: world.productionId, signUpId: early, slotId: slots[0] ?? "", seenIn: null });
-    await placeSinger({ productionId: world.productionId, signUpId: late, slotId: slots.at(-1) ?? "", seenIn: null });
+    await placeSinger({
+      productionId: world.productionId,
+      signUpId: early,
+      slotId: slots[0] ?? "",
+      seenIn: null,
+    });
+    await placeSinger({
+      productionId: world.productionId,
+      signUpId: late,
+      slotId: slots.at(-1) ?? "",
+      seenIn: null,
+    });
 
     const change = {
       ...dayInput(world, "2027-04-03", [world.roomId]),
@@ -130,14 +183,21 @@ describe("changing a day", () => {
       rooms: [{ roomId: world.roomId, opens: "10:00", closes: "15:30" }],
     };
     const asked = await changeDay(change);
-    expect(asked).toMatchObject({ ok: true, data: { saved: false, lost: [{ signUpId: late, time: "15:52", room: "Room 1" }] } });
+    expect(asked).toMatchObject({
+      ok: true,
+      data: { saved: false, lost: [{ signUpId: late, time: "15:52", room: "Room 1" }] },
+    });
     expect((await whereIs(late)).slotId).not.toBeNull();
 
     const agreed = await changeDay({ ...change, mayLose: [late] });
     expect(agreed).toMatchObject({ ok: true, data: { saved: true } });
     expect(await whereIs(late)).toEqual({ state: "listed", slotId: null });
     expect((await whereIs(early)).slotId).toBe((await slotIds(dayId))[0]);
-    const [booking] = await db.select().from(t.roomBookings).innerJoin(t.auditionRooms, eq(t.auditionRooms.id, t.roomBookings.auditionRoomId)).where(eq(t.auditionRooms.dayId, dayId));
+    const [booking] = await db
+      .select()
+      .from(t.roomBookings)
+      .innerJoin(t.auditionRooms, eq(t.auditionRooms.id, t.roomBookings.auditionRoomId))
+      .where(eq(t.auditionRooms.dayId, dayId));
     // 3 April 2027: British summer time, one hour ahead of UTC.
     expect(booking?.room_bookings.endsAt.toISOString()).toBe("2027-04-03T14:30:00.000Z");
 
@@ -147,10 +207,21 @@ describe("changing a day", () => {
   test("a day of another production is not there", async () => {
     const dayId = await makeDay(world, "2027-04-04", [world.secondRoomId]);
     as(world.people.siblingMd.userId);
-    const change = { ...dayInput(world, "2027-04-04"), productionId: world.siblingProductionId, dayId, version: 1 };
+    const change = {
+      ...dayInput(world, "2027-04-04"),
+      productionId: world.siblingProductionId,
+      dayId,
+      version: 1,
+    };
     expect(await changeDay(change)).toMatchObject({ ok: false, error: { code: "not-found" } });
-    expect(await removeDay({ productionId: world.siblingProductionId, dayId })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    expect(await removeDay({ productionId: world.siblingProductionId, dayId })).toMatchObject({
+      ok: false,
+      error: { code: "not-found" },
+    });
     as(world.people.actor.userId);
-    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({ ok: false, error: { code: "not-allowed" } });
+    expect(await removeDay({ productionId: world.productionId, dayId })).toMatchObject({
+      ok: false,
+      error: { code: "not-allowed" },
+    });
   });
 });

@@ -39,8 +39,13 @@ beforeEach(() => {
 });
 
 const slot = (index: number): string => slots[index] ?? "";
-const one = async (tag: string, extra: object = {}): Promise<string> => (await makeSignUps(world, 1, tag, extra))[0] ?? "";
-const mails = (template: string) => db.select().from(t.outbox).where(and(eq(t.outbox.template, template), like(t.outbox.toEmail, "%@singers.example")));
+const one = async (tag: string, extra: object = {}): Promise<string> =>
+  (await makeSignUps(world, 1, tag, extra))[0] ?? "";
+const mails = (template: string) =>
+  db
+    .select()
+    .from(t.outbox)
+    .where(and(eq(t.outbox.template, template), like(t.outbox.toEmail, "%@singers.example")));
 
 async function actorOf(userId: string) {
   const actor = await loadActor(userId);
@@ -51,10 +56,19 @@ async function actorOf(userId: string) {
 describe("placing", () => {
   test("of twenty singers put into one slot at once, one is in it", async () => {
     const singers = await makeSignUps(world, 20, "race");
-    const results = await Promise.all(singers.map((signUpId) => placeSinger({ productionId, signUpId, slotId: slot(0), seenIn: null })));
+    const results = await Promise.all(
+      singers.map((signUpId) =>
+        placeSinger({ productionId, signUpId, slotId: slot(0), seenIn: null }),
+      ),
+    );
     expect(results.filter((r) => r.ok)).toHaveLength(1);
-    expect(new Set(results.flatMap((r) => (r.ok ? [] : [r.error.code])))).toEqual(new Set(["taken"]));
-    const inIt = await db.select().from(t.slotAssignments).where(eq(t.slotAssignments.slotId, slot(0)));
+    expect(new Set(results.flatMap((r) => (r.ok ? [] : [r.error.code])))).toEqual(
+      new Set(["taken"]),
+    );
+    const inIt = await db
+      .select()
+      .from(t.slotAssignments)
+      .where(eq(t.slotAssignments.slotId, slot(0)));
     expect(inIt).toHaveLength(1);
     const [winner] = inIt;
     await takeOut({ productionId, signUpId: winner?.signUpId ?? "" });
@@ -62,9 +76,16 @@ describe("placing", () => {
 
   test("of one singer put into twenty slots at once, one holds", async () => {
     const signUpId = await one("many");
-    const results = await Promise.all(slots.slice(0, 20).map((slotId) => placeSinger({ productionId, signUpId, slotId, seenIn: null })));
+    const results = await Promise.all(
+      slots
+        .slice(0, 20)
+        .map((slotId) => placeSinger({ productionId, signUpId, slotId, seenIn: null })),
+    );
     expect(results.filter((r) => r.ok)).toHaveLength(1);
-    const held = await db.select().from(t.slotAssignments).where(eq(t.slotAssignments.signUpId, signUpId));
+    const held = await db
+      .select()
+      .from(t.slotAssignments)
+      .where(eq(t.slotAssignments.signUpId, signUpId));
     expect(held).toHaveLength(1);
     await takeOut({ productionId, signUpId });
   });
@@ -72,13 +93,24 @@ describe("placing", () => {
   test("a taken slot says who sings there; a singer moved meanwhile is not moved again", async () => {
     const [a, b] = await makeSignUps(world, 2, "pair");
     if (!a || !b) throw new Error("no sign-ups");
-    expect(await placeSinger({ productionId, signUpId: a, slotId: slot(2), seenIn: null })).toMatchObject({ ok: true });
-    expect(await placeSinger({ productionId, signUpId: b, slotId: slot(2), seenIn: null })).toMatchObject({
+    expect(
+      await placeSinger({ productionId, signUpId: a, slotId: slot(2), seenIn: null }),
+    ).toMatchObject({ ok: true });
+    expect(
+      await placeSinger({ productionId, signUpId: b, slotId: slot(2), seenIn: null }),
+    ).toMatchObject({
       ok: false,
-      error: { code: "taken", message: "Singer pair 0 sings at 10:08 in Room 1. Choose a free slot, or swap the two." },
+      error: {
+        code: "taken",
+        message: "Singer pair 0 sings at 10:08 in Room 1. Choose a free slot, or swap the two.",
+      },
     });
-    expect(await placeSinger({ productionId, signUpId: a, slotId: slot(4), seenIn: null })).toMatchObject({ ok: false, error: { code: "stale" } });
-    expect(await placeSinger({ productionId, signUpId: a, slotId: slot(4), seenIn: slot(2) })).toMatchObject({ ok: true });
+    expect(
+      await placeSinger({ productionId, signUpId: a, slotId: slot(4), seenIn: null }),
+    ).toMatchObject({ ok: false, error: { code: "stale" } });
+    expect(
+      await placeSinger({ productionId, signUpId: a, slotId: slot(4), seenIn: slot(2) }),
+    ).toMatchObject({ ok: true });
     expect((await whereIs(a)).slotId).toBe(slot(4));
   });
 
@@ -87,7 +119,11 @@ describe("placing", () => {
     if (!a || !b) throw new Error("no sign-ups");
     await placeSinger({ productionId, signUpId: a, slotId: slot(10), seenIn: null });
     await placeSinger({ productionId, signUpId: b, slotId: slot(11), seenIn: null });
-    const swap = { productionId, first: { signUpId: a, slotId: slot(10) }, second: { signUpId: b, slotId: slot(11) } };
+    const swap = {
+      productionId,
+      first: { signUpId: a, slotId: slot(10) },
+      second: { signUpId: b, slotId: slot(11) },
+    };
     expect(await swapSingers(swap)).toMatchObject({ ok: true });
     expect([(await whereIs(a)).slotId, (await whereIs(b)).slotId]).toEqual([slot(11), slot(10)]);
     expect(await swapSingers(swap)).toMatchObject({ ok: false, error: { code: "stale" } });
@@ -97,12 +133,25 @@ describe("placing", () => {
     const signUpId = await one("rest");
     const day = await readDay(await actorOf(world.people.md.userId), productionId, dayId);
     const lunch = day.rooms[0]?.items.find((item) => item.kind === "lunch");
-    expect(await placeSinger({ productionId, signUpId, slotId: lunch?.id ?? "", seenIn: null })).toMatchObject({ ok: false, error: { code: "refused" } });
+    expect(
+      await placeSinger({ productionId, signUpId, slotId: lunch?.id ?? "", seenIn: null }),
+    ).toMatchObject({ ok: false, error: { code: "refused" } });
     as(world.people.siblingMd.userId);
-    expect(await placeSinger({ productionId: world.siblingProductionId, signUpId, slotId: slot(20), seenIn: null })).toMatchObject({ ok: false, error: { code: "not-found" } });
-    expect(await placeSinger({ productionId, signUpId, slotId: slot(20), seenIn: null })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    expect(
+      await placeSinger({
+        productionId: world.siblingProductionId,
+        signUpId,
+        slotId: slot(20),
+        seenIn: null,
+      }),
+    ).toMatchObject({ ok: false, error: { code: "not-found" } });
+    expect(
+      await placeSinger({ productionId, signUpId, slotId: slot(20), seenIn: null }),
+    ).toMatchObject({ ok: false, error: { code: "not-found" } });
     as(world.people.director.userId);
-    expect(await placeSinger({ productionId, signUpId, slotId: slot(20), seenIn: null })).toMatchObject({ ok: false, error: { code: "not-allowed" } });
+    expect(
+      await placeSinger({ productionId, signUpId, slotId: slot(20), seenIn: null }),
+    ).toMatchObject({ ok: false, error: { code: "not-allowed" } });
   });
 });
 
@@ -123,7 +172,11 @@ describe("inviting", () => {
       },
     });
     expect(await mails("audition-invitation")).toHaveLength(0);
-    const results = await Promise.all([inviteSingers(which), inviteSingers(which), inviteSingers(which)]);
+    const results = await Promise.all([
+      inviteSingers(which),
+      inviteSingers(which),
+      inviteSingers(which),
+    ]);
     expect(results.map((r) => (r.ok ? r.data.invited : -1)).sort()).toEqual([0, 0, 2]);
     const sent = await mails("audition-invitation");
     expect(sent).toHaveLength(2);
@@ -135,24 +188,45 @@ describe("inviting", () => {
   test("someone who signs in already gets a plain link to their page, confirms, is moved, and confirms again", async () => {
     const wren = world.people.actor;
     await makeSignUps(world, 1, "unused");
-    const signUpId = (
+    const signUpId =
       await import("@/app/(season)/productions/[productionId]/auditions/actions").then((m) =>
-        m.addSinger({ productionId, name: wren.name, email: wren.email, low: "", high: "", notBefore: "", notAfter: "" }),
-      )
-    );
+        m.addSinger({
+          productionId,
+          name: wren.name,
+          email: wren.email,
+          low: "",
+          high: "",
+          notBefore: "",
+          notAfter: "",
+        }),
+      );
     if (!signUpId.ok) throw new Error(signUpId.error.message);
     const id = signUpId.data.signUpId;
     await placeSinger({ productionId, signUpId: id, slotId: slot(30), seenIn: null });
     const actor = await actorOf(wren.userId);
     expect(await listOwnSlots(actor)).toEqual([]);
-    await expect(answerSlot(actor, { signUpId: id, answer: "confirm" })).rejects.toMatchObject({ code: "not-found" });
+    await expect(answerSlot(actor, { signUpId: id, answer: "confirm" })).rejects.toMatchObject({
+      code: "not-found",
+    });
 
-    expect(await inviteSingers({ productionId, dayId, signUpIds: [id] })).toMatchObject({ ok: true, data: { invited: 1 } });
-    const [mail] = await db.select().from(t.outbox).where(and(eq(t.outbox.template, "audition-invitation"), eq(t.outbox.toEmail, wren.email)));
+    expect(await inviteSingers({ productionId, dayId, signUpIds: [id] })).toMatchObject({
+      ok: true,
+      data: { invited: 1 },
+    });
+    const [mail] = await db
+      .select()
+      .from(t.outbox)
+      .where(and(eq(t.outbox.template, "audition-invitation"), eq(t.outbox.toEmail, wren.email)));
     expect(mail?.data["link"]).toBe("http://localhost:3000/me");
     const now = new Date("2027-03-01T12:00:00Z");
     const [own] = await listOwnSlots(actor);
-    expect(own).toMatchObject({ signUpId: id, state: "invited", room: "Room 1", address: "4 Quay Lane", zone: "Europe/London" });
+    expect(own).toMatchObject({
+      signUpId: id,
+      state: "invited",
+      room: "Room 1",
+      address: "4 Quay Lane",
+      zone: "Europe/London",
+    });
     // Slot 30 is the sixteenth of Room 1: 11:30 + 5 × 8 minutes = 12:10; fifteen minutes before that is 11:55.
     expect(own?.startsAt.toISOString()).toBe("2027-03-20T12:10:00.000Z");
     expect(own?.beThereAt.toISOString()).toBe("2027-03-20T11:55:00.000Z");
@@ -161,17 +235,29 @@ describe("inviting", () => {
 
     for (const to of [32, 30, 32]) {
       const from = (await whereIs(id)).slotId;
-      expect(await placeSinger({ productionId, signUpId: id, slotId: slot(to), seenIn: from })).toMatchObject({ ok: true });
+      expect(
+        await placeSinger({ productionId, signUpId: id, slotId: slot(to), seenIn: from }),
+      ).toMatchObject({ ok: true });
     }
-    const moved = await db.select().from(t.outbox).where(and(eq(t.outbox.template, "audition-moved"), eq(t.outbox.toEmail, wren.email)));
+    const moved = await db
+      .select()
+      .from(t.outbox)
+      .where(and(eq(t.outbox.template, "audition-moved"), eq(t.outbox.toEmail, wren.email)));
     expect(moved).toHaveLength(3);
     expect((await whereIs(id)).state).toBe("invited");
-    await expect(answerSlot(actor, { signUpId: id, answer: "confirm", slotId: slot(30) }, now)).rejects.toMatchObject({ code: "stale" });
+    await expect(
+      answerSlot(actor, { signUpId: id, answer: "confirm", slotId: slot(30) }, now),
+    ).rejects.toMatchObject({ code: "stale" });
     await answerSlot(actor, { signUpId: id, answer: "decline" }, now);
     expect((await whereIs(id)).state).toBe("declined");
-    await expect(answerSlot(actor, { signUpId: id, answer: "confirm" }, new Date("2027-03-20T13:00:00Z"))).rejects.toMatchObject({ code: "refused" });
+    await expect(
+      answerSlot(actor, { signUpId: id, answer: "confirm" }, new Date("2027-03-20T13:00:00Z")),
+    ).rejects.toMatchObject({ code: "refused" });
     for (const other of [world.people.otherActor, world.people.md, world.people.outsiderMd]) {
-      await expect(answerSlot(await actorOf(other.userId), { signUpId: id, answer: "confirm" }, now), other.name).rejects.toMatchObject({ code: "not-found" });
+      await expect(
+        answerSlot(await actorOf(other.userId), { signUpId: id, answer: "confirm" }, now),
+        other.name,
+      ).rejects.toMatchObject({ code: "not-found" });
       expect(await listOwnSlots(await actorOf(other.userId))).toEqual([]);
     }
   });
@@ -180,8 +266,14 @@ describe("inviting", () => {
     const which = { productionId, dayId, signUpIds: null };
     for (const person of [world.people.director, world.people.accompanist, world.people.actor]) {
       as(person.userId);
-      expect(await inviteSingers(which), person.name).toMatchObject({ ok: false, error: { code: "not-allowed" } });
-      expect(await previewInvitations(which), person.name).toMatchObject({ ok: false, error: { code: "not-allowed" } });
+      expect(await inviteSingers(which), person.name).toMatchObject({
+        ok: false,
+        error: { code: "not-allowed" },
+      });
+      expect(await previewInvitations(which), person.name).toMatchObject({
+        ok: false,
+        error: { code: "not-allowed" },
+      });
     }
     as(world.people.outsiderMd.userId);
     expect(await inviteSingers(which)).toMatchObject({ ok: false, error: { code: "not-found" } });
@@ -201,15 +293,21 @@ describe("placing everyone", () => {
     expect((await whereIs(late)).slotId).toBeNull();
     expect((placements.find((p) => p.signUpId === late)?.time ?? "") >= "15:30").toBe(true);
     expect((placements.find((p) => p.signUpId === early)?.time ?? "x") <= "10:12").toBe(true);
-    expect(unplaced.find((u) => u.signUpId === never)?.why).toBe("Asked for after 17:00: no free slot lies there.");
+    expect(unplaced.find((u) => u.signUpId === never)?.why).toBe(
+      "Asked for after 17:00: no free slot lies there.",
+    );
     const day = await readDay(await actorOf(world.people.md.userId), productionId, dayId);
     expect(placements.length + unplaced.length).toBe(day.waiting.length);
 
     const chosen = placements.map(({ signUpId, slotId }) => ({ signUpId, slotId }));
-    const results = await Promise.all([1, 2, 3].map(() => acceptFill({ productionId, dayId, placements: chosen })));
+    const results = await Promise.all(
+      [1, 2, 3].map(() => acceptFill({ productionId, dayId, placements: chosen })),
+    );
     expect(results.filter((r) => r.ok)).toHaveLength(1);
     expect(results.filter((r) => !r.ok && r.error.code === "stale")).toHaveLength(2);
-    expect((await whereIs(early)).slotId).toBe(placements.find((p) => p.signUpId === early)?.slotId);
+    expect((await whereIs(early)).slotId).toBe(
+      placements.find((p) => p.signUpId === early)?.slotId,
+    );
   });
 
   test("an accepted proposal that does not hold any more writes nothing", async () => {
@@ -217,7 +315,10 @@ describe("placing everyone", () => {
     const free = (await readDay(await actorOf(world.people.md.userId), productionId, dayId)).rooms
       .flatMap((room) => room.items)
       .filter((item) => item.kind === "slot" && item.singer === null);
-    const taken = (await db.select().from(t.slotAssignments).where(eq(t.slotAssignments.dayId, dayId)).limit(1))[0]?.slotId ?? "";
+    const taken =
+      (
+        await db.select().from(t.slotAssignments).where(eq(t.slotAssignments.dayId, dayId)).limit(1)
+      )[0]?.slotId ?? "";
     if (!a || !b || !free[0]) throw new Error("nothing free");
     const result = await acceptFill({
       productionId,
@@ -234,15 +335,29 @@ describe("placing everyone", () => {
 
 describe("a person who joined another production", () => {
   test("sees no slot of a position that has ended", async () => {
-    const singer = await makePerson(world.companyId, "Ended Early", { kind: "actor", productionId });
-    const { addSinger } = await import("@/app/(season)/productions/[productionId]/auditions/actions");
+    const singer = await makePerson(world.companyId, "Ended Early", {
+      kind: "actor",
+      productionId,
+    });
+    const { addSinger } =
+      await import("@/app/(season)/productions/[productionId]/auditions/actions");
     const added = await addSinger({ productionId, name: singer.name, email: singer.email });
     if (!added.ok) throw new Error(added.error.message);
-    const free = (await readDay(await actorOf(world.people.md.userId), productionId, dayId)).rooms.flatMap((r) => r.items).find((i) => i.kind === "slot" && i.singer === null);
-    await placeSinger({ productionId, signUpId: added.data.signUpId, slotId: free?.id ?? "", seenIn: null });
+    const free = (await readDay(await actorOf(world.people.md.userId), productionId, dayId)).rooms
+      .flatMap((r) => r.items)
+      .find((i) => i.kind === "slot" && i.singer === null);
+    await placeSinger({
+      productionId,
+      signUpId: added.data.signUpId,
+      slotId: free?.id ?? "",
+      seenIn: null,
+    });
     await inviteSingers({ productionId, dayId, signUpIds: [added.data.signUpId] });
     expect(await listOwnSlots(await actorOf(singer.userId))).toHaveLength(1);
-    await db.update(t.positions).set({ endedAt: new Date() }).where(eq(t.positions.personId, singer.personId));
+    await db
+      .update(t.positions)
+      .set({ endedAt: new Date() })
+      .where(eq(t.positions.personId, singer.personId));
     expect(await listOwnSlots(await actorOf(singer.userId))).toEqual([]);
   });
 });

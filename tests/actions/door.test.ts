@@ -27,11 +27,21 @@ beforeAll(async () => {
   vi.useFakeTimers({ toFake: ["Date"], now: new Date("2027-03-01T12:00:00Z") });
   world = await makeWorld();
   dayId = await makeDay(world, "2027-03-20");
-  singers = await makeSignUps(world, 4, "door", { song: "The Lost Chord", phone: "0000 555 011", low: 57, high: 76 });
+  singers = await makeSignUps(world, 4, "door", {
+    song: "The Lost Chord",
+    phone: "0000 555 011",
+    low: 57,
+    high: 76,
+  });
   const slots = await slotIds(dayId);
   // Every second slot is Room 1's.
   for (const [index, signUpId] of singers.entries()) {
-    await placeSinger({ productionId: world.productionId, signUpId, slotId: slots[index * 2] ?? "", seenIn: null });
+    await placeSinger({
+      productionId: world.productionId,
+      signUpId,
+      slotId: slots[index * 2] ?? "",
+      seenIn: null,
+    });
   }
 });
 afterAll(() => {
@@ -54,8 +64,14 @@ describe("the monitor's link", () => {
     const which = { productionId: world.productionId, dayId };
     for (const person of [p.director, p.producer, p.accompanist, p.actor, p.admin]) {
       as(person.userId);
-      expect(await makeDoorLink(which), person.name).toMatchObject({ ok: false, error: { code: "not-allowed" } });
-      expect(await revokeDoorLink(which), person.name).toMatchObject({ ok: false, error: { code: "not-allowed" } });
+      expect(await makeDoorLink(which), person.name).toMatchObject({
+        ok: false,
+        error: { code: "not-allowed" },
+      });
+      expect(await revokeDoorLink(which), person.name).toMatchObject({
+        ok: false,
+        error: { code: "not-allowed" },
+      });
     }
     as(p.outsiderMd.userId);
     expect(await makeDoorLink(which)).toMatchObject({ ok: false, error: { code: "not-found" } });
@@ -75,30 +91,56 @@ describe("the monitor's link", () => {
       open: false,
       notice: "This link opens on Saturday 20 March, at midnight in London. Come back on the day.",
     });
-    expect(await readDoor(token, SOURCE, new Date("2027-03-20T00:00:00Z"))).toMatchObject({ open: true });
-    expect(await readDoor(token, SOURCE, new Date("2027-03-20T23:59:59Z"))).toMatchObject({ open: true });
+    expect(await readDoor(token, SOURCE, new Date("2027-03-20T00:00:00Z"))).toMatchObject({
+      open: true,
+    });
+    expect(await readDoor(token, SOURCE, new Date("2027-03-20T23:59:59Z"))).toMatchObject({
+      open: true,
+    });
     expect(await readDoor(token, SOURCE, new Date("2027-03-21T00:00:00Z"))).toEqual({
       open: false,
-      notice: "This link was for Saturday 20 March, which is over. Ask the stage manager for the next day's link.",
+      notice:
+        "This link was for Saturday 20 March, which is over. Ask the stage manager for the next day's link.",
     });
     // The action has the server's clock, on which it is 1 March.
-    expect(await actNow({ token, signUpId: singer(0), act: "here" })).toMatchObject({ ok: false, error: { code: "refused" } });
+    expect(await actNow({ token, signUpId: singer(0), act: "here" })).toMatchObject({
+      ok: false,
+      error: { code: "refused" },
+    });
   });
 
   test("shows name, time and state, and no other thing about anyone", async () => {
     const token = await link();
     const view = await readDoor(token, SOURCE, NOON);
     if (!view.open) throw new Error("closed");
-    expect(Object.keys(view).sort()).toEqual(["day", "now", "open", "rooms", "slotMinutes", "zone"]);
+    expect(Object.keys(view).sort()).toEqual([
+      "day",
+      "now",
+      "open",
+      "rooms",
+      "slotMinutes",
+      "zone",
+    ]);
     const items = view.rooms.flatMap((room) => room.items);
     expect(items.filter((item) => item.kind === "singer")).toHaveLength(4);
     expect(items.filter((item) => item.kind === "lunch")).toHaveLength(2);
-    for (const room of view.rooms) expect(Object.keys(room).sort()).toEqual(["id", "items", "name"]);
+    for (const room of view.rooms)
+      expect(Object.keys(room).sort()).toEqual(["id", "items", "name"]);
     for (const item of items) {
-      expect(Object.keys(item).sort()).toEqual(["endsAt", "id", "inAt", "kind", "name", "signUpId", "startsAt", "state"]);
+      expect(Object.keys(item).sort()).toEqual([
+        "endsAt",
+        "id",
+        "inAt",
+        "kind",
+        "name",
+        "signUpId",
+        "startsAt",
+        "state",
+      ]);
     }
     const told = JSON.stringify(view);
-    for (const secret of ["@singers.example", "0000 555", "Lost Chord"]) expect(told).not.toContain(secret);
+    for (const secret of ["@singers.example", "0000 555", "Lost Chord"])
+      expect(told).not.toContain(secret);
   });
 });
 
@@ -109,11 +151,17 @@ describe("at the door", () => {
     await db.delete(t.attendances);
   });
   const act = (index: number, what: "here" | "not-here" | "in" | "out", minute = 0) =>
-    actAtDoor({ token, signUpId: singer(index), act: what }, SOURCE, new Date(NOON.getTime() + minute * 60_000));
+    actAtDoor(
+      { token, signUpId: singer(index), act: what },
+      SOURCE,
+      new Date(NOON.getTime() + minute * 60_000),
+    );
   const states = async () => {
     const view = await readDoor(token, SOURCE, NOON);
     if (!view.open) throw new Error("closed");
-    return view.rooms.flatMap((room) => room.items).flatMap((item) => (item.kind === "singer" ? [item.state] : []));
+    return view.rooms
+      .flatMap((room) => room.items)
+      .flatMap((item) => (item.kind === "singer" ? [item.state] : []));
   };
 
   test("here, sent in, out; sending the next in shows the one before out", async () => {
@@ -124,15 +172,26 @@ describe("at the door", () => {
     expect(await states()).toEqual(["heard", "inside", "not here yet", "not here yet"]);
     await act(1, "out", 17);
     expect(await states()).toEqual(["heard", "heard", "not here yet", "not here yet"]);
-    const [trail] = await db.select().from(t.auditEvents).where(eq(t.auditEvents.action, "door.out"));
+    const [trail] = await db
+      .select()
+      .from(t.auditEvents)
+      .where(eq(t.auditEvents.action, "door.out"));
     expect(trail).toMatchObject({ actorName: "At the door", userId: null });
   });
 
   test("here can be taken back, out of order is refused with what to do", async () => {
     await act(2, "here");
     await act(2, "not-here");
-    expect(await states()).toEqual(["not here yet", "not here yet", "not here yet", "not here yet"]);
-    await expect(act(2, "out")).rejects.toMatchObject({ code: "refused", message: expect.stringContaining("Send in") as string });
+    expect(await states()).toEqual([
+      "not here yet",
+      "not here yet",
+      "not here yet",
+      "not here yet",
+    ]);
+    await expect(act(2, "out")).rejects.toMatchObject({
+      code: "refused",
+      message: expect.stringContaining("Send in") as string,
+    });
     await act(2, "in");
     await expect(act(2, "not-here")).rejects.toMatchObject({ code: "refused" });
   });
@@ -143,14 +202,20 @@ describe("at the door", () => {
   });
 
   test("a singer of another day, a wrong token and a removed day open nothing", async () => {
-    await expect(actAtDoor({ token, signUpId: world.productionId, act: "here" }, SOURCE, NOON)).rejects.toMatchObject({ code: "not-found" });
-    await expect(actAtDoor({ token: "wrong", signUpId: singer(0), act: "here" }, SOURCE, NOON)).rejects.toMatchObject({ code: "not-found" });
+    await expect(
+      actAtDoor({ token, signUpId: world.productionId, act: "here" }, SOURCE, NOON),
+    ).rejects.toMatchObject({ code: "not-found" });
+    await expect(
+      actAtDoor({ token: "wrong", signUpId: singer(0), act: "here" }, SOURCE, NOON),
+    ).rejects.toMatchObject({ code: "not-found" });
     as(world.people.md.userId);
     const other = await makeDay(world, "2027-06-01", [world.roomId]);
     const made = await makeDoorLink({ productionId: world.productionId, dayId: other });
     if (!made.ok) throw new Error(made.error.message);
     await removeDay({ productionId: world.productionId, dayId: other });
-    await expect(readDoor(tokenOf(made.data.link), SOURCE, new Date("2027-06-01T12:00:00Z"))).rejects.toMatchObject({ code: "not-found" });
+    await expect(
+      readDoor(tokenOf(made.data.link), SOURCE, new Date("2027-06-01T12:00:00Z")),
+    ).rejects.toMatchObject({ code: "not-found" });
   });
 
   test("guessing is limited by source; the true link is not counted", async () => {

@@ -1,12 +1,19 @@
 import { asc, eq, inArray } from "drizzle-orm";
-import { createDay, importSingers } from "@/app/(season)/productions/[productionId]/auditions/actions";
+import {
+  createDay,
+  importSingers,
+} from "@/app/(season)/productions/[productionId]/auditions/actions";
 import { db } from "@/db/client";
 import * as t from "@/db/schema";
 import { as } from "./as";
 import type { World } from "./world";
 
 /** A plan as the form sends it: 10:00 to 16:00, 8 minutes, a rest of 10 after 80, lunch of 60 between 12:30 and 14:00. */
-export function dayInput(world: World, localDate = "2027-03-20", rooms = [world.roomId, world.secondRoomId]) {
+export function dayInput(
+  world: World,
+  localDate = "2027-03-20",
+  rooms = [world.roomId, world.secondRoomId],
+) {
   return {
     productionId: world.productionId,
     localDate,
@@ -30,7 +37,12 @@ export async function makeDay(world: World, localDate?: string, rooms?: string[]
 }
 
 /** Signs up this many invented singers as the music director; returns their sign-ups' ids in order. */
-export async function makeSignUps(world: World, count: number, tag: string, extra: object = {}): Promise<string[]> {
+export async function makeSignUps(
+  world: World,
+  count: number,
+  tag: string,
+  extra: object = {},
+): Promise<string[]> {
   as(world.people.md.userId);
   const emails = Array.from({ length: count }, (_, i) => `${tag}.${String(i)}@singers.example`);
   const done = await importSingers({
@@ -56,7 +68,11 @@ export async function slotIds(dayId: string): Promise<string[]> {
     .innerJoin(t.rooms, eq(t.rooms.id, t.auditionRooms.roomId))
     .where(inArray(t.slots.kind, ["slot"]))
     .orderBy(asc(t.slots.startsAt), asc(t.rooms.name));
-  const ofDay = await db.select({ id: t.slots.id }).from(t.slots).innerJoin(t.auditionRooms, eq(t.auditionRooms.id, t.slots.auditionRoomId)).where(eq(t.auditionRooms.dayId, dayId));
+  const ofDay = await db
+    .select({ id: t.slots.id })
+    .from(t.slots)
+    .innerJoin(t.auditionRooms, eq(t.auditionRooms.id, t.slots.auditionRoomId))
+    .where(eq(t.auditionRooms.dayId, dayId));
   const ids = new Set(ofDay.map((row) => row.id));
   return rows.map((row) => row.id).filter((id) => ids.has(id));
 }

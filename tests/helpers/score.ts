@@ -17,7 +17,12 @@ export function music(name: string): Uint8Array<ArrayBuffer> {
 export const LONG_DAY = "works/sullivan-the-long-day-closes.mxl";
 
 /** Sends a file to the route as a browser's form does. */
-export function upload(productionId: string, bytes: Uint8Array<ArrayBuffer>, fileName: string, fields: Record<string, string> = {}): Promise<Response> {
+export function upload(
+  productionId: string,
+  bytes: Uint8Array<ArrayBuffer>,
+  fileName: string,
+  fields: Record<string, string> = {},
+): Promise<Response> {
   const form = new FormData();
   form.set("file", new Blob([bytes]), fileName);
   for (const [name, value] of Object.entries(fields)) form.set(name, value);
@@ -29,26 +34,44 @@ export function upload(productionId: string, bytes: Uint8Array<ArrayBuffer>, fil
   return POST(request, { params: Promise.resolve({ productionId }) });
 }
 
-export const sha256 = (bytes: Uint8Array): string => createHash("sha256").update(bytes).digest("hex");
+export const sha256 = (bytes: Uint8Array): string =>
+  createHash("sha256").update(bytes).digest("hex");
 
-export type Kept = { scoreId: string; fileId: string; sha256: string; bytes: number; title: string };
+export type Kept = {
+  scoreId: string;
+  fileId: string;
+  sha256: string;
+  bytes: number;
+  title: string;
+};
 
 /** Reads and keeps a fixture as this person; throws when refused. */
 export async function keep(userId: string, productionId: string, name = LONG_DAY): Promise<Kept> {
   as(userId);
   const bytes = music(name);
-  const response = await upload(productionId, bytes, path.basename(name), { sha256: sha256(bytes) });
+  const response = await upload(productionId, bytes, path.basename(name), {
+    sha256: sha256(bytes),
+  });
   if (!response.ok) throw new Error(await response.text());
   return (await response.json()) as Kept;
 }
 
 /** The parts of a reading in their order. */
 export function partsOf(scoreId: string) {
-  return db.select().from(t.scoreParts).where(eq(t.scoreParts.scoreId, scoreId)).orderBy(t.scoreParts.place);
+  return db
+    .select()
+    .from(t.scoreParts)
+    .where(eq(t.scoreParts.scoreId, scoreId))
+    .orderBy(t.scoreParts.place);
 }
 
 /** What the review form sends for a new number, with these parts as they are told. */
-export function confirmation(productionId: string, scoreId: string, parts: { scorePartId: string; to: string; name?: string; octaveShift?: number }[], extra: object = {}) {
+export function confirmation(
+  productionId: string,
+  scoreId: string,
+  parts: { scorePartId: string; to: string; name?: string; octaveShift?: number }[],
+  extra: object = {},
+) {
   return {
     productionId,
     scoreId,

@@ -22,7 +22,10 @@ beforeEach(async () => {
 
 function storedFiles(): number {
   try {
-    return readdirSync(path.resolve(env().STORAGE_DIR), { recursive: true, withFileTypes: true }).filter((entry) => entry.isFile()).length;
+    return readdirSync(path.resolve(env().STORAGE_DIR), {
+      recursive: true,
+      withFileTypes: true,
+    }).filter((entry) => entry.isFile()).length;
   } catch {
     return 0;
   }
@@ -35,7 +38,9 @@ async function everything() {
   return [...counts, storedFiles()];
 }
 
-async function refusal(response: Response): Promise<{ status: number; code: string; message: string }> {
+async function refusal(
+  response: Response,
+): Promise<{ status: number; code: string; message: string }> {
   const body = (await response.json()) as { error: { code: string; message: string } };
   return { status: response.status, ...body.error };
 }
@@ -45,15 +50,21 @@ describe("a score that can be read", () => {
   test("is kept with its hash and its parts as written, and changes no number, role or line", async () => {
     const bytes = music(LONG_DAY);
     const kept = await keep(world.people.md.userId, world.productionId);
-    expect(kept).toMatchObject({ sha256: sha256(bytes), bytes: bytes.length, title: "The Long Day Closes" });
+    expect(kept).toMatchObject({
+      sha256: sha256(bytes),
+      bytes: bytes.length,
+      title: "The Long Day Closes",
+    });
     const parts = await partsOf(kept.scoreId);
-    expect(parts.map((part) => [part.name, part.vocal, part.lowSpelled, part.highSpelled])).toEqual([
-      ["Alto (or 1st Tenor)", true, "G♯4", "B5"],
-      ["2nd Tenor", true, "E3", "G♯4"],
-      ["1st Bass", true, "G♯2", "D4"],
-      ["2nd Bass", true, "E2", "B3"],
-      ["Piano", false, expect.anything(), expect.anything()],
-    ]);
+    expect(parts.map((part) => [part.name, part.vocal, part.lowSpelled, part.highSpelled])).toEqual(
+      [
+        ["Alto (or 1st Tenor)", true, "G♯4", "B5"],
+        ["2nd Tenor", true, "E3", "G♯4"],
+        ["1st Bass", true, "G♯2", "D4"],
+        ["2nd Bass", true, "E2", "B3"],
+        ["Piano", false, expect.anything(), expect.anything()],
+      ],
+    );
     const [file] = await db.select().from(t.files).where(eq(t.files.id, kept.fileId));
     expect(file).toMatchObject({
       productionId: world.productionId,
@@ -71,8 +82,16 @@ describe("a score that can be read", () => {
 
   test("is known by its content, whatever it is called", async () => {
     as(world.people.md.userId);
-    const plain = await upload(world.productionId, music("hostile/ok-plain-xml-named.mxl"), "number.mxl");
-    const packed = await upload(world.productionId, music("hostile/ok-zip-named.musicxml"), "number.musicxml");
+    const plain = await upload(
+      world.productionId,
+      music("hostile/ok-plain-xml-named.mxl"),
+      "number.mxl",
+    );
+    const packed = await upload(
+      world.productionId,
+      music("hostile/ok-zip-named.musicxml"),
+      "number.musicxml",
+    );
     expect([plain.status, packed.status]).toEqual([200, 200]);
   });
 
@@ -98,7 +117,12 @@ describe("what cannot be read is refused in plain words, and nothing is kept", (
   };
   const cases: [string, () => Uint8Array<ArrayBuffer>, number, RegExp][] = [
     ["a bomb of 200 MB", bomb, 413, /32 MB/],
-    ["a bomb that lies about its size", () => music("hostile/zip-bomb-lying-size.mxl"), 413, /32 MB/],
+    [
+      "a bomb that lies about its size",
+      () => music("hostile/zip-bomb-lying-size.mxl"),
+      413,
+      /32 MB/,
+    ],
     ["entities", () => music("hostile/billion-laughs.musicxml"), 422, /\w/],
     ["a web page", () => music("hostile/html-root.musicxml"), 415, /MusicXML/],
     ["a torn file", () => music("hostile/truncated.musicxml"), 422, /again/i],
@@ -119,8 +143,13 @@ describe("what cannot be read is refused in plain words, and nothing is kept", (
   test("a file that changed on the way", async () => {
     as(world.people.md.userId);
     const before = await everything();
-    const answer = await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl", { sha256: "0".repeat(64) }));
-    expect(answer).toMatchObject({ status: 422, message: expect.stringContaining("did not arrive whole") });
+    const answer = await refusal(
+      await upload(world.productionId, music(LONG_DAY), "a.mxl", { sha256: "0".repeat(64) }),
+    );
+    expect(answer).toMatchObject({
+      status: 422,
+      message: expect.stringContaining("did not arrive whole"),
+    });
     expect(await everything()).toEqual(before);
   });
 
@@ -128,41 +157,80 @@ describe("what cannot be read is refused in plain words, and nothing is kept", (
     as(world.people.md.userId);
     const address = `http://localhost:3000/api/productions/${world.productionId}/score`;
     const context = { params: Promise.resolve({ productionId: world.productionId }) };
-    const empty = await POST(new Request(address, { method: "POST", body: new FormData() }), context);
-    const json = await POST(new Request(address, { method: "POST", body: "{}", headers: { "content-type": "application/json" } }), context);
-    expect([(await refusal(empty)).code, (await refusal(json)).code]).toEqual(["invalid", "invalid"]);
+    const empty = await POST(
+      new Request(address, { method: "POST", body: new FormData() }),
+      context,
+    );
+    const json = await POST(
+      new Request(address, {
+        method: "POST",
+        body: "{}",
+        headers: { "content-type": "application/json" },
+      }),
+      context,
+    );
+    expect([(await refusal(empty)).code, (await refusal(json)).code]).toEqual([
+      "invalid",
+      "invalid",
+    ]);
   });
 });
 
 describe("who may", () => {
-  test.each(["stageManager", "director", "choreographer", "producer", "accompanist", "actor", "admin"] as const)("not: %s", async (who) => {
+  test.each([
+    "stageManager",
+    "director",
+    "choreographer",
+    "producer",
+    "accompanist",
+    "actor",
+    "admin",
+  ] as const)("not: %s", async (who) => {
     as(world.people[who].userId);
     const before = await everything();
-    expect((await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).code).toBe("not-allowed");
+    expect((await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).code).toBe(
+      "not-allowed",
+    );
     expect(await everything()).toEqual(before);
   });
 
   test("for another company, another production's music director and an id that is none, the production is not there", async () => {
     for (const who of ["outsiderMd", "outsiderAdmin", "siblingMd"] as const) {
       as(world.people[who].userId);
-      expect((await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).status).toBe(404);
+      expect(
+        (await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).status,
+      ).toBe(404);
     }
     as(world.people.md.userId);
     expect((await refusal(await upload("nonsense", music(LONG_DAY), "a.mxl"))).status).toBe(404);
     as(null);
-    expect((await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).status).toBe(401);
+    expect((await refusal(await upload(world.productionId, music(LONG_DAY), "a.mxl"))).status).toBe(
+      401,
+    );
   });
 
   test("the assistant music director may", async () => {
-    expect(await keep(world.people.assistant.userId, world.productionId, "works/beach-fairy-lullaby.mxl")).toMatchObject({ title: expect.any(String) });
+    expect(
+      await keep(
+        world.people.assistant.userId,
+        world.productionId,
+        "works/beach-fairy-lullaby.mxl",
+      ),
+    ).toMatchObject({ title: expect.any(String) });
   });
 
   test("not from another site's page", async () => {
     as(world.people.md.userId);
     const form = new FormData();
     form.set("file", new Blob([music(LONG_DAY)]), "a.mxl");
-    const request = new Request("http://localhost:3000/api", { method: "POST", body: form, headers: { "sec-fetch-site": "cross-site" } });
-    const response = await POST(request, { params: Promise.resolve({ productionId: world.productionId }) });
+    const request = new Request("http://localhost:3000/api", {
+      method: "POST",
+      body: form,
+      headers: { "sec-fetch-site": "cross-site" },
+    });
+    const response = await POST(request, {
+      params: Promise.resolve({ productionId: world.productionId }),
+    });
     expect(response.status).toBe(403);
   });
 });

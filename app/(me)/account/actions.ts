@@ -8,7 +8,14 @@ import * as accountData from "@/lib/data/account";
 import { renameUser } from "@/lib/data/productions";
 import * as sessionData from "@/lib/data/sessions";
 import * as tokenData from "@/lib/data/tokens";
-import { changeNameSchema, createTokenSchema, endSessionSchema, removePasswordSchema, revokeTokenSchema, setPasswordSchema } from "@/lib/schemas/account";
+import {
+  changeNameSchema,
+  createTokenSchema,
+  endSessionSchema,
+  removePasswordSchema,
+  revokeTokenSchema,
+  setPasswordSchema,
+} from "@/lib/schemas/account";
 
 export const changeName = defineAction({ input: changeNameSchema }, async ({ name }, actor) => {
   await renameUser(actor, name);
@@ -20,15 +27,21 @@ export const setPassword = defineAction({ input: setPasswordSchema }, async (inp
   revalidatePath("/account");
 });
 
-export const removePassword = defineAction({ input: removePasswordSchema }, async (input, actor) => {
-  await accountData.removePassword(actor, input, await currentSessionToken());
-  revalidatePath("/account");
-});
+export const removePassword = defineAction(
+  { input: removePasswordSchema },
+  async (input, actor) => {
+    await accountData.removePassword(actor, input, await currentSessionToken());
+    revalidatePath("/account");
+  },
+);
 
-export const endSession = defineAction({ input: endSessionSchema }, async ({ sessionId }, actor) => {
-  await sessionData.endSession(actor, sessionId);
-  revalidatePath("/account");
-});
+export const endSession = defineAction(
+  { input: endSessionSchema },
+  async ({ sessionId }, actor) => {
+    await sessionData.endSession(actor, sessionId);
+    revalidatePath("/account");
+  },
+);
 
 export const endOtherSessions = defineAction({ input: z.object({}) }, async (_input, actor) => {
   await sessionData.endOtherSessions(actor, await currentSessionToken());
@@ -41,7 +54,10 @@ export const createToken = defineAction({ input: createTokenSchema }, async ({ l
   return { token };
 });
 
-export const revokeToken = defineAction({ input: revokeTokenSchema }, async ({ tokenId }, actor) => {
-  await tokenData.revokeToken(actor, tokenId);
-  revalidatePath("/account");
-});
+export const revokeToken = defineAction(
+  { input: revokeTokenSchema },
+  async ({ tokenId }, actor) => {
+    await tokenData.revokeToken(actor, tokenId);
+    revalidatePath("/account");
+  },
+);

@@ -22,23 +22,47 @@ import type { changeDaySchema } from "@/lib/schemas/auditions";
 import { recordAudit } from "../audit";
 import { productionFor } from "../guard";
 import { duplicateKey, inTransaction } from "../transaction";
-import { assertDateFree, assertRooms, backToListed, dayColumns, insertRoom, insertSlots, laidOut } from "./days";
+import {
+  assertDateFree,
+  assertRooms,
+  backToListed,
+  dayColumns,
+  insertRoom,
+  insertSlots,
+  laidOut,
+} from "./days";
 import { roomTaken } from "./room-holders";
 import { dayOf } from "./scope";
 
-export type SlotLost = { signUpId: string; name: string; state: (typeof signUps.$inferSelect)["state"]; time: string; room: string };
+export type SlotLost = {
+  signUpId: string;
+  name: string;
+  state: (typeof signUps.$inferSelect)["state"];
+  time: string;
+  room: string;
+};
 
 /** Either saved, or not: then `lost` are the singers whose time no longer exists, to be agreed to once. */
 export type DayChanged = { saved: boolean; lost: SlotLost[] };
 
-type Placed = { signUpId: string; name: string; state: SlotLost["state"]; roomId: string; room: string; startsAt: Date };
+type Placed = {
+  signUpId: string;
+  name: string;
+  state: SlotLost["state"];
+  roomId: string;
+  room: string;
+  startsAt: Date;
+};
 
 /**
  * Changes a day and lays it out anew. Whoever's room and starting time still exist keeps them; if others would lose
  * their slot and are not in `mayLose`, nothing is saved and they are returned. Pianists stay as long as their room is open.
  * Throws `stale`, `taken` (who has a room and when) or `invalid`.
  */
-export async function changeDay(actor: Actor, input: z.output<typeof changeDaySchema>): Promise<DayChanged> {
+export async function changeDay(
+  actor: Actor,
+  input: z.output<typeof changeDaySchema>,
+): Promise<DayChanged> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   const day = await dayOf(db, scope.id, input.dayId);
   const wanted = laidOut(input, day.zone);
@@ -54,12 +78,21 @@ export async function changeDay(actor: Actor, input: z.output<typeof changeDaySc
 
       const placed = await placedOn(tx, day.id);
       const lost = placed.filter((singer) => !stillThere(singer, wanted));
-      if (lost.some((singer) => !input.mayLose.includes(singer.signUpId))) throw new WouldLose(lost);
+      if (lost.some((singer) => !input.mayLose.includes(singer.signUpId)))
+        throw new WouldLose(lost);
 
       await tx.delete(slotAssignments).where(eq(slotAssignments.dayId, day.id));
       await rebuildRooms(tx, day.id, wanted);
-      await placeAgain(tx, day.id, placed.filter((singer) => !lost.includes(singer)));
-      if (lost.length > 0) await backToListed(tx, lost.map((singer) => singer.signUpId));
+      await placeAgain(
+        tx,
+        day.id,
+        placed.filter((singer) => !lost.includes(singer)),
+      );
+      if (lost.length > 0)
+        await backToListed(
+          tx,
+          lost.map((singer) => singer.signUpId),
+        );
       await recordAudit(tx, actor, {
         companyId: scope.companyId,
         productionId: scope.id,
@@ -71,8 +104,10 @@ export async function changeDay(actor: Actor, input: z.output<typeof changeDaySc
       return { saved: true, lost: lost.map((singer) => inWords(singer, day.zone)) };
     });
   } catch (error) {
-    if (error instanceof WouldLose) return { saved: false, lost: error.lost.map((singer) => inWords(singer, day.zone)) };
-    if (duplicateKey(error) === "room_bookings_held") throw await roomTaken(wanted, day.zone, day.id);
+    if (error instanceof WouldLose)
+      return { saved: false, lost: error.lost.map((singer) => inWords(singer, day.zone)) };
+    if (duplicateKey(error) === "room_bookings_held")
+      throw await roomTaken(wanted, day.zone, day.id);
     throw error;
   }
 }
@@ -98,7 +133,9 @@ function stillThere(singer: Placed, wanted: readonly RoomLaidOut[]): boolean {
   const room = wanted.find((r) => r.roomId === singer.roomId);
   return (
     room?.items.some(
-      (item) => (item.kind === "slot" || item.kind === "hold") && item.from.getTime() === singer.startsAt.getTime(),
+      (item) =>
+        (item.kind === "slot" || item.kind === "hold") &&
+        item.from.getTime() === singer.startsAt.getTime(),
     ) ?? false
   );
 }
@@ -125,8 +162,13 @@ async function placedOn(tx: Tx, dayId: string): Promise<Placed[]> {
 }
 
 async function rebuildRooms(tx: Tx, dayId: string, wanted: readonly RoomLaidOut[]): Promise<void> {
-  const now = await tx.select({ id: auditionRooms.id, roomId: auditionRooms.roomId }).from(auditionRooms).where(eq(auditionRooms.dayId, dayId));
-  const gone = now.filter((room) => !wanted.some((r) => r.roomId === room.roomId)).map((room) => room.id);
+  const now = await tx
+    .select({ id: auditionRooms.id, roomId: auditionRooms.roomId })
+    .from(auditionRooms)
+    .where(eq(auditionRooms.dayId, dayId));
+  const gone = now
+    .filter((room) => !wanted.some((r) => r.roomId === room.roomId))
+    .map((room) => room.id);
   if (gone.length > 0) {
     await tx.delete(pianistSessions).where(inArray(pianistSessions.auditionRoomId, gone));
     // Slots and bookings go with their audition room.
@@ -138,7 +180,10 @@ async function rebuildRooms(tx: Tx, dayId: string, wanted: readonly RoomLaidOut[
       await insertRoom(tx, dayId, room);
       continue;
     }
-    await tx.update(auditionRooms).set({ opensAt: room.opensAt, closesAt: room.closesAt }).where(eq(auditionRooms.id, kept.id));
+    await tx
+      .update(auditionRooms)
+      .set({ opensAt: room.opensAt, closesAt: room.closesAt })
+      .where(eq(auditionRooms.id, kept.id));
     await tx
       .update(roomBookings)
       .set({ startsAt: room.opensAt, endsAt: room.closesAt })
@@ -152,14 +197,23 @@ async function rebuildRooms(tx: Tx, dayId: string, wanted: readonly RoomLaidOut[
 /** A pianist is held no longer than the room is open; who would play in a closed room is free again. */
 async function trimPianists(tx: Tx, auditionRoomId: string, room: RoomLaidOut): Promise<void> {
   const sessions = await tx
-    .select({ id: pianistSessions.id, startsAt: pianistSessions.startsAt, endsAt: pianistSessions.endsAt })
+    .select({
+      id: pianistSessions.id,
+      startsAt: pianistSessions.startsAt,
+      endsAt: pianistSessions.endsAt,
+    })
     .from(pianistSessions)
     .where(eq(pianistSessions.auditionRoomId, auditionRoomId));
   for (const session of sessions) {
     const startsAt = session.startsAt > room.opensAt ? session.startsAt : room.opensAt;
     const endsAt = session.endsAt < room.closesAt ? session.endsAt : room.closesAt;
-    if (startsAt >= endsAt) await tx.delete(pianistSessions).where(eq(pianistSessions.id, session.id));
-    else await tx.update(pianistSessions).set({ startsAt, endsAt }).where(eq(pianistSessions.id, session.id));
+    if (startsAt >= endsAt)
+      await tx.delete(pianistSessions).where(eq(pianistSessions.id, session.id));
+    else
+      await tx
+        .update(pianistSessions)
+        .set({ startsAt, endsAt })
+        .where(eq(pianistSessions.id, session.id));
   }
 }
 
@@ -170,7 +224,9 @@ async function placeAgain(tx: Tx, dayId: string, kept: readonly Placed[]): Promi
     .from(slots)
     .innerJoin(auditionRooms, eq(auditionRooms.id, slots.auditionRoomId))
     .where(eq(auditionRooms.dayId, dayId));
-  const slotAt = new Map(now.map((slot) => [`${slot.roomId} ${String(slot.startsAt.getTime())}`, slot.id]));
+  const slotAt = new Map(
+    now.map((slot) => [`${slot.roomId} ${String(slot.startsAt.getTime())}`, slot.id]),
+  );
   const values = kept.flatMap((singer) => {
     const slotId = slotAt.get(`${singer.roomId} ${String(singer.startsAt.getTime())}`);
     return slotId === undefined ? [] : [{ slotId, signUpId: singer.signUpId, dayId }];

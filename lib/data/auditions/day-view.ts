@@ -22,7 +22,11 @@ import { dayOf } from "./scope";
 import { listWaiting } from "./waiting";
 
 /** One audition day as its page shows it and reads again every few seconds: rooms, slots, who sings, pianists, who waits. */
-export async function readDay(actor: Actor, productionId: string, dayId: string): Promise<AuditionDayView> {
+export async function readDay(
+  actor: Actor,
+  productionId: string,
+  dayId: string,
+): Promise<AuditionDayView> {
   const scope = await productionFor(actor, productionId, "auditions:read");
   const day = await dayOf(db, scope.id, dayId);
   const held = await db
@@ -58,9 +62,15 @@ export async function readDay(actor: Actor, productionId: string, dayId: string)
           .where(inArray(pianistSessions.auditionRoomId, roomIds))
           .orderBy(asc(pianistSessions.startsAt)),
     listWaiting(db, scope.id),
-    db.select({ id: dayLinks.id }).from(dayLinks).where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt))),
+    db
+      .select({ id: dayLinks.id })
+      .from(dayLinks)
+      .where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt))),
   ]);
-  const ranges = await rangesOf(db, [...items.flatMap((item) => item.personId ?? []), ...waiting.map((w) => w.personId)]);
+  const ranges = await rangesOf(db, [
+    ...items.flatMap((item) => item.personId ?? []),
+    ...waiting.map((w) => w.personId),
+  ]);
   const rangeOf = (personId: string): SingerOnDay["range"] => {
     const best = ranges.get(personId)?.best;
     return best ? { low: best.low, high: best.high, kind: best.kind } : null;
@@ -106,7 +116,11 @@ export async function readDay(actor: Actor, productionId: string, dayId: string)
           endsAt: session.endsAt.toISOString(),
         })),
     })),
-    waiting: waiting.map(({ place: _, ...row }) => ({ ...row, attendance: null, range: rangeOf(row.personId) })),
+    waiting: waiting.map(({ place: _, ...row }) => ({
+      ...row,
+      attendance: null,
+      range: rangeOf(row.personId),
+    })),
     may: {
       plan: can(actor, "auditions:plan", subject),
       assign: can(actor, "pianists:assign", subject),
@@ -152,8 +166,12 @@ async function listItems(dayId: string, roomIds: string[]) {
 
 type Item = Awaited<ReturnType<typeof listItems>>[number];
 
-function singerOf(item: Item, rangeOf: (personId: string) => SingerOnDay["range"]): SingerOnDay | null {
-  if (item.signUpId === null || item.personId === null || item.name === null || item.state === null) return null;
+function singerOf(
+  item: Item,
+  rangeOf: (personId: string) => SingerOnDay["range"],
+): SingerOnDay | null {
+  if (item.signUpId === null || item.personId === null || item.name === null || item.state === null)
+    return null;
   return {
     signUpId: item.signUpId,
     version: item.signUpVersion ?? 1,
@@ -168,6 +186,13 @@ function singerOf(item: Item, rangeOf: (personId: string) => SingerOnDay["range"
     notBefore: item.notBefore,
     notAfter: item.notAfter,
     range: rangeOf(item.personId),
-    attendance: item.outAt !== null ? "out" : item.inAt !== null ? "in" : item.hereAt !== null ? "here" : null,
+    attendance:
+      item.outAt !== null
+        ? "out"
+        : item.inAt !== null
+          ? "in"
+          : item.hereAt !== null
+            ? "here"
+            : null,
   };
 }

@@ -43,7 +43,12 @@ export type DayListed = {
 export async function listDays(actor: Actor, productionId: string): Promise<DayListed[]> {
   const scope = await productionFor(actor, productionId, "auditions:read");
   const days = await db
-    .select({ id: auditionDays.id, localDate: auditionDays.localDate, zone: auditionDays.zone, slotMinutes: auditionDays.slotMinutes })
+    .select({
+      id: auditionDays.id,
+      localDate: auditionDays.localDate,
+      zone: auditionDays.zone,
+      slotMinutes: auditionDays.slotMinutes,
+    })
     .from(auditionDays)
     .where(and(eq(auditionDays.productionId, scope.id), isNull(auditionDays.removedAt)))
     .orderBy(asc(auditionDays.localDate));
@@ -51,7 +56,12 @@ export async function listDays(actor: Actor, productionId: string): Promise<DayL
   const ids = days.map((day) => day.id);
   const [held, counts] = await Promise.all([
     db
-      .select({ dayId: auditionRooms.dayId, name: rooms.name, opensAt: auditionRooms.opensAt, closesAt: auditionRooms.closesAt })
+      .select({
+        dayId: auditionRooms.dayId,
+        name: rooms.name,
+        opensAt: auditionRooms.opensAt,
+        closesAt: auditionRooms.closesAt,
+      })
       .from(auditionRooms)
       .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
       .where(inArray(auditionRooms.dayId, ids))
@@ -72,14 +82,20 @@ export async function listDays(actor: Actor, productionId: string): Promise<DayL
     const count = counts.find((row) => row.dayId === day.id);
     return {
       ...day,
-      rooms: held.filter((row) => row.dayId === day.id).map(({ name, opensAt, closesAt }) => ({ name, opensAt, closesAt })),
+      rooms: held
+        .filter((row) => row.dayId === day.id)
+        .map(({ name, opensAt, closesAt }) => ({ name, opensAt, closesAt })),
       slots: count?.slots ?? 0,
       placed: count?.placed ?? 0,
     };
   });
 }
 
-export type DayChoices = { zone: string; locale: string; rooms: { id: string; name: string; venue: string; hasPiano: boolean }[] };
+export type DayChoices = {
+  zone: string;
+  locale: string;
+  rooms: { id: string; name: string; venue: string; hasPiano: boolean }[];
+};
 
 /** What a day can be made of: the company's rooms and its clock. */
 export async function listDayChoices(actor: Actor, productionId: string): Promise<DayChoices> {
@@ -94,35 +110,70 @@ export async function listDayChoices(actor: Actor, productionId: string): Promis
 }
 
 /** Throws unless every room is one of the company's. */
-export async function assertRooms(tx: Tx, companyId: string, wanted: readonly RoomLaidOut[]): Promise<void> {
+export async function assertRooms(
+  tx: Tx,
+  companyId: string,
+  wanted: readonly RoomLaidOut[],
+): Promise<void> {
   const found = await tx
     .select({ id: rooms.id })
     .from(rooms)
-    .where(and(eq(rooms.companyId, companyId), inArray(rooms.id, wanted.map((room) => room.roomId))));
-  if (found.length !== wanted.length) throw new AppError("not-found", "One of the rooms is not there any more. Load the page again.");
+    .where(
+      and(
+        eq(rooms.companyId, companyId),
+        inArray(
+          rooms.id,
+          wanted.map((room) => room.roomId),
+        ),
+      ),
+    );
+  if (found.length !== wanted.length)
+    throw new AppError("not-found", "One of the rooms is not there any more. Load the page again.");
 }
 
 /** The day laid out, or a refusal beside the rooms that says what to change. */
 export function laidOut(plan: DayPlan, zone: string): RoomLaidOut[] {
   const result = layOutDay(plan, zone);
-  if (!result.ok) throw new AppError("invalid", result.message, { fields: { rooms: result.message } });
+  if (!result.ok) throw new AppError("invalid", undefined, { fields: { rooms: result.message } });
   return result.rooms;
 }
 
 /** One room of a day with its booking and its slots. Returns the audition room's id. */
 export async function insertRoom(tx: Tx, dayId: string, room: RoomLaidOut): Promise<string> {
   const auditionRoomId = newId();
-  await tx.insert(auditionRooms).values({ id: auditionRoomId, dayId, roomId: room.roomId, opensAt: room.opensAt, closesAt: room.closesAt });
-  await tx.insert(roomBookings).values({ roomId: room.roomId, startsAt: room.opensAt, endsAt: room.closesAt, auditionRoomId });
+  await tx
+    .insert(auditionRooms)
+    .values({
+      id: auditionRoomId,
+      dayId,
+      roomId: room.roomId,
+      opensAt: room.opensAt,
+      closesAt: room.closesAt,
+    });
+  await tx
+    .insert(roomBookings)
+    .values({ roomId: room.roomId, startsAt: room.opensAt, endsAt: room.closesAt, auditionRoomId });
   await insertSlots(tx, auditionRoomId, room);
   return auditionRoomId;
 }
 
 /** The slots, rests and lunch of a room, as laid out. */
-export async function insertSlots(tx: Tx, auditionRoomId: string, room: RoomLaidOut): Promise<void> {
+export async function insertSlots(
+  tx: Tx,
+  auditionRoomId: string,
+  room: RoomLaidOut,
+): Promise<void> {
   await tx
     .insert(slots)
-    .values(room.items.map((item) => ({ id: newId(), auditionRoomId, kind: item.kind, startsAt: item.from, endsAt: item.to })));
+    .values(
+      room.items.map((item) => ({
+        id: newId(),
+        auditionRoomId,
+        kind: item.kind,
+        startsAt: item.from,
+        endsAt: item.to,
+      })),
+    );
 }
 
 /** The day's columns from a plan. */
@@ -139,15 +190,31 @@ export function dayColumns(plan: DayPlan) {
 }
 
 /** Throws `taken` when the production has another day on this date. Locks the production, so that two cannot be made at once. */
-export async function assertDateFree(tx: Tx, productionId: string, localDate: string, exceptDayId: string | null, locale: string): Promise<void> {
-  await tx.select({ id: productions.id }).from(productions).where(eq(productions.id, productionId)).for("update");
+export async function assertDateFree(
+  tx: Tx,
+  productionId: string,
+  localDate: string,
+  exceptDayId: string | null,
+  locale: string,
+): Promise<void> {
+  await tx
+    .select({ id: productions.id })
+    .from(productions)
+    .where(eq(productions.id, productionId))
+    .for("update");
   const same = await tx
     .select({ id: auditionDays.id })
     .from(auditionDays)
-    .where(and(eq(auditionDays.productionId, productionId), eq(auditionDays.localDate, localDate), isNull(auditionDays.removedAt)));
+    .where(
+      and(
+        eq(auditionDays.productionId, productionId),
+        eq(auditionDays.localDate, localDate),
+        isNull(auditionDays.removedAt),
+      ),
+    );
   if (same.some((day) => day.id !== exceptDayId)) {
     const message = `There is an audition day on ${longDay(localDate, locale)} already. Add the room to that day instead.`;
-    throw new AppError("taken", message, { fields: { localDate: message } });
+    throw new AppError("taken", undefined, { fields: { localDate: message } });
   }
 }
 
@@ -155,7 +222,10 @@ export async function assertDateFree(tx: Tx, productionId: string, localDate: st
  * Makes an audition day in the company's zone, lays out its rooms and books them. Returns the day's id.
  * Throws `taken` with who has a room and when, or `invalid` when no slot fits.
  */
-export async function createDay(actor: Actor, input: z.output<typeof createDaySchema>): Promise<string> {
+export async function createDay(
+  actor: Actor,
+  input: z.output<typeof createDaySchema>,
+): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   const wanted = laidOut(input, scope.zone);
   const dayId = newId();
@@ -163,7 +233,9 @@ export async function createDay(actor: Actor, input: z.output<typeof createDaySc
     await inTransaction(async (tx) => {
       await assertRooms(tx, scope.companyId, wanted);
       await assertDateFree(tx, scope.id, input.localDate, null, scope.locale);
-      await tx.insert(auditionDays).values({ id: dayId, productionId: scope.id, zone: scope.zone, ...dayColumns(input) });
+      await tx
+        .insert(auditionDays)
+        .values({ id: dayId, productionId: scope.id, zone: scope.zone, ...dayColumns(input) });
       for (const room of wanted) await insertRoom(tx, dayId, room);
       await recordAudit(tx, actor, {
         companyId: scope.companyId,
@@ -175,7 +247,8 @@ export async function createDay(actor: Actor, input: z.output<typeof createDaySc
       });
     });
   } catch (error) {
-    if (duplicateKey(error) === "room_bookings_held") throw await roomTaken(wanted, scope.zone, null);
+    if (duplicateKey(error) === "room_bookings_held")
+      throw await roomTaken(wanted, scope.zone, null);
     throw error;
   }
   return dayId;
@@ -186,15 +259,30 @@ export async function removeDay(actor: Actor, input: z.output<typeof daySchema>)
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   await inTransaction(async (tx) => {
     const day = await lockDay(tx, scope.id, input.dayId);
-    const roomIds = (await tx.select({ id: auditionRooms.id }).from(auditionRooms).where(eq(auditionRooms.dayId, day.id))).map((r) => r.id);
-    const placed = await tx.select({ signUpId: slotAssignments.signUpId }).from(slotAssignments).where(eq(slotAssignments.dayId, day.id));
+    const roomIds = (
+      await tx
+        .select({ id: auditionRooms.id })
+        .from(auditionRooms)
+        .where(eq(auditionRooms.dayId, day.id))
+    ).map((r) => r.id);
+    const placed = await tx
+      .select({ signUpId: slotAssignments.signUpId })
+      .from(slotAssignments)
+      .where(eq(slotAssignments.dayId, day.id));
     await tx.delete(slotAssignments).where(eq(slotAssignments.dayId, day.id));
-    if (placed.length > 0) await backToListed(tx, placed.map((row) => row.signUpId));
+    if (placed.length > 0)
+      await backToListed(
+        tx,
+        placed.map((row) => row.signUpId),
+      );
     if (roomIds.length > 0) {
       await tx.delete(pianistSessions).where(inArray(pianistSessions.auditionRoomId, roomIds));
       await tx.delete(roomBookings).where(inArray(roomBookings.auditionRoomId, roomIds));
     }
-    await tx.update(dayLinks).set({ revokedAt: new Date() }).where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
+    await tx
+      .update(dayLinks)
+      .set({ revokedAt: new Date() })
+      .where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
     await tx
       .update(auditionDays)
       .set({ removedAt: new Date(), version: sql`${auditionDays.version} + 1` })
@@ -214,7 +302,12 @@ export async function removeDay(actor: Actor, input: z.output<typeof daySchema>)
 export async function backToListed(tx: Tx, signUpIds: string[]): Promise<void> {
   await tx
     .update(signUps)
-    .set({ state: "listed", invitedAt: null, answeredAt: null, version: sql`${signUps.version} + 1` })
+    .set({
+      state: "listed",
+      invitedAt: null,
+      answeredAt: null,
+      version: sql`${signUps.version} + 1`,
+    })
     .where(and(inArray(signUps.id, signUpIds), inArray(signUps.state, ["invited", "confirmed"])));
 }
 

@@ -14,12 +14,18 @@ import { inTransaction } from "../transaction";
 import { lockDay } from "./scope";
 
 /** Makes the monitor's link of a day; an older one stops working. The address is shown once: only its hash is kept. */
-export async function makeDoorLink(actor: Actor, input: z.output<typeof daySchema>): Promise<string> {
+export async function makeDoorLink(
+  actor: Actor,
+  input: z.output<typeof daySchema>,
+): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "door:run");
   const secret = newSecret();
   await inTransaction(async (tx) => {
     const day = await lockDay(tx, scope.id, input.dayId);
-    await tx.update(dayLinks).set({ revokedAt: new Date() }).where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
+    await tx
+      .update(dayLinks)
+      .set({ revokedAt: new Date() })
+      .where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
     await tx.insert(dayLinks).values({ id: newId(), dayId: day.id, tokenHash: hashToken(secret) });
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
@@ -34,11 +40,17 @@ export async function makeDoorLink(actor: Actor, input: z.output<typeof daySchem
 }
 
 /** Ends the monitor's link of a day at once. */
-export async function revokeDoorLink(actor: Actor, input: z.output<typeof daySchema>): Promise<void> {
+export async function revokeDoorLink(
+  actor: Actor,
+  input: z.output<typeof daySchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "door:run");
   await inTransaction(async (tx) => {
     const day = await lockDay(tx, scope.id, input.dayId);
-    await tx.update(dayLinks).set({ revokedAt: new Date() }).where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
+    await tx
+      .update(dayLinks)
+      .set({ revokedAt: new Date() })
+      .where(and(eq(dayLinks.dayId, day.id), isNull(dayLinks.revokedAt)));
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
       productionId: scope.id,

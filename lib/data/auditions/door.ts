@@ -3,7 +3,18 @@ import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
-import { attendances, auditionDays, auditionRooms, dayLinks, people, productions, rooms, signUps, slotAssignments, slots } from "@/db/schema";
+import {
+  attendances,
+  auditionDays,
+  auditionRooms,
+  dayLinks,
+  people,
+  productions,
+  rooms,
+  signUps,
+  slotAssignments,
+  slots,
+} from "@/db/schema";
 import { hashToken } from "@/lib/auth/hash-token";
 import type { DoorItem, DoorView } from "@/lib/auditions/door-view";
 import { AppError } from "@/lib/errors";
@@ -113,7 +124,12 @@ export async function readDoor(token: string, source: string, now = new Date()):
   return view;
 }
 
-function stateOf(row: { signUpState: string | null; hereAt: Date | null; inAt: Date | null; outAt: Date | null }): DoorItem["state"] {
+function stateOf(row: {
+  signUpState: string | null;
+  hereAt: Date | null;
+  inAt: Date | null;
+  outAt: Date | null;
+}): DoorItem["state"] {
   if (row.outAt !== null) return "heard";
   if (row.inAt !== null) return "inside";
   if (row.hereAt !== null) return "here";
@@ -124,14 +140,27 @@ function stateOf(row: { signUpState: string | null; hereAt: Date | null; inAt: D
  * The monitor marks a singer as here, sends them in, or has them out; "not-here" takes "here" back. Sending somebody in
  * shows whoever was inside out: one singer at a time in a room. Throws `refused` on another day or out of order.
  */
-export async function actAtDoor(input: z.output<typeof doorActSchema>, source: string, now = new Date()): Promise<void> {
+export async function actAtDoor(
+  input: z.output<typeof doorActSchema>,
+  source: string,
+  now = new Date(),
+): Promise<void> {
   const day = await dayOfLink(input.token, source);
   const notice = closedNotice(day, now);
   if (notice !== null) throw new AppError("refused", notice);
   await inTransaction(async (tx) => {
-    await tx.select({ id: auditionDays.id }).from(auditionDays).where(eq(auditionDays.id, day.id)).for("update");
+    await tx
+      .select({ id: auditionDays.id })
+      .from(auditionDays)
+      .where(eq(auditionDays.id, day.id))
+      .for("update");
     const [singer] = await tx
-      .select({ signUpId: signUps.id, name: people.name, roomId: slots.auditionRoomId, startsAt: slots.startsAt })
+      .select({
+        signUpId: signUps.id,
+        name: people.name,
+        roomId: slots.auditionRoomId,
+        startsAt: slots.startsAt,
+      })
       .from(slotAssignments)
       .innerJoin(slots, eq(slots.id, slotAssignments.slotId))
       .innerJoin(signUps, eq(signUps.id, slotAssignments.signUpId))
@@ -142,7 +171,12 @@ export async function actAtDoor(input: z.output<typeof doorActSchema>, source: s
       .select()
       .from(attendances)
       .where(and(eq(attendances.dayId, day.id), eq(attendances.signUpId, singer.signUpId)));
-    const next = marked(input.act, { hereAt: kept?.hereAt ?? null, inAt: kept?.inAt ?? null, outAt: kept?.outAt ?? null }, now, singer.name);
+    const next = marked(
+      input.act,
+      { hereAt: kept?.hereAt ?? null, inAt: kept?.inAt ?? null, outAt: kept?.outAt ?? null },
+      now,
+      singer.name,
+    );
     if (input.act === "in") await showOthersOut(tx, day.id, singer, now);
     await tx
       .insert(attendances)
@@ -161,7 +195,12 @@ export async function actAtDoor(input: z.output<typeof doorActSchema>, source: s
 
 type Marks = { hereAt: Date | null; inAt: Date | null; outAt: Date | null };
 
-function marked(act: z.output<typeof doorActSchema>["act"], marks: Marks, now: Date, name: string): Marks {
+function marked(
+  act: z.output<typeof doorActSchema>["act"],
+  marks: Marks,
+  now: Date,
+  name: string,
+): Marks {
   switch (act) {
     case "here":
       return { ...marks, hereAt: marks.hereAt ?? now };
@@ -171,19 +210,36 @@ function marked(act: z.output<typeof doorActSchema>["act"], marks: Marks, now: D
     case "in":
       return { hereAt: marks.hereAt ?? now, inAt: now, outAt: null };
     case "out":
-      if (marks.inAt === null) throw new AppError("refused", `${name} has not been sent in. Press “Send in” first.`);
+      if (marks.inAt === null)
+        throw new AppError("refused", `${name} has not been sent in. Press “Send in” first.`);
       return { ...marks, outAt: marks.outAt ?? now };
   }
 }
 
-async function showOthersOut(tx: Tx, dayId: string, singer: { signUpId: string; roomId: string }, now: Date): Promise<void> {
+async function showOthersOut(
+  tx: Tx,
+  dayId: string,
+  singer: { signUpId: string; roomId: string },
+  now: Date,
+): Promise<void> {
   const inside = await tx
     .select({ signUpId: attendances.signUpId, inAt: attendances.inAt })
     .from(attendances)
-    .innerJoin(slotAssignments, and(eq(slotAssignments.signUpId, attendances.signUpId), eq(slotAssignments.dayId, dayId)))
+    .innerJoin(
+      slotAssignments,
+      and(eq(slotAssignments.signUpId, attendances.signUpId), eq(slotAssignments.dayId, dayId)),
+    )
     .innerJoin(slots, eq(slots.id, slotAssignments.slotId))
-    .where(and(eq(attendances.dayId, dayId), eq(slots.auditionRoomId, singer.roomId), isNull(attendances.outAt)));
-  const ids = inside.filter((row) => row.inAt !== null && row.signUpId !== singer.signUpId).map((row) => row.signUpId);
+    .where(
+      and(
+        eq(attendances.dayId, dayId),
+        eq(slots.auditionRoomId, singer.roomId),
+        isNull(attendances.outAt),
+      ),
+    );
+  const ids = inside
+    .filter((row) => row.inAt !== null && row.signUpId !== singer.signUpId)
+    .map((row) => row.signUpId);
   if (ids.length === 0) return;
   await tx
     .update(attendances)

@@ -30,26 +30,44 @@ async function freeSlots(tx: Db | Tx, dayId: string) {
     .innerJoin(auditionRooms, eq(auditionRooms.id, slots.auditionRoomId))
     .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
     .leftJoin(slotAssignments, eq(slotAssignments.slotId, slots.id))
-    .where(and(eq(auditionRooms.dayId, dayId), eq(slots.kind, "slot"), isNull(slotAssignments.signUpId)))
+    .where(
+      and(eq(auditionRooms.dayId, dayId), eq(slots.kind, "slot"), isNull(slotAssignments.signUpId)),
+    )
     .orderBy(asc(rooms.name), asc(slots.startsAt));
 }
 
 const asked = (from: string | null, to: string | null): string =>
-  from !== null && to !== null ? `between ${from} and ${to}` : from !== null ? `after ${from}` : `before ${to ?? ""}`;
+  from !== null && to !== null
+    ? `between ${from} and ${to}`
+    : from !== null
+      ? `after ${from}`
+      : `before ${to ?? ""}`;
 
 /**
  * Proposes a slot for everyone who waits: as many as can be, everyone within the times they asked for, holds left free.
  * Writes nothing. `now` is the clock: slots that have begun are not offered.
  */
-export async function proposeFill(actor: Actor, input: z.output<typeof daySchema>, now = new Date()): Promise<FillProposal> {
+export async function proposeFill(
+  actor: Actor,
+  input: z.output<typeof daySchema>,
+  now = new Date(),
+): Promise<FillProposal> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   const day = await dayOf(db, scope.id, input.dayId);
   const [free, waiting] = await Promise.all([freeSlots(db, day.id), listWaiting(db, scope.id)]);
   const roomNames = [...new Set(free.map((slot) => slot.room))];
-  const at = (time: string | null): Date | null => (time === null ? null : toInstant(day.localDate, time, day.zone).instant);
+  const at = (time: string | null): Date | null =>
+    time === null ? null : toInstant(day.localDate, time, day.zone).instant;
   const plan = planFill(
-    free.filter((slot) => slot.startsAt >= now).map((slot) => ({ ...slot, roomPlace: roomNames.indexOf(slot.room) })),
-    waiting.map((singer) => ({ signUpId: singer.signUpId, place: singer.place, notBefore: at(singer.notBefore), notAfter: at(singer.notAfter) })),
+    free
+      .filter((slot) => slot.startsAt >= now)
+      .map((slot) => ({ ...slot, roomPlace: roomNames.indexOf(slot.room) })),
+    waiting.map((singer) => ({
+      signUpId: singer.signUpId,
+      place: singer.place,
+      notBefore: at(singer.notBefore),
+      notAfter: at(singer.notAfter),
+    })),
   );
   const slotById = new Map(free.map((slot) => [slot.slotId, slot]));
   const singerById = new Map(waiting.map((singer) => [singer.signUpId, singer]));
@@ -57,7 +75,17 @@ export async function proposeFill(actor: Actor, input: z.output<typeof daySchema
     placements: plan.placements.flatMap(({ signUpId, slotId }) => {
       const slot = slotById.get(slotId);
       const singer = singerById.get(signUpId);
-      return slot && singer ? [{ signUpId, name: singer.name, slotId, time: clock(slot.startsAt, day.zone), room: slot.room }] : [];
+      return slot && singer
+        ? [
+            {
+              signUpId,
+              name: singer.name,
+              slotId,
+              time: clock(slot.startsAt, day.zone),
+              room: slot.room,
+            },
+          ]
+        : [];
     }),
     unplaced: plan.unplaced.flatMap(({ signUpId, reason }) => {
       const singer = singerById.get(signUpId);
@@ -78,9 +106,16 @@ export async function proposeFill(actor: Actor, input: z.output<typeof daySchema
 }
 
 /** Writes a proposal that was accepted, whole or not at all. Throws `stale` when the day changed since. */
-export async function acceptFill(actor: Actor, input: z.output<typeof acceptFillSchema>): Promise<number> {
+export async function acceptFill(
+  actor: Actor,
+  input: z.output<typeof acceptFillSchema>,
+): Promise<number> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
-  const changed = (): AppError => new AppError("stale", "The day changed while you looked: one of these slots or singers is placed now. Ask for a new proposal.");
+  const changed = (): AppError =>
+    new AppError(
+      "stale",
+      "The day changed while you looked: one of these slots or singers is placed now. Ask for a new proposal.",
+    );
   try {
     return await inTransaction(async (tx) => {
       const day = await lockDay(tx, scope.id, input.dayId);
@@ -89,8 +124,11 @@ export async function acceptFill(actor: Actor, input: z.output<typeof acceptFill
       const free = await freeSlots(tx, day.id);
       const waiting = new Set((await listWaiting(tx, scope.id)).map((singer) => singer.signUpId));
       const freeIds = new Set(free.map((slot) => slot.slotId));
-      if (input.placements.some((p) => !freeIds.has(p.slotId) || !waiting.has(p.signUpId))) throw changed();
-      await tx.insert(slotAssignments).values(input.placements.map((p) => ({ ...p, dayId: day.id })));
+      if (input.placements.some((p) => !freeIds.has(p.slotId) || !waiting.has(p.signUpId)))
+        throw changed();
+      await tx
+        .insert(slotAssignments)
+        .values(input.placements.map((p) => ({ ...p, dayId: day.id })));
       await recordAudit(tx, actor, {
         companyId: scope.companyId,
         productionId: scope.id,

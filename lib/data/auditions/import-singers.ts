@@ -20,31 +20,57 @@ import { nextPlace, takeSignUp } from "./sign-ups";
  * Reads a list of singers and says what each row would become; writes nothing. Throws `too-large`, `wrong-kind` or
  * `refused` with what to do when the file cannot be read.
  */
-export async function previewImport(actor: Actor, productionId: string, file: { bytes: Uint8Array; name: string }): Promise<ImportPreview> {
+export async function previewImport(
+  actor: Actor,
+  productionId: string,
+  file: { bytes: Uint8Array; name: string },
+): Promise<ImportPreview> {
   const scope = await productionFor(actor, productionId, "auditions:plan");
   const sheet = await readSingersSheet(file.bytes, file.name);
   const [problem] = sheet.problems;
   if (problem) {
-    const code = problem.code === "too-large" ? "too-large" : problem.code === "not-a-spreadsheet" ? "wrong-kind" : "refused";
+    const code =
+      problem.code === "too-large"
+        ? "too-large"
+        : problem.code === "not-a-spreadsheet"
+          ? "wrong-kind"
+          : "refused";
     throw new AppError(code, problem.message);
   }
   const rows = sheet.rows.map(checkRow);
-  const emails = rows.flatMap((row) => (row.problems.length === 0 && row.values.email ? [row.values.email.trim().toLowerCase()] : []));
+  const emails = rows.flatMap((row) =>
+    row.problems.length === 0 && row.values.email ? [row.values.email.trim().toLowerCase()] : [],
+  );
   const known =
     emails.length === 0
       ? []
       : await db
           .select({ email: people.email, name: people.name, signUpId: signUps.id })
           .from(people)
-          .leftJoin(signUps, and(eq(signUps.personId, people.id), eq(signUps.productionId, scope.id)))
+          .leftJoin(
+            signUps,
+            and(eq(signUps.personId, people.id), eq(signUps.productionId, scope.id)),
+          )
           .where(and(eq(people.companyId, scope.companyId), inArray(people.email, emails)));
   const byEmail = new Map(known.map((person) => [person.email, person]));
   return {
     unknownColumns: sheet.unknownColumns,
     rows: rows.map((row) => {
       const person = byEmail.get(row.values.email.trim().toLowerCase());
-      const becomes = row.problems.length > 0 ? "problem" : !person ? "new person" : person.signUpId === null ? "known person" : "signed up";
-      return { ...row, becomes, knownAs: becomes === "problem" || !person || person.name === row.values.name ? null : person.name };
+      const becomes =
+        row.problems.length > 0
+          ? "problem"
+          : !person
+            ? "new person"
+            : person.signUpId === null
+              ? "known person"
+              : "signed up";
+      return {
+        ...row,
+        becomes,
+        knownAs:
+          becomes === "problem" || !person || person.name === row.values.name ? null : person.name,
+      };
     }),
   };
 }
@@ -52,7 +78,12 @@ export async function previewImport(actor: Actor, productionId: string, file: { 
 /** The row as it would be saved, checked by the very schema that saving uses. */
 function checkRow(row: SingerRow): Omit<ImportRow, "becomes" | "knownAs"> {
   const { low, high, role, ...rest } = row.values;
-  const values: SingerRowInput = { ...rest, asksFor: role ?? null, low: low?.midi ?? null, high: high?.midi ?? null };
+  const values: SingerRowInput = {
+    ...rest,
+    asksFor: role ?? null,
+    low: low?.midi ?? null,
+    high: high?.midi ?? null,
+  };
   const problems = row.problems.map((problem) => problem.message);
   if (problems.length === 0) {
     const parsed = singerRowSchema.safeParse(values);
@@ -64,7 +95,10 @@ function checkRow(row: SingerRow): Omit<ImportRow, "becomes" | "knownAs"> {
 export type Imported = { added: number; newPeople: number; already: number };
 
 /** Signs up the rows that were accepted, in their order. Whoever is signed up already is left as they are, so that a second time adds nobody. */
-export async function importSingers(actor: Actor, input: z.output<typeof importSingersSchema>): Promise<Imported> {
+export async function importSingers(
+  actor: Actor,
+  input: z.output<typeof importSingersSchema>,
+): Promise<Imported> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   try {
     return await inTransaction(async (tx) => {
@@ -94,7 +128,11 @@ export async function importSingers(actor: Actor, input: z.output<typeof importS
       return done;
     });
   } catch (error) {
-    if (duplicateKey(error) !== null) throw new AppError("stale", "Someone else added one of these people at the same moment. Import again: nobody goes in twice.");
+    if (duplicateKey(error) !== null)
+      throw new AppError(
+        "stale",
+        "Someone else added one of these people at the same moment. Import again: nobody goes in twice.",
+      );
     throw error;
   }
 }

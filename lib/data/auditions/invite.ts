@@ -59,7 +59,10 @@ async function toInvite(tx: Db | Tx, day: DayRow, signUpIds: readonly string[] |
 }
 
 /** What inviting would send, and to whom; sends nothing. */
-export async function previewInvitations(actor: Actor, input: z.output<typeof inviteSingersSchema>): Promise<InvitationPreview> {
+export async function previewInvitations(
+  actor: Actor,
+  input: z.output<typeof inviteSingersSchema>,
+): Promise<InvitationPreview> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   const day = await dayOf(db, scope.id, input.dayId);
   const rows = await toInvite(db, day, input.signUpIds);
@@ -75,7 +78,11 @@ export async function previewInvitations(actor: Actor, input: z.output<typeof in
       })
     : null;
   return {
-    recipients: reachable.map((row) => ({ signUpId: row.signUpId, name: row.name, when: slotInWords(row, scope.locale) })),
+    recipients: reachable.map((row) => ({
+      signUpId: row.signUpId,
+      name: row.name,
+      when: slotInWords(row, scope.locale),
+    })),
     withoutAddress: rows.filter((row) => row.email === null).map((row) => row.name),
     message: written ? { subject: written.subject, text: written.text } : null,
   };
@@ -85,7 +92,11 @@ export async function previewInvitations(actor: Actor, input: z.output<typeof in
  * Invites singers to their slots by mail: those chosen, or everyone placed on the day and not invited yet. Nobody is
  * invited twice to the same time. `now` is the clock: a day that is over invites nobody. Returns how many were invited.
  */
-export async function inviteSingers(actor: Actor, input: z.output<typeof inviteSingersSchema>, now = new Date()): Promise<number> {
+export async function inviteSingers(
+  actor: Actor,
+  input: z.output<typeof inviteSingersSchema>,
+  now = new Date(),
+): Promise<number> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   return inTransaction(async (tx) => {
     // The day is locked while its slots are read, so that nobody is told a time they were just moved from, and two people
@@ -93,9 +104,16 @@ export async function inviteSingers(actor: Actor, input: z.output<typeof inviteS
     const day = await lockDay(tx, scope.id, input.dayId);
     const rows = (await toInvite(tx, day, input.signUpIds)).filter((row) => row.email !== null);
     if (rows.length === 0) return 0;
-    await lockSignUps(tx, scope.id, rows.map((row) => row.signUpId));
+    await lockSignUps(
+      tx,
+      scope.id,
+      rows.map((row) => row.signUpId),
+    );
     if (rows.some((row) => row.startsAt < now)) {
-      throw new AppError("refused", "Some of these slots have begun already. Move those singers to a later slot, or invite the others one by one.");
+      throw new AppError(
+        "refused",
+        "Some of these slots have begun already. Move those singers to a later slot, or invite the others one by one.",
+      );
     }
     for (const row of rows) {
       if (row.email === null) continue;

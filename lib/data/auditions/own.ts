@@ -1,7 +1,18 @@
 import "server-only";
 import { and, asc, eq, inArray, isNull, sql } from "drizzle-orm";
 import { db } from "@/db/client";
-import { auditionDays, auditionRooms, companies, people, productions, rooms, signUps, slotAssignments, slots, venues } from "@/db/schema";
+import {
+  auditionDays,
+  auditionRooms,
+  companies,
+  people,
+  productions,
+  rooms,
+  signUps,
+  slotAssignments,
+  slots,
+  venues,
+} from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
 import { recordAudit } from "../audit";
@@ -34,8 +45,14 @@ function ownSignUps(actor: Actor) {
   return own.length === 0
     ? null
     : and(
-        inArray(signUps.personId, own.map((p) => p.personId)),
-        inArray(signUps.productionId, own.flatMap((p) => p.productionId ?? [])),
+        inArray(
+          signUps.personId,
+          own.map((p) => p.personId),
+        ),
+        inArray(
+          signUps.productionId,
+          own.flatMap((p) => p.productionId ?? []),
+        ),
       );
 }
 
@@ -69,7 +86,14 @@ export async function listOwnSlots(actor: Actor): Promise<OwnSlot[]> {
     .innerJoin(venues, eq(venues.id, rooms.venueId))
     .innerJoin(productions, eq(productions.id, signUps.productionId))
     .innerJoin(companies, eq(companies.id, productions.companyId))
-    .where(and(own, isNull(auditionDays.removedAt), isNull(productions.removedAt), inArray(signUps.state, ["invited", "confirmed", "declined"])))
+    .where(
+      and(
+        own,
+        isNull(auditionDays.removedAt),
+        isNull(productions.removedAt),
+        inArray(signUps.state, ["invited", "confirmed", "declined"]),
+      ),
+    )
     .orderBy(asc(slots.startsAt));
   return rows.flatMap(({ state, ...row }) =>
     state === "invited" || state === "confirmed" || state === "declined"
@@ -106,11 +130,16 @@ export async function answerSlot(
       .innerJoin(slots, eq(slots.id, slotAssignments.slotId))
       .where(and(eq(signUps.id, input.signUpId), own))
       .for("update");
-    if (!row || row.state === "listed" || row.state === "withdrawn") throw new AppError("not-found");
+    if (!row || row.state === "listed" || row.state === "withdrawn")
+      throw new AppError("not-found");
     if (input.slotId !== undefined && input.slotId !== row.slotId) {
-      throw new AppError("stale", "Your time was changed a moment ago. Load the page again and answer the new one.");
+      throw new AppError(
+        "stale",
+        "Your time was changed a moment ago. Load the page again and answer the new one.",
+      );
     }
-    if (row.startsAt <= now) throw new AppError("refused", "This time has begun. Speak to the company directly.");
+    if (row.startsAt <= now)
+      throw new AppError("refused", "This time has begun. Speak to the company directly.");
     const state = input.answer === "confirm" ? "confirmed" : "declined";
     await tx
       .update(signUps)

@@ -1,10 +1,20 @@
 import "server-only";
-import { aliasedTable, and, asc, eq, gt, isNull, lt } from "drizzle-orm";
+import { aliasedTable, and, asc, eq, gt, isNull, lt, ne, or } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
-import { auditionDays, auditionRooms, calls, companies, people, pianistSessions, positions, productions, rooms } from "@/db/schema";
+import {
+  auditionDays,
+  auditionRooms,
+  calls,
+  companies,
+  people,
+  pianistSessions,
+  positions,
+  productions,
+  rooms,
+} from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import { clock, clockSpan } from "@/lib/format-dates";
 import type { Actor } from "@/lib/permissions/types";
@@ -16,13 +26,23 @@ import { productionFor } from "../guard";
 import { duplicateKey, inTransaction } from "../transaction";
 
 /** Who can be asked to play: the production's accompanists. */
-export async function listAccompanists(actor: Actor, productionId: string): Promise<{ personId: string; name: string }[]> {
+export async function listAccompanists(
+  actor: Actor,
+  productionId: string,
+): Promise<{ personId: string; name: string }[]> {
   const scope = await productionFor(actor, productionId, "auditions:read");
   return db
     .select({ personId: people.id, name: people.name })
     .from(positions)
     .innerJoin(people, eq(people.id, positions.personId))
-    .where(and(eq(positions.productionId, scope.id), eq(positions.kind, "accompanist"), isNull(positions.endedAt), isNull(people.removedAt)))
+    .where(
+      and(
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "accompanist"),
+        isNull(positions.endedAt),
+        isNull(people.removedAt),
+      ),
+    )
     .orderBy(asc(people.name));
 }
 
@@ -30,21 +50,42 @@ export async function listAccompanists(actor: Actor, productionId: string): Prom
  * Has an accompanist play in a room of an audition day for a stretch of it. Returns the session's id. Throws `taken`
  * with where and when the pianist or the room's piano is taken (another company's business stays "engaged elsewhere").
  */
-export async function assignPianist(actor: Actor, input: z.output<typeof assignPianistSchema>): Promise<string> {
+export async function assignPianist(
+  actor: Actor,
+  input: z.output<typeof assignPianistSchema>,
+): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "pianists:assign");
   const room = await roomOfDay(scope.id, input.auditionRoomId);
   const startsAt = toInstant(room.localDate, input.from, room.zone).instant;
   const endsAt = toInstant(room.localDate, input.to, room.zone).instant;
   if (startsAt < room.opensAt || endsAt > room.closesAt || startsAt >= endsAt) {
     const message = `${room.name} is open ${clockSpan(room.opensAt, room.closesAt, room.zone)}. Choose times inside that.`;
-    throw new AppError("invalid", message, { fields: { from: message } });
+    throw new AppError("invalid", undefined, { fields: { from: message } });
   }
   const [pianist] = await db
     .select({ id: people.id, name: people.name, userId: people.userId })
     .from(people)
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), eq(positions.kind, "accompanist"), isNull(positions.endedAt)))
-    .where(and(eq(people.id, input.personId), eq(people.companyId, scope.companyId), isNull(people.removedAt)));
-  if (!pianist) throw new AppError("not-found", "That person is not an accompanist of this production any more. Choose another.");
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "accompanist"),
+        isNull(positions.endedAt),
+      ),
+    )
+    .where(
+      and(
+        eq(people.id, input.personId),
+        eq(people.companyId, scope.companyId),
+        isNull(people.removedAt),
+      ),
+    );
+  if (!pianist)
+    throw new AppError(
+      "not-found",
+      "That person is not an accompanist of this production any more. Choose another.",
+    );
   const bookeeId = pianist.userId ?? pianist.id;
   const sessionId = newId();
   try {
@@ -70,7 +111,11 @@ export async function assignPianist(actor: Actor, input: z.output<typeof assignP
     });
   } catch (error) {
     if (duplicateKey(error) !== "pianist_sessions_held") throw error;
-    throw await pianistTaken({ bookeeId, name: pianist.name, startsAt, endsAt }, scope.companyId, room.zone);
+    throw await pianistTaken(
+      { bookeeId, name: pianist.name, startsAt, endsAt },
+      scope.companyId,
+      room.zone,
+    );
   }
   return sessionId;
 }
@@ -88,14 +133,32 @@ async function roomOfDay(productionId: string, auditionRoomId: string) {
     .from(auditionRooms)
     .innerJoin(auditionDays, eq(auditionDays.id, auditionRooms.dayId))
     .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
-    .where(and(eq(auditionRooms.id, auditionRoomId), eq(auditionDays.productionId, productionId), isNull(auditionDays.removedAt)));
-  if (!room) throw new AppError("not-found", "That room is not part of the day any more. Load the day again.");
+    .where(
+      and(
+        eq(auditionRooms.id, auditionRoomId),
+        eq(auditionDays.productionId, productionId),
+        isNull(auditionDays.removedAt),
+      ),
+    );
+  if (!room)
+    throw new AppError(
+      "not-found",
+      "That room is not part of the day any more. Load the day again.",
+    );
   return room;
 }
 
 /** One pianist at a time at one piano: the room is locked, so that two assignments cannot pass each other. */
-async function assertPianoFree(tx: Tx, room: { id: string; name: string; zone: string }, wanted: { from: Date; to: Date }): Promise<void> {
-  await tx.select({ id: auditionRooms.id }).from(auditionRooms).where(eq(auditionRooms.id, room.id)).for("update");
+async function assertPianoFree(
+  tx: Tx,
+  room: { id: string; name: string; zone: string },
+  wanted: { from: Date; to: Date },
+): Promise<void> {
+  await tx
+    .select({ id: auditionRooms.id })
+    .from(auditionRooms)
+    .where(eq(auditionRooms.id, room.id))
+    .for("update");
   const sessions = await tx
     .select({ name: people.name, from: pianistSessions.startsAt, to: pianistSessions.endsAt })
     .from(pianistSessions)
@@ -111,7 +174,14 @@ async function assertPianoFree(tx: Tx, room: { id: string; name: string; zone: s
 
 /** Why a pianist cannot be had: where and when within the company, only "engaged elsewhere" beyond it. */
 export async function pianistTaken(
-  wanted: { bookeeId: string; name: string; startsAt: Date; endsAt: Date },
+  wanted: {
+    bookeeId: string;
+    name: string;
+    startsAt: Date;
+    endsAt: Date;
+    /** The call that asks: what it holds itself is in nobody's way. */
+    exceptCallId?: string;
+  },
   companyId: string,
   zone: string,
 ): Promise<AppError> {
@@ -132,27 +202,53 @@ export async function pianistTaken(
     .leftJoin(rooms, eq(rooms.id, auditionRooms.roomId))
     .leftJoin(calls, eq(calls.id, pianistSessions.callId))
     .leftJoin(callRooms, eq(callRooms.id, calls.roomId))
-    .where(and(eq(pianistSessions.bookeeId, wanted.bookeeId), lt(pianistSessions.startsAt, wanted.endsAt), gt(pianistSessions.endsAt, wanted.startsAt)))
+    .where(
+      and(
+        eq(pianistSessions.bookeeId, wanted.bookeeId),
+        lt(pianistSessions.startsAt, wanted.endsAt),
+        gt(pianistSessions.endsAt, wanted.startsAt),
+        wanted.exceptCallId === undefined
+          ? undefined
+          : or(isNull(pianistSessions.callId), ne(pianistSessions.callId, wanted.exceptCallId)),
+      ),
+    )
     .orderBy(asc(pianistSessions.startsAt))
     .limit(1);
-  if (!held) return new AppError("stale", `${wanted.name} was taken a moment ago. Load the page again.`);
+  if (!held)
+    return new AppError("stale", `${wanted.name} was taken a moment ago. Load the page again.`);
   const span = clockSpan(held.startsAt, held.endsAt, zone);
   const room = held.room ?? held.callRoom;
   const where =
-    held.companyId === companyId ? `plays for ${held.production}${room === null ? "" : ` in ${room}`}, ${span}` : `is engaged elsewhere, ${span}`;
-  return new AppError("taken", `${wanted.name} ${where}. Choose another pianist, or times outside that (before ${clock(held.startsAt, zone)} or from ${clock(held.endsAt, zone)}).`);
+    held.companyId === companyId
+      ? `plays for ${held.production}${room === null ? "" : ` in ${room}`}, ${span}`
+      : `is engaged elsewhere, ${span}`;
+  return new AppError(
+    "taken",
+    `${wanted.name} ${where}. Choose another pianist, or times outside that (before ${clock(held.startsAt, zone)} or from ${clock(held.endsAt, zone)}).`,
+  );
 }
 
 /** Takes a pianist out of an audition room; they are free again. */
-export async function removePianist(actor: Actor, input: z.output<typeof removePianistSchema>): Promise<void> {
+export async function removePianist(
+  actor: Actor,
+  input: z.output<typeof removePianistSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "pianists:assign");
   await inTransaction(async (tx) => {
     const [session] = await tx
-      .select({ id: pianistSessions.id, personId: people.id, name: people.name, auditionRoomId: pianistSessions.auditionRoomId })
+      .select({
+        id: pianistSessions.id,
+        personId: people.id,
+        name: people.name,
+        auditionRoomId: pianistSessions.auditionRoomId,
+      })
       .from(pianistSessions)
       .innerJoin(people, eq(people.id, pianistSessions.personId))
-      .where(and(eq(pianistSessions.id, input.sessionId), eq(pianistSessions.productionId, scope.id)));
-    if (!session || session.auditionRoomId === null) throw new AppError("not-found", "That pianist is not there any more. Load the day again.");
+      .where(
+        and(eq(pianistSessions.id, input.sessionId), eq(pianistSessions.productionId, scope.id)),
+      );
+    if (!session || session.auditionRoomId === null)
+      throw new AppError("not-found", "That pianist is not there any more. Load the day again.");
     await tx.delete(pianistSessions).where(eq(pianistSessions.id, session.id));
     await recordAudit(tx, actor, {
       companyId: scope.companyId,

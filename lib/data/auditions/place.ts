@@ -28,7 +28,11 @@ type Locked = {
 };
 
 /** The production's sign-ups with these ids, locked in the order of their ids. Throws `not-found` when one is not there. */
-export async function lockSignUps(tx: Tx, productionId: string, signUpIds: readonly string[]): Promise<Locked[]> {
+export async function lockSignUps(
+  tx: Tx,
+  productionId: string,
+  signUpIds: readonly string[],
+): Promise<Locked[]> {
   const ids = [...new Set(signUpIds)];
   const rows = await tx
     .select({
@@ -45,25 +49,35 @@ export async function lockSignUps(tx: Tx, productionId: string, signUpIds: reado
     .where(and(eq(signUps.productionId, productionId), inArray(signUps.id, ids)))
     .orderBy(asc(signUps.id))
     .for("update");
-  if (rows.length !== ids.length) throw new AppError("not-found", "That singer is not on the list any more. Load the day again.");
+  if (rows.length !== ids.length)
+    throw new AppError("not-found", "That singer is not on the list any more. Load the day again.");
   return rows;
 }
 
 async function slotNow(tx: Tx, signUpId: string): Promise<string | null> {
-  const [row] = await tx.select({ slotId: slotAssignments.slotId }).from(slotAssignments).where(eq(slotAssignments.signUpId, signUpId));
+  const [row] = await tx
+    .select({ slotId: slotAssignments.slotId })
+    .from(slotAssignments)
+    .where(eq(slotAssignments.signUpId, signUpId));
   return row?.slotId ?? null;
 }
 
 function assertPlaceable(slot: SlotRow): void {
   if (slot.kind === "slot" || slot.kind === "hold") return;
-  throw new AppError("refused", `Nobody sings at ${clock(slot.startsAt, slot.zone)}: it is ${slot.kind === "lunch" ? "lunch" : "the pianist's rest"}. Choose a slot.`);
+  throw new AppError(
+    "refused",
+    `Nobody sings at ${clock(slot.startsAt, slot.zone)}: it is ${slot.kind === "lunch" ? "lunch" : "the pianist's rest"}. Choose a slot.`,
+  );
 }
 
 /**
  * Puts a singer into a free slot, from the waiting list or from another slot. Whoever knew the old time is told the new
  * one, and has to confirm again. Throws `taken` (who sings there), `stale` (moved meanwhile) or `refused`.
  */
-export async function placeSinger(actor: Actor, input: z.output<typeof placeSingerSchema>): Promise<void> {
+export async function placeSinger(
+  actor: Actor,
+  input: z.output<typeof placeSingerSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   try {
     await inTransaction(async (tx) => {
@@ -72,11 +86,18 @@ export async function placeSinger(actor: Actor, input: z.output<typeof placeSing
       const [singer] = await lockSignUps(tx, scope.id, [input.signUpId]);
       if (!singer) throw new AppError("not-found");
       if (singer.state === "withdrawn") {
-        throw new AppError("refused", `${singer.name} has withdrawn. Put them back on the list first.`);
+        throw new AppError(
+          "refused",
+          `${singer.name} has withdrawn. Put them back on the list first.`,
+        );
       }
       const before = await slotNow(tx, singer.id);
       if (before === slot.id) return;
-      if (before !== input.seenIn) throw new AppError("stale", `${singer.name} was moved by someone else a moment ago. Look again.`);
+      if (before !== input.seenIn)
+        throw new AppError(
+          "stale",
+          `${singer.name} was moved by someone else a moment ago. Look again.`,
+        );
       const [sitting] = await tx
         .select({ name: people.name })
         .from(slotAssignments)
@@ -85,44 +106,89 @@ export async function placeSinger(actor: Actor, input: z.output<typeof placeSing
         .where(eq(slotAssignments.slotId, slot.id));
       if (sitting) throw takenBy(sitting.name, slot);
       await tx.delete(slotAssignments).where(eq(slotAssignments.signUpId, singer.id));
-      await tx.insert(slotAssignments).values({ slotId: slot.id, signUpId: singer.id, dayId: slot.dayId });
+      await tx
+        .insert(slotAssignments)
+        .values({ slotId: slot.id, signUpId: singer.id, dayId: slot.dayId });
       await afterMove(tx, actor, scope, singer, slot);
-      await recordMove(tx, actor, scope, singer, `Placed ${singer.name} at ${slotInWords(slot, scope.locale)}`);
+      await recordMove(
+        tx,
+        actor,
+        scope,
+        singer,
+        `Placed ${singer.name} at ${slotInWords(slot, scope.locale)}`,
+      );
     });
   } catch (error) {
     const key = duplicateKey(error);
-    if (key === "PRIMARY") throw new AppError("taken", "Someone else was put into that slot a moment ago. Choose another free slot.");
+    if (key === "PRIMARY")
+      throw new AppError(
+        "taken",
+        "Someone else was put into that slot a moment ago. Choose another free slot.",
+      );
     if (key === "slot_assignments_day") throw new AppError("stale");
     throw error;
   }
 }
 
 function takenBy(name: string, slot: SlotRow): AppError {
-  return new AppError("taken", `${name} sings at ${clock(slot.startsAt, slot.zone)} in ${slot.room}. Choose a free slot, or swap the two.`);
+  return new AppError(
+    "taken",
+    `${name} sings at ${clock(slot.startsAt, slot.zone)} in ${slot.room}. Choose a free slot, or swap the two.`,
+  );
 }
 
 /** Two singers change places. Throws `stale` when one of them is no longer where the person saw them. */
-export async function swapSingers(actor: Actor, input: z.output<typeof swapSingersSchema>): Promise<void> {
+export async function swapSingers(
+  actor: Actor,
+  input: z.output<typeof swapSingersSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
   const pair = [input.first, input.second];
-  if (input.first.signUpId === input.second.signUpId) throw new AppError("invalid", "Choose two singers to swap.");
+  if (input.first.signUpId === input.second.signUpId)
+    throw new AppError("invalid", "Choose two singers to swap.");
   await inTransaction(async (tx) => {
     const toFirst = await lockSlot(tx, scope.id, input.first.slotId);
     const toSecond = await lockSlot(tx, scope.id, input.second.slotId);
-    const singers = await lockSignUps(tx, scope.id, pair.map((p) => p.signUpId));
+    const singers = await lockSignUps(
+      tx,
+      scope.id,
+      pair.map((p) => p.signUpId),
+    );
     for (const { signUpId, slotId } of pair) {
-      if ((await slotNow(tx, signUpId)) !== slotId) throw new AppError("stale", "One of the two was moved by someone else a moment ago. Look again.");
+      if ((await slotNow(tx, signUpId)) !== slotId)
+        throw new AppError(
+          "stale",
+          "One of the two was moved by someone else a moment ago. Look again.",
+        );
     }
-    await tx.delete(slotAssignments).where(inArray(slotAssignments.signUpId, pair.map((p) => p.signUpId)));
+    await tx.delete(slotAssignments).where(
+      inArray(
+        slotAssignments.signUpId,
+        pair.map((p) => p.signUpId),
+      ),
+    );
     await tx.insert(slotAssignments).values([
       { slotId: toSecond.id, signUpId: input.first.signUpId, dayId: toSecond.dayId },
       { slotId: toFirst.id, signUpId: input.second.signUpId, dayId: toFirst.dayId },
     ]);
     for (const singer of singers) {
-      await afterMove(tx, actor, scope, singer, singer.id === input.first.signUpId ? toSecond : toFirst);
+      await afterMove(
+        tx,
+        actor,
+        scope,
+        singer,
+        singer.id === input.first.signUpId ? toSecond : toFirst,
+      );
     }
     const [first] = singers;
-    if (first) await recordMove(tx, actor, scope, first, `Swapped ${singers.map((singer) => singer.name).join(" and ")}`);
+    if (first)
+      await recordMove(
+        tx,
+        actor,
+        scope,
+        first,
+        `Swapped ${singers.map((singer) => singer.name).join(" and ")}`,
+      );
   });
 }
 
@@ -133,11 +199,14 @@ export async function takeOut(actor: Actor, input: z.output<typeof signUpSchema>
     const [singer] = await lockSignUps(tx, scope.id, [input.signUpId]);
     if (!singer) throw new AppError("not-found");
     const [gone] = await tx.delete(slotAssignments).where(eq(slotAssignments.signUpId, singer.id));
-    if (gone.affectedRows === 0) throw new AppError("stale", `${singer.name} has no slot any more. Look again.`);
+    if (gone.affectedRows === 0)
+      throw new AppError("stale", `${singer.name} has no slot any more. Look again.`);
     await tx
       .update(signUps)
       .set({
-        ...(singer.state === "declined" ? {} : { state: "listed", invitedAt: null, answeredAt: null }),
+        ...(singer.state === "declined"
+          ? {}
+          : { state: "listed", invitedAt: null, answeredAt: null }),
         version: sql`${signUps.version} + 1`,
       })
       .where(eq(signUps.id, singer.id));
@@ -145,7 +214,13 @@ export async function takeOut(actor: Actor, input: z.output<typeof signUpSchema>
   });
 }
 
-async function recordMove(tx: Tx, actor: Actor, scope: ProductionScope, singer: Locked, summary: string): Promise<void> {
+async function recordMove(
+  tx: Tx,
+  actor: Actor,
+  scope: ProductionScope,
+  singer: Locked,
+  summary: string,
+): Promise<void> {
   await recordAudit(tx, actor, {
     companyId: scope.companyId,
     productionId: scope.id,
@@ -157,11 +232,21 @@ async function recordMove(tx: Tx, actor: Actor, scope: ProductionScope, singer: 
 }
 
 /** A new time has to be confirmed anew by whoever knew the old one; whoever said no to the old one is asked again later. */
-async function afterMove(tx: Tx, actor: Actor, scope: ProductionScope, singer: Locked, slot: SlotRow): Promise<void> {
+async function afterMove(
+  tx: Tx,
+  actor: Actor,
+  scope: ProductionScope,
+  singer: Locked,
+  slot: SlotRow,
+): Promise<void> {
   const told = singer.state === "invited" || singer.state === "confirmed";
   await tx
     .update(signUps)
-    .set({ state: told ? "invited" : "listed", answeredAt: null, version: sql`${signUps.version} + 1` })
+    .set({
+      state: told ? "invited" : "listed",
+      answeredAt: null,
+      version: sql`${signUps.version} + 1`,
+    })
     .where(eq(signUps.id, singer.id));
   if (!told || singer.email === null) return;
   await queueMail(tx, {
@@ -193,7 +278,14 @@ export async function answerLink(
       : await tx
           .select({ id: positions.id })
           .from(positions)
-          .where(and(eq(positions.personId, singer.personId), eq(positions.productionId, productionId), eq(positions.kind, "actor"), sql`${positions.endedAt} is null`));
+          .where(
+            and(
+              eq(positions.personId, singer.personId),
+              eq(positions.productionId, productionId),
+              eq(positions.kind, "actor"),
+              sql`${positions.endedAt} is null`,
+            ),
+          );
   if (!position || singer.email === null) return new URL("/me", env().AUTH_URL).toString();
   return makeInvitationLink(tx, actor, { positionId: position.id, email: singer.email, to: "/me" });
 }

@@ -1,7 +1,15 @@
 import "server-only";
 import { aliasedTable, and, asc, eq, gt, lt, ne, or, isNull } from "drizzle-orm";
 import { db } from "@/db/client";
-import { auditionDays, auditionRooms, callbackRounds, calls, productions, roomBookings, rooms } from "@/db/schema";
+import {
+  auditionDays,
+  auditionRooms,
+  callbackRounds,
+  calls,
+  productions,
+  roomBookings,
+  rooms,
+} from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import { clockSpan } from "@/lib/format-dates";
 import type { RoomLaidOut } from "@/lib/auditions/lay-out-day";
@@ -10,7 +18,11 @@ import type { RoomLaidOut } from "@/lib/auditions/lay-out-day";
  * Who holds one of these rooms in its time, as a refusal that says who, when and what to do. The rooms belong to one
  * company, so that its productions may know of each other. `dayId`: the day that asks, whose own bookings do not count.
  */
-export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, dayId: string | null): Promise<AppError> {
+export async function roomTaken(
+  wanted: readonly RoomLaidOut[],
+  zone: string,
+  dayId: string | null,
+): Promise<AppError> {
   const callProductions = aliasedTable(productions, "call_productions");
   const roundProductions = aliasedTable(productions, "round_productions");
   for (const room of wanted) {
@@ -37,7 +49,9 @@ export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, da
           eq(roomBookings.roomId, room.roomId),
           lt(roomBookings.startsAt, room.closesAt),
           gt(roomBookings.endsAt, room.opensAt),
-          dayId === null ? undefined : or(isNull(auditionRooms.dayId), ne(auditionRooms.dayId, dayId)),
+          dayId === null
+            ? undefined
+            : or(isNull(auditionRooms.dayId), ne(auditionRooms.dayId, dayId)),
         ),
       )
       .orderBy(asc(roomBookings.startsAt))
@@ -54,5 +68,8 @@ export async function roomTaken(wanted: readonly RoomLaidOut[], zone: string, da
       `${held.room} is taken by ${holder}, ${clockSpan(held.startsAt, held.endsAt, zone)}. Choose another room, or times outside that.`,
     );
   }
-  return new AppError("taken", "One of the rooms was taken a moment ago. Load the page again and choose another room or other times.");
+  return new AppError(
+    "taken",
+    "One of the rooms was taken a moment ago. Load the page again and choose another room or other times.",
+  );
 }

@@ -24,7 +24,13 @@ function selectDay(tx: Db | Tx, productionId: string, dayId: string) {
   return tx
     .select()
     .from(auditionDays)
-    .where(and(eq(auditionDays.id, dayId), eq(auditionDays.productionId, productionId), isNull(auditionDays.removedAt)));
+    .where(
+      and(
+        eq(auditionDays.id, dayId),
+        eq(auditionDays.productionId, productionId),
+        isNull(auditionDays.removedAt),
+      ),
+    );
 }
 
 function found([day]: DayRow[]): DayRow {
@@ -65,14 +71,24 @@ export async function lockSlot(tx: Tx, productionId: string, slotId: string): Pr
     .innerJoin(auditionDays, eq(auditionDays.id, auditionRooms.dayId))
     .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
     .innerJoin(venues, eq(venues.id, rooms.venueId))
-    .where(and(eq(slots.id, slotId), eq(auditionDays.productionId, productionId), isNull(auditionDays.removedAt)))
+    .where(
+      and(
+        eq(slots.id, slotId),
+        eq(auditionDays.productionId, productionId),
+        isNull(auditionDays.removedAt),
+      ),
+    )
     .for("update");
-  if (!slot) throw new AppError("not-found", "That slot is not there any more. Load the day again.");
+  if (!slot)
+    throw new AppError("not-found", "That slot is not there any more. Load the day again.");
   return slot;
 }
 
 /** "Saturday 20 March, 10:16", as a message says it. */
-export function slotInWords(slot: Pick<SlotRow, "localDate" | "startsAt" | "zone">, locale: string): string {
+export function slotInWords(
+  slot: Pick<SlotRow, "localDate" | "startsAt" | "zone">,
+  locale: string,
+): string {
   return `${longDay(slot.localDate, locale)}, ${clock(slot.startsAt, slot.zone)}`;
 }
 

@@ -24,6 +24,12 @@ export async function listWaiting(tx: Db | Tx, productionId: string) {
     .from(signUps)
     .innerJoin(people, eq(people.id, signUps.personId))
     .leftJoin(slotAssignments, eq(slotAssignments.signUpId, signUps.id))
-    .where(and(eq(signUps.productionId, productionId), isNull(slotAssignments.slotId), inArray(signUps.state, ["listed", "invited", "confirmed"])))
+    .where(
+      and(
+        eq(signUps.productionId, productionId),
+        isNull(slotAssignments.slotId),
+        inArray(signUps.state, ["listed", "invited", "confirmed"]),
+      ),
+    )
     .orderBy(asc(signUps.place));
 }

@@ -1,7 +1,6 @@
 import "server-only";
 import { and, eq, inArray, isNull, sql } from "drizzle-orm";
 import type { z } from "zod";
-import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
 import { callbackInvitations, callbackRounds, people, positions, roomBookings } from "@/db/schema";

@@ -86,13 +86,13 @@ export async function planCall(
     const number = block.kind === "number" ? score.numbers.get(block.numberId ?? "") : undefined;
     const roleName = (roleId: string): string => score.roleNames.get(roleId) ?? "";
     const byScore: CalledPerson[] = (need?.people ?? []).map(({ personId, roleIds }) => {
-      const let_off = draft.hand.find((change) => change.act === "excuse" && change.personId === personId && covers(change, block.key));
+      const letOff = draft.hand.find((change) => change.act === "excuse" && change.personId === personId && covers(change, block.key));
       return {
         personId,
         roleNames: roleIds.map(roleName),
         source: "score",
-        reason: let_off?.reason ?? null,
-        excused: let_off !== undefined,
+        reason: letOff?.reason ?? null,
+        excused: letOff !== undefined,
       };
     });
     return {

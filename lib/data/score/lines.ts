@@ -16,7 +16,10 @@ import { lockScore, numberIn, roleIn } from "./scope";
  * Types in what a role sings in a number, in place of what was typed before. What was read from a score gives way only when
  * the input says so; otherwise throws `refused`.
  */
-export async function writeLine(actor: Actor, input: z.output<typeof writeLineSchema>): Promise<void> {
+export async function writeLine(
+  actor: Actor,
+  input: z.output<typeof writeLineSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -25,7 +28,10 @@ export async function writeLine(actor: Actor, input: z.output<typeof writeLineSc
     const here = and(eq(vocalLines.roleId, role.id), eq(vocalLines.numberId, number.id));
     const standing = await tx.select({ source: vocalLines.source }).from(vocalLines).where(here);
     if (standing.some((line) => line.source === "read") && !input.replaceRead) {
-      throw new AppError("refused", `${role.name}'s line in ${number.title} was read from a score. Say that yours is to replace it, or put the read one an octave up or down.`);
+      throw new AppError(
+        "refused",
+        `${role.name}'s line in ${number.title} was read from a score. Say that yours is to replace it, or put the read one an octave up or down.`,
+      );
     }
     await tx.delete(vocalLines).where(here);
     await tx.insert(vocalLines).values({
@@ -50,7 +56,10 @@ export async function writeLine(actor: Actor, input: z.output<typeof writeLineSc
 }
 
 /** Removes one line for good; asked for once before. */
-export async function removeLine(actor: Actor, input: z.output<typeof lineIdSchema>): Promise<void> {
+export async function removeLine(
+  actor: Actor,
+  input: z.output<typeof lineIdSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -59,7 +68,13 @@ export async function removeLine(actor: Actor, input: z.output<typeof lineIdSche
       .from(vocalLines)
       .innerJoin(roles, eq(roles.id, vocalLines.roleId))
       .innerJoin(numbers, eq(numbers.id, vocalLines.numberId))
-      .where(and(eq(vocalLines.id, input.lineId), eq(roles.productionId, scope.id), eq(numbers.productionId, scope.id)));
+      .where(
+        and(
+          eq(vocalLines.id, input.lineId),
+          eq(roles.productionId, scope.id),
+          eq(numbers.productionId, scope.id),
+        ),
+      );
     if (!line) throw new AppError("not-found");
     await tx.delete(vocalLines).where(eq(vocalLines.id, line.id));
     await recordAudit(tx, actor, {
@@ -74,7 +89,10 @@ export async function removeLine(actor: Actor, input: z.output<typeof lineIdSche
 }
 
 /** Puts a part that was read, and every line made from it, at so many octaves from where it is written. */
-export async function shiftPart(actor: Actor, input: z.output<typeof shiftPartSchema>): Promise<void> {
+export async function shiftPart(
+  actor: Actor,
+  input: z.output<typeof shiftPartSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -86,13 +104,23 @@ export async function shiftPart(actor: Actor, input: z.output<typeof shiftPartSc
     if (!part) throw new AppError("not-found");
     const by = input.octaveShift - part.octaveShift;
     if (by === 0) return;
-    await tx.update(scoreParts).set({ octaveShift: input.octaveShift }).where(eq(scoreParts.id, part.id));
+    await tx
+      .update(scoreParts)
+      .set({ octaveShift: input.octaveShift })
+      .where(eq(scoreParts.id, part.id));
     const lines = await tx.select().from(vocalLines).where(eq(vocalLines.scorePartId, part.id));
     for (const line of lines) {
       const shifted = shiftOctaves(line, by);
-      if (!shifted) throw new AppError("refused", "That would take the line beyond what can be written. Leave it where it is.");
+      if (!shifted)
+        throw new AppError(
+          "refused",
+          "That would take the line beyond what can be written. Leave it where it is.",
+        );
       const { low, high, lowSpelled, highSpelled, optionalLow, optionalHigh, histogram } = shifted;
-      await tx.update(vocalLines).set({ low, high, lowSpelled, highSpelled, optionalLow, optionalHigh, histogram }).where(eq(vocalLines.id, line.id));
+      await tx
+        .update(vocalLines)
+        .set({ low, high, lowSpelled, highSpelled, optionalLow, optionalHigh, histogram })
+        .where(eq(vocalLines.id, line.id));
     }
     await recordAudit(tx, actor, {
       companyId: scope.companyId,

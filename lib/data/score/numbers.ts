@@ -5,20 +5,35 @@ import { newId } from "@/db/columns";
 import { numbers } from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
-import type { addNumberSchema, changeNumberSchema, moveNumberSchema, numberIdSchema } from "@/lib/schemas/score";
+import type {
+  addNumberSchema,
+  changeNumberSchema,
+  moveNumberSchema,
+  numberIdSchema,
+} from "@/lib/schemas/score";
 import { recordAudit } from "../audit";
 import { productionFor } from "../guard";
 import { inTransaction } from "../transaction";
 import { assertLabelFree, lockScore, nextNumberPlace, numberColumns, numberIn } from "./scope";
 
 /** Adds a number at the end of the running order. Returns its id. */
-export async function addNumber(actor: Actor, input: z.output<typeof addNumberSchema>): Promise<string> {
+export async function addNumber(
+  actor: Actor,
+  input: z.output<typeof addNumberSchema>,
+): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   return inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
     await assertLabelFree(tx, scope.id, input.label, null);
     const id = newId();
-    await tx.insert(numbers).values({ id, productionId: scope.id, place: await nextNumberPlace(tx, scope.id), ...numberColumns(input) });
+    await tx
+      .insert(numbers)
+      .values({
+        id,
+        productionId: scope.id,
+        place: await nextNumberPlace(tx, scope.id),
+        ...numberColumns(input),
+      });
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
       productionId: scope.id,
@@ -32,7 +47,10 @@ export async function addNumber(actor: Actor, input: z.output<typeof addNumberSc
 }
 
 /** Changes what is known of a number. Throws `stale` when someone else changed it since `version` was read. */
-export async function changeNumber(actor: Actor, input: z.output<typeof changeNumberSchema>): Promise<void> {
+export async function changeNumber(
+  actor: Actor,
+  input: z.output<typeof changeNumberSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -41,7 +59,13 @@ export async function changeNumber(actor: Actor, input: z.output<typeof changeNu
     const [result] = await tx
       .update(numbers)
       .set({ ...numberColumns(input), version: sql`${numbers.version} + 1` })
-      .where(and(eq(numbers.id, before.id), eq(numbers.productionId, scope.id), eq(numbers.version, input.version)));
+      .where(
+        and(
+          eq(numbers.id, before.id),
+          eq(numbers.productionId, scope.id),
+          eq(numbers.version, input.version),
+        ),
+      );
     if (result.affectedRows === 0) throw new AppError("stale");
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
@@ -50,13 +74,19 @@ export async function changeNumber(actor: Actor, input: z.output<typeof changeNu
       subjectKind: "number",
       subjectId: before.id,
       summary: `Changed number ${before.label}, ${before.title}`,
-      detail: { before: { label: before.label, title: before.title }, after: { label: input.label, title: input.title } },
+      detail: {
+        before: { label: before.label, title: before.title },
+        after: { label: input.label, title: input.title },
+      },
     });
   });
 }
 
 /** Takes a number out; its lines wait with it. `restoreNumber` is the way back. */
-export async function removeNumber(actor: Actor, input: z.output<typeof numberIdSchema>): Promise<void> {
+export async function removeNumber(
+  actor: Actor,
+  input: z.output<typeof numberIdSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -74,7 +104,10 @@ export async function removeNumber(actor: Actor, input: z.output<typeof numberId
 }
 
 /** Puts a removed number back where it was. Throws `invalid` when its label has gone to another meanwhile. */
-export async function restoreNumber(actor: Actor, input: z.output<typeof numberIdSchema>): Promise<void> {
+export async function restoreNumber(
+  actor: Actor,
+  input: z.output<typeof numberIdSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -97,7 +130,10 @@ export async function restoreNumber(actor: Actor, input: z.output<typeof numberI
 }
 
 /** Moves a number one place up or down in the running order; at either end it stays. */
-export async function moveNumber(actor: Actor, input: z.output<typeof moveNumberSchema>): Promise<void> {
+export async function moveNumber(
+  actor: Actor,
+  input: z.output<typeof moveNumberSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "score:change");
   await inTransaction(async (tx) => {
     await lockScore(tx, scope.id);
@@ -114,7 +150,11 @@ export async function moveNumber(actor: Actor, input: z.output<typeof moveNumber
     order[from] = other;
     order[to] = moving;
     for (const [index, row] of order.entries()) {
-      if (row.place !== index + 1) await tx.update(numbers).set({ place: index + 1 }).where(eq(numbers.id, row.id));
+      if (row.place !== index + 1)
+        await tx
+          .update(numbers)
+          .set({ place: index + 1 })
+          .where(eq(numbers.id, row.id));
     }
   });
 }

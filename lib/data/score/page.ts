@@ -10,7 +10,11 @@ import { productionFor } from "../guard";
 /** The whole score of a production, for whoever may read it: numbers in running order, roles, and every line. */
 export async function readScoreView(actor: Actor, productionId: string): Promise<ScoreView> {
   const scope = await productionFor(actor, productionId, "score:read");
-  const [numberRows, roleRows, lineRows] = await Promise.all([numbersFor(scope.id), rolesFor(scope.id), linesFor(scope.id)]);
+  const [numberRows, roleRows, lineRows] = await Promise.all([
+    numbersFor(scope.id),
+    rolesFor(scope.id),
+    linesFor(scope.id),
+  ]);
   return {
     numbers: numberRows,
     roles: roleRows,

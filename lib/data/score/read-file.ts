@@ -20,18 +20,31 @@ import { inTransaction } from "../transaction";
 const READINGS = { name: "score-read", limit: 60, windowSeconds: 600 } as const;
 
 export type UploadedScore = { bytes: Uint8Array; name: string; sha256: string | null };
-export type KeptScore = { scoreId: string; fileId: string; sha256: string; bytes: number; title: string };
+export type KeptScore = {
+  scoreId: string;
+  fileId: string;
+  sha256: string;
+  bytes: number;
+  title: string;
+};
 
 /**
  * Reads a score and keeps it: the file, the reading and its parts; no number and no line yet. Throws `wrong-kind`,
  * `too-large` or `refused` with what to do when it cannot be read, and then nothing is kept.
  */
-export async function keepScore(actor: Actor, productionId: string, file: UploadedScore): Promise<KeptScore> {
+export async function keepScore(
+  actor: Actor,
+  productionId: string,
+  file: UploadedScore,
+): Promise<KeptScore> {
   const scope = await productionFor(actor, productionId, "score:change");
   await countTry(READINGS, actor.userId);
   const arrived = createHash("sha256").update(file.bytes).digest("hex");
   if (file.sha256 !== null && file.sha256.toLowerCase() !== arrived) {
-    throw new AppError("refused", "The file did not arrive whole. Check the connection and choose it again.");
+    throw new AppError(
+      "refused",
+      "The file did not arrive whole. Check the connection and choose it again.",
+    );
   }
   const name = file.name.slice(0, 200) || "score.musicxml";
   const score = await parse(file.bytes, name);
@@ -45,7 +58,10 @@ export async function keepScore(actor: Actor, productionId: string, file: Upload
       companyId: scope.companyId,
       productionId: scope.id,
       kind: "score",
-      mediaType: file.bytes[0] === 0x50 ? "application/vnd.recordare.musicxml" : "application/vnd.recordare.musicxml+xml",
+      mediaType:
+        file.bytes[0] === 0x50
+          ? "application/vnd.recordare.musicxml"
+          : "application/vnd.recordare.musicxml+xml",
       name,
       uploadedBy: actor.userId,
       ...stored,
@@ -77,7 +93,8 @@ async function parse(bytes: Uint8Array, name: string): Promise<ParsedScore> {
 /** A quarter tone belongs to the key below as a lowest note, to the key above as a highest: nobody is promised too little. */
 function boundsOf(part: ScorePart) {
   const optionalLow = part.lowWithOptional === null ? null : Math.floor(part.lowWithOptional.midi);
-  const optionalHigh = part.highWithOptional === null ? null : Math.ceil(part.highWithOptional.midi);
+  const optionalHigh =
+    part.highWithOptional === null ? null : Math.ceil(part.highWithOptional.midi);
   const low = part.low === null ? null : Math.floor(part.low.midi);
   const high = part.high === null ? null : Math.ceil(part.high.midi);
   return {
@@ -86,11 +103,15 @@ function boundsOf(part: ScorePart) {
     lowSpelled: part.low?.spelling.slice(0, 8) ?? null,
     highSpelled: part.high?.spelling.slice(0, 8) ?? null,
     optionalLow: optionalLow !== null && low !== null && optionalLow < low ? optionalLow : null,
-    optionalHigh: optionalHigh !== null && high !== null && optionalHigh > high ? optionalHigh : null,
+    optionalHigh:
+      optionalHigh !== null && high !== null && optionalHigh > high ? optionalHigh : null,
   };
 }
 
-function partRows(scoreId: string, parts: readonly ScorePart[]): (typeof scoreParts.$inferInsert)[] {
+function partRows(
+  scoreId: string,
+  parts: readonly ScorePart[],
+): (typeof scoreParts.$inferInsert)[] {
   const keys = partKeys(parts);
   return parts.map((part, place) => ({
     scoreId,
@@ -120,7 +141,13 @@ export type KeptReading = {
 /** A reading of the production with its file read anew. Throws `not-found` for one of another production. Asks no permission: the caller has. */
 export async function readingIn(productionId: string, scoreId: string): Promise<KeptReading> {
   const [row] = await db
-    .select({ id: scores.id, title: scores.title, version: scores.version, fileName: files.name, storageKey: files.storageKey })
+    .select({
+      id: scores.id,
+      title: scores.title,
+      version: scores.version,
+      fileName: files.name,
+      storageKey: files.storageKey,
+    })
     .from(scores)
     .innerJoin(files, eq(files.id, scores.fileId))
     .where(and(eq(scores.id, scoreId), eq(scores.productionId, productionId)));

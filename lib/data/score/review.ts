@@ -1,7 +1,8 @@
 import "server-only";
 import { and, asc, eq, isNull } from "drizzle-orm";
 import { db } from "@/db/client";
-import { numbers, roles, scoreParts, vocalLines } from "@/db/schema";
+import { numbers, roles, scoreParts, scores, vocalLines } from "@/db/schema";
+import { AppError } from "@/lib/errors";
 import type { ParsedScore } from "@/lib/formats/musicxml/types";
 import { groupBy } from "@/lib/group-by";
 import { tessitura } from "@/lib/music/tessitura";
@@ -15,12 +16,22 @@ import { readingIn } from "./read-file";
 import type { KeptReading } from "./read-file";
 
 /** What a reading holds and what it would become: for whoever may change the score. Writes nothing. */
-export async function scoreReview(actor: Actor, productionId: string, scoreId: string): Promise<ScoreReview> {
+export async function scoreReview(
+  actor: Actor,
+  productionId: string,
+  scoreId: string,
+): Promise<ScoreReview> {
   const scope = await productionFor(actor, productionId, "score:change");
   const [reading, numberRows, lineRows, roleRows] = await Promise.all([
     readingIn(scope.id, scoreId),
     db
-      .select({ id: numbers.id, version: numbers.version, label: numbers.label, title: numbers.title, scoreId: numbers.scoreId })
+      .select({
+        id: numbers.id,
+        version: numbers.version,
+        label: numbers.label,
+        title: numbers.title,
+        scoreId: numbers.scoreId,
+      })
       .from(numbers)
       .where(and(eq(numbers.productionId, scope.id), isNull(numbers.removedAt)))
       .orderBy(asc(numbers.place), asc(numbers.id)),
@@ -47,13 +58,20 @@ export async function scoreReview(actor: Actor, productionId: string, scoreId: s
     from,
     number: {
       ...number,
-      lines: (lines.get(number.id) ?? []).map(({ roleId, source, partKey, octaveShift }) => ({ roleId, source, partKey, octaveShift: octaveShift ?? 0 })),
+      lines: (lines.get(number.id) ?? []).map(({ roleId, source, partKey, octaveShift }) => ({
+        roleId,
+        source,
+        partKey,
+        octaveShift: octaveShift ?? 0,
+      })),
     } satisfies ReviewNumber,
   }));
   const title = titleOf(reading);
   const same =
     standing.find(({ from }) => from === reading.id) ??
-    standing.find(({ number }) => number.title.toLocaleLowerCase("en") === title.toLocaleLowerCase("en"));
+    standing.find(
+      ({ number }) => number.title.toLocaleLowerCase("en") === title.toLocaleLowerCase("en"),
+    );
   return {
     scoreId: reading.id,
     fileName: reading.fileName,
@@ -64,7 +82,11 @@ export async function scoreReview(actor: Actor, productionId: string, scoreId: s
     numbers: standing.map(({ number }) => number),
     roles: roleRows,
     numberId: same?.number.id ?? null,
-    proposed: { label: same?.number.label ?? nextLabel(numberRows.map((row) => row.label)), title, ...detailsOf(reading.score) },
+    proposed: {
+      label: same?.number.label ?? nextLabel(numberRows.map((row) => row.label)),
+      title,
+      ...detailsOf(reading.score),
+    },
   };
 }
 
@@ -81,7 +103,13 @@ function reviewPart(part: KeptReading["parts"][number]): ReviewPart {
     name: part.name,
     vocal: part.vocal,
     line: sung
-      ? { low, high, lowSpelled: part.lowSpelled ?? "", highSpelled: part.highSpelled ?? "", tessitura: histogram ? tessitura(histogram) : null }
+      ? {
+          low,
+          high,
+          lowSpelled: part.lowSpelled ?? "",
+          highSpelled: part.highSpelled ?? "",
+          tessitura: histogram ? tessitura(histogram) : null,
+        }
       : null,
     looksOff: sung && part.vocal ? octaveLooks(part.name, { low, high, histogram }) : null,
     warnings: part.warnings,
@@ -99,12 +127,31 @@ function detailsOf(score: ParsedScore): Omit<ScoreReview["proposed"], "label" | 
     metre: score.metre !== null && score.metre.length <= 12 ? score.metre : "",
     tempo: tempo !== null && tempo >= 20 && tempo <= 400 ? String(tempo) : "",
     bars: score.measures.written > 0 ? String(score.measures.written) : "",
-    length: minutes === null || minutes <= 0 || minutes >= 99 ? "" : formatLength(Math.max(1, minutes * 60)),
+    length:
+      minutes === null || minutes <= 0 || minutes >= 99
+        ? ""
+        : formatLength(Math.max(1, minutes * 60)),
   };
 }
 
 /** The whole number after the highest label: "4" after "3a". */
 function nextLabel(labels: readonly string[]): string {
-  const used = labels.map((label) => Number.parseInt(label, 10)).filter((value) => Number.isFinite(value));
+  const used = labels
+    .map((label) => Number.parseInt(label, 10))
+    .filter((value) => Number.isFinite(value));
   return String(Math.max(0, ...used) + 1);
+}
+
+/** Throws `not-found` unless this is a reading of the production that the actor may put in place. */
+export async function assertReading(
+  actor: Actor,
+  productionId: string,
+  scoreId: string,
+): Promise<void> {
+  const scope = await productionFor(actor, productionId, "score:change");
+  const [row] = await db
+    .select({ id: scores.id })
+    .from(scores)
+    .where(and(eq(scores.id, scoreId), eq(scores.productionId, scope.id)));
+  if (!row) throw new AppError("not-found");
 }

@@ -31,7 +31,13 @@ export async function roleVoices(actor: Actor, productionId: string): Promise<Ro
 export async function roleVoicesIn(tx: Db | Tx, productionId: string): Promise<RoleVoice[]> {
   const [roleRows, lines] = await Promise.all([
     tx
-      .select({ id: roles.id, name: roles.name, kind: roles.kind, needed: roles.needed, covers: roles.covers })
+      .select({
+        id: roles.id,
+        name: roles.name,
+        kind: roles.kind,
+        needed: roles.needed,
+        covers: roles.covers,
+      })
       .from(roles)
       .where(and(eq(roles.productionId, productionId), isNull(roles.removedAt)))
       .orderBy(asc(roles.place), asc(roles.id)),
@@ -54,16 +60,23 @@ export async function roleVoicesIn(tx: Db | Tx, productionId: string): Promise<R
   ]);
   const byRole = groupBy(lines, (line) => line.roleId);
   return roleRows.map((role) => {
-    const perNumber = [...groupBy(byRole.get(role.id) ?? [], (line) => line.numberId).values()].flatMap((own) => {
+    const perNumber = [
+      ...groupBy(byRole.get(role.id) ?? [], (line) => line.numberId).values(),
+    ].flatMap((own) => {
       const [first] = own;
       const line = mergeLines(own.map(toVocalLine));
-      return first && line ? [{ numberId: first.numberId, label: first.label, title: first.title, line }] : [];
+      return first && line
+        ? [{ numberId: first.numberId, label: first.label, title: first.title, line }]
+        : [];
     });
     return { ...role, line: mergeLines(perNumber.map((each) => each.line)), perNumber };
   });
 }
 
-type LineColumns = Pick<typeof vocalLines.$inferSelect, "low" | "high" | "optionalLow" | "optionalHigh" | "histogram">;
+type LineColumns = Pick<
+  typeof vocalLines.$inferSelect,
+  "low" | "high" | "optionalLow" | "optionalHigh" | "histogram"
+>;
 
 /** A row as the arithmetic takes it. */
 export function toVocalLine(row: LineColumns): VocalLine {
@@ -122,5 +135,8 @@ export async function numbersIn(tx: Db | Tx, productionId: string): Promise<Numb
       .orderBy(asc(roles.place), asc(roles.id)),
   ]);
   const byNumber = groupBy(sung, (row) => row.numberId);
-  return numberRows.map((row) => ({ ...row, roleIds: (byNumber.get(row.id) ?? []).map((each) => each.roleId) }));
+  return numberRows.map((row) => ({
+    ...row,
+    roleIds: (byNumber.get(row.id) ?? []).map((each) => each.roleId),
+  }));
 }

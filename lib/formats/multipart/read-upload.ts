@@ -40,7 +40,8 @@ export async function readUpload(request: Request, rules: UploadRules): Promise<
 
 async function chunksOf(request: Request, rules: UploadRules): Promise<Uint8Array<ArrayBuffer>[]> {
   const most = rules.maxBytes + WRAPPING;
-  if (Number(request.headers.get("content-length") ?? 0) > most) throw new AppError("too-large", rules.tooLarge);
+  if (Number(request.headers.get("content-length") ?? 0) > most)
+    throw new AppError("too-large", rules.tooLarge);
   const chunks: Uint8Array<ArrayBuffer>[] = [];
   const reader = request.body?.getReader();
   let total = 0;

@@ -14,7 +14,12 @@ import { DoorRoom } from "./door-room";
 
 export type DoorAct = (typeof DOOR_ACTS)[number];
 
-const NEXT_STATE: Record<DoorAct, DoorItem["state"]> = { here: "here", "not-here": "not here yet", in: "inside", out: "heard" };
+const NEXT_STATE: Record<DoorAct, DoorItem["state"]> = {
+  here: "here",
+  "not-here": "not here yet",
+  in: "inside",
+  out: "heard",
+};
 
 /** The view as it will be once the act is done. */
 function withAct(view: DoorView, signUpId: string, act: DoorAct): DoorView {
@@ -26,7 +31,12 @@ function withAct(view: DoorView, signUpId: string, act: DoorAct): DoorView {
       return {
         ...room,
         items: room.items.map((item): DoorItem => {
-          if (item.signUpId === signUpId) return { ...item, state: NEXT_STATE[act], inAt: act === "in" ? new Date().toISOString() : item.inAt };
+          if (item.signUpId === signUpId)
+            return {
+              ...item,
+              state: NEXT_STATE[act],
+              inAt: act === "in" ? new Date().toISOString() : item.inAt,
+            };
           return act === "in" && item.state === "inside" ? { ...item, state: "heard" } : item;
         }),
       };
@@ -94,7 +104,11 @@ export function DoorBoard({ token, initial }: { token: string; initial: DoorView
         </Notice>
       )}
       {room ? (
-        <DoorRoom room={room} view={view} onAct={(signUpId, act) => mutation.mutate({ signUpId, act })} />
+        <DoorRoom
+          room={room}
+          view={view}
+          onAct={(signUpId, act) => mutation.mutate({ signUpId, act })}
+        />
       ) : (
         <p>No room is open today.</p>
       )}

@@ -92,7 +92,9 @@ export const takeOut = defineAction({ input: signUpSchema }, async (input, actor
   changed(input.productionId);
 });
 
-export const proposeFill = defineAction({ input: daySchema }, (input, actor) => fillData.proposeFill(actor, input));
+export const proposeFill = defineAction({ input: daySchema }, (input, actor) =>
+  fillData.proposeFill(actor, input),
+);
 
 export const acceptFill = defineAction({ input: acceptFillSchema }, async (input, actor) => {
   const placed = await fillData.acceptFill(actor, input);

@@ -1,6 +1,7 @@
 import { HydrationBoundary, QueryClient, dehydrate } from "@tanstack/react-query";
 import type { Metadata, Route } from "next";
 import Link from "next/link";
+import { Suspense } from "react";
 import { LiveData } from "@/components/layout/live-data";
 import { PageTitle } from "@/components/layout/page-title";
 import { Button } from "@/components/ui/button";
@@ -10,8 +11,11 @@ import { pageActor } from "@/lib/auth/get-actor";
 import { asJson } from "@/lib/client/as-json";
 import { callbacksQuery } from "@/lib/client/callbacks";
 import { readCallbacks } from "@/lib/data/callbacks/draft";
+import { productionFor } from "@/lib/data/guard";
 import { roomsOfProduction } from "@/lib/data/rooms";
+import type { Actor } from "@/lib/permissions/types";
 import { CallbacksBoard } from "./_components/callbacks-board";
+import { CallbacksLoading } from "./_components/callbacks-loading";
 import { StartRound } from "./_components/start-round";
 
 export const metadata: Metadata = { title: "Callbacks" };
@@ -21,6 +25,16 @@ export default async function CallbacksPage({
 }: PageProps<"/productions/[productionId]/callbacks">) {
   const { productionId } = await params;
   const actor = await pageActor(`/productions/${productionId}/callbacks`);
+  // Before anything streams, so that what is refused answers 404.
+  await orNotFound(productionFor(actor, productionId, "callbacks:read"));
+  return (
+    <Suspense fallback={<CallbacksLoading />}>
+      <Callbacks actor={actor} productionId={productionId} />
+    </Suspense>
+  );
+}
+
+async function Callbacks({ actor, productionId }: { actor: Actor; productionId: string }) {
   const [draft, rooms] = await orNotFound(
     Promise.all([readCallbacks(actor, productionId), roomsOfProduction(actor, productionId)]),
   );

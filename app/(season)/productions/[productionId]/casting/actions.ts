@@ -17,4 +17,6 @@ export const publishCast = defineAction({ input: publishCastSchema }, async (inp
 });
 
 /** The range fit of one singer in one role, number by number. */
-export const computeFit = defineAction({ input: fitSchema }, (input, actor) => grid.computeFit(actor, input));
+export const computeFit = defineAction({ input: fitSchema }, (input, actor) =>
+  grid.computeFit(actor, input),
+);

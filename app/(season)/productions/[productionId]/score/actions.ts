@@ -87,8 +87,11 @@ export const shiftPart = defineAction({ input: shiftPartSchema }, async (input, 
   changed(input.productionId);
 });
 
-export const confirmReading = defineAction({ input: confirmReadingSchema }, async (input, actor) => {
-  const confirmed = await confirming.confirmReading(actor, input);
-  changed(input.productionId);
-  return confirmed;
-});
+export const confirmReading = defineAction(
+  { input: confirmReadingSchema },
+  async (input, actor) => {
+    const confirmed = await confirming.confirmReading(actor, input);
+    changed(input.productionId);
+    return confirmed;
+  },
+);

@@ -3,7 +3,10 @@ import { pageActor } from "@/lib/auth/get-actor";
 import { productionFor } from "@/lib/data/guard";
 
 /** Asks for permission outside the loading state, so that a refusal answers 404 before anything is sent. */
-export default async function AuditionsLayout({ children, params }: LayoutProps<"/productions/[productionId]/auditions">) {
+export default async function AuditionsLayout({
+  children,
+  params,
+}: LayoutProps<"/productions/[productionId]/auditions">) {
   const { productionId } = await params;
   const actor = await pageActor(`/productions/${productionId}/auditions`);
   await orNotFound(productionFor(actor, productionId, "auditions:read"));

@@ -16,11 +16,16 @@ import { SignUpsTable } from "../_components/sign-ups-table";
 export const metadata: Metadata = { title: "Auditions" };
 
 /** The audition days of a production and everyone signed up for them. */
-export default async function AuditionsPage({ params }: PageProps<"/productions/[productionId]/auditions">) {
+export default async function AuditionsPage({
+  params,
+}: PageProps<"/productions/[productionId]/auditions">) {
   const { productionId } = await params;
   const actor = await pageActor(`/productions/${productionId}/auditions`);
   const scope = await orNotFound(productionFor(actor, productionId, "auditions:read"));
-  const [days, signUps] = await Promise.all([listDays(actor, productionId), listSignUps(actor, productionId)]);
+  const [days, signUps] = await Promise.all([
+    listDays(actor, productionId),
+    listSignUps(actor, productionId),
+  ]);
   const mayPlan = can(actor, "auditions:plan", { companyId: scope.companyId, productionId });
   const placed = signUps.filter((row) => row.slot !== null).length;
 
@@ -38,8 +43,14 @@ export default async function AuditionsPage({ params }: PageProps<"/productions/
     <>
       <PageTitle
         title="Auditions"
-        sub={signUps.length > 0 ? `${String(signUps.length)} signed up, ${String(placed)} with a time.` : "Days, rooms and times, and everyone who wants to be heard."}
-        {...(mayPlan && { actions: [<span key="import">{importLink}</span>, <span key="day">{newDay}</span>] })}
+        sub={
+          signUps.length > 0
+            ? `${String(signUps.length)} signed up, ${String(placed)} with a time.`
+            : "Days, rooms and times, and everyone who wants to be heard."
+        }
+        {...(mayPlan && {
+          actions: [<span key="import">{importLink}</span>, <span key="day">{newDay}</span>],
+        })}
       />
       <div className="flex flex-col gap-10">
         <section aria-labelledby="days">
@@ -50,7 +61,8 @@ export default async function AuditionsPage({ params }: PageProps<"/productions/
             <DayList productionId={productionId} days={days} locale={scope.locale} />
           ) : (
             <EmptyState title="No audition day yet" level={3} {...(mayPlan && { action: newDay })}>
-              A day has a date, one or more rooms with opening times, and slots of a few minutes with the pianist’s rests and lunch in place.
+              A day has a date, one or more rooms with opening times, and slots of a few minutes
+              with the pianist’s rests and lunch in place.
             </EmptyState>
           )}
         </section>
@@ -60,10 +72,20 @@ export default async function AuditionsPage({ params }: PageProps<"/productions/
             {mayPlan && <AddSinger productionId={productionId} />}
           </div>
           {signUps.length > 0 ? (
-            <SignUpsTable productionId={productionId} rows={signUps} mayChange={mayPlan} locale={scope.locale} />
+            <SignUpsTable
+              productionId={productionId}
+              rows={signUps}
+              mayChange={mayPlan}
+              locale={scope.locale}
+            />
           ) : (
-            <EmptyState title="Nobody is signed up yet" level={3} {...(mayPlan && { action: importLink })}>
-              Bring a list as a spreadsheet, or add singers one by one. Each becomes a person of the company and waits for a time.
+            <EmptyState
+              title="Nobody is signed up yet"
+              level={3}
+              {...(mayPlan && { action: importLink })}
+            >
+              Bring a list as a spreadsheet, or add singers one by one. Each becomes a person of the
+              company and waits for a time.
             </EmptyState>
           )}
         </section>

@@ -10,11 +10,17 @@ import { DayBoard } from "./_components/day-board";
 export const metadata: Metadata = { title: "Audition day" };
 
 /** One audition day: rooms, slots, singers and pianists, live. */
-export default async function AuditionDayPage({ params }: PageProps<"/productions/[productionId]/auditions/[dayId]">) {
+export default async function AuditionDayPage({
+  params,
+}: PageProps<"/productions/[productionId]/auditions/[dayId]">) {
   const { productionId, dayId } = await params;
   const actor = await pageActor(`/productions/${productionId}/auditions/${dayId}`);
   const [scope, day, accompanists] = await orNotFound(
-    Promise.all([productionFor(actor, productionId, "auditions:read"), readDay(actor, productionId, dayId), listAccompanists(actor, productionId)]),
+    Promise.all([
+      productionFor(actor, productionId, "auditions:read"),
+      readDay(actor, productionId, dayId),
+      listAccompanists(actor, productionId),
+    ]),
   );
   return (
     <LiveData>

@@ -14,7 +14,15 @@ import { changeSignUp, relistSignUp, withdrawSignUp } from "../actions";
 import { StateMark } from "./state-mark";
 
 /** What one singer brings and asks for, and whether they come at all. */
-export function ChangeSignUp({ productionId, row, onClose }: { productionId: string; row: SignUpListed; onClose: () => void }) {
+export function ChangeSignUp({
+  productionId,
+  row,
+  onClose,
+}: {
+  productionId: string;
+  row: SignUpListed;
+  onClose: () => void;
+}) {
   const router = useRouter();
   const state = useActionForm({
     schema: changeSignUpSchema,
@@ -64,7 +72,12 @@ export function ChangeSignUp({ productionId, row, onClose }: { productionId: str
         <Field label="Bars" optional error={formState.errors.bars?.message}>
           <Input inputMode="numeric" className="max-w-28" {...register("bars")} />
         </Field>
-        <Field label="Asks for" optional hint="A role, or “any”." error={formState.errors.asksFor?.message}>
+        <Field
+          label="Asks for"
+          optional
+          hint="A role, or “any”."
+          error={formState.errors.asksFor?.message}
+        >
           <Input {...register("asksFor")} />
         </Field>
         <div className="flex flex-wrap gap-4">
@@ -78,13 +91,22 @@ export function ChangeSignUp({ productionId, row, onClose }: { productionId: str
       </ActionForm>
       <div className="border-t border-rule pt-4">
         {gone ? (
-          <Button onClick={() => void act(relistSignUp, `${row.name} is back on the list.`)}>Put back on the list</Button>
+          <Button onClick={() => void act(relistSignUp, `${row.name} is back on the list.`)}>
+            Put back on the list
+          </Button>
         ) : (
           <>
-            <Button kind="danger" onClick={() => void act(withdrawSignUp, `${row.name} is withdrawn; the time is free.`)}>
+            <Button
+              kind="danger"
+              onClick={() =>
+                void act(withdrawSignUp, `${row.name} is withdrawn; the time is free.`)
+              }
+            >
               {row.name} does not come
             </Button>
-            <p className="mt-2 text-sm text-ink-2">Frees the time. Nobody is written to, and they can be put back on the list.</p>
+            <p className="mt-2 text-sm text-ink-2">
+              Frees the time. Nobody is written to, and they can be put back on the list.
+            </p>
           </>
         )}
       </div>

@@ -43,10 +43,10 @@ export function NewDayForm({ choices, initial }: Props) {
     onDone: ({ dayId }) => router.push(`/productions/${initial.productionId}/auditions/${dayId}`),
   });
   return (
-    <ActionForm state={state} submitLabel="Make the day" className="max-w-3xl">
+    <ActionForm state={state} submitLabel="Make the day">
       <FormProvider {...state.form}>
-          <DayFieldset choices={choices} />
-        </FormProvider>
+        <DayFieldset choices={choices} />
+      </FormProvider>
     </ActionForm>
   );
 }
@@ -70,7 +70,7 @@ export function ChangeDayForm({ choices, initial }: { choices: DayChoices; initi
   });
   return (
     <>
-      <ActionForm state={state} submitLabel="Save the day" className="max-w-3xl">
+      <ActionForm state={state} submitLabel="Save the day">
         <FormProvider {...state.form}>
           <DayFieldset choices={choices} />
         </FormProvider>
@@ -80,7 +80,10 @@ export function ChangeDayForm({ choices, initial }: { choices: DayChoices; initi
           lost={lost}
           onKeep={() => setLost(null)}
           onAgree={async () => {
-            state.form.setValue("mayLose", lost.map((singer) => singer.signUpId));
+            state.form.setValue(
+              "mayLose",
+              lost.map((singer) => singer.signUpId),
+            );
             setLost(null);
             await state.submit();
           }}
@@ -96,7 +99,8 @@ function DayFieldset({ choices }: { choices: DayChoices }) {
   const values = { ...getValues(), ...useWatch({ control }) } as DayFields;
   const used = values.rooms;
   const errors = formState.errors;
-  const message = (name: Exclude<keyof DayFields, "rooms" | "productionId">): string | undefined => errors[name]?.message;
+  const message = (name: Exclude<keyof DayFields, "rooms" | "productionId">): string | undefined =>
+    errors[name]?.message;
 
   function toggle(roomId: string, on: boolean) {
     const last = used.at(-1);
@@ -124,11 +128,19 @@ function DayFieldset({ choices }: { choices: DayChoices }) {
         hint={`Times are on the clock of ${choices.zone.replaceAll("_", " ")}.`}
         error={errors.rooms?.message ?? errors.rooms?.root?.message}
       >
-        {choices.rooms.length === 0 && <p className="text-ink-2">The company has no rooms yet. Its admin or a stage manager adds them on the company’s page.</p>}
+        {choices.rooms.length === 0 && (
+          <p className="text-ink-2">
+            The company has no rooms yet. Its admin or a stage manager adds them on the company’s
+            page.
+          </p>
+        )}
         {choices.rooms.map((room) => {
           const chosen = used.find((r) => r.roomId === room.id);
           return (
-            <div key={room.id} className="flex flex-wrap items-center gap-x-6 gap-y-2 border-b border-rule py-2">
+            <div
+              key={room.id}
+              className="flex flex-wrap items-center gap-x-6 gap-y-2 border-b border-rule py-2"
+            >
               <Checkbox
                 className="min-w-56 flex-1"
                 label={`${room.name}, ${room.venue}`}
@@ -139,10 +151,18 @@ function DayFieldset({ choices }: { choices: DayChoices }) {
               {chosen && (
                 <div className="flex gap-4">
                   <Field label={`${room.name} opens`} className="w-36">
-                    <Input type="time" value={chosen.opens} onChange={(event) => setTime(room.id, "opens", event.currentTarget.value)} />
+                    <Input
+                      type="time"
+                      value={chosen.opens}
+                      onChange={(event) => setTime(room.id, "opens", event.currentTarget.value)}
+                    />
                   </Field>
                   <Field label={`${room.name} closes`} className="w-36">
-                    <Input type="time" value={chosen.closes} onChange={(event) => setTime(room.id, "closes", event.currentTarget.value)} />
+                    <Input
+                      type="time"
+                      value={chosen.closes}
+                      onChange={(event) => setTime(room.id, "closes", event.currentTarget.value)}
+                    />
                   </Field>
                 </div>
               )}
@@ -171,7 +191,8 @@ function DayFieldset({ choices }: { choices: DayChoices }) {
         </Field>
       </div>
       <p className="text-sm text-ink-2">
-        The rests stand as common practice has them. Your pianist’s agreement and local rules decide: ask before you shorten one.
+        The rests stand as common practice has them. Your pianist’s agreement and local rules
+        decide: ask before you shorten one.
       </p>
       <Checkbox label="Hold one slot an hour for late-comers" {...register("hold")} />
       <DayPreview values={values} choices={choices} />

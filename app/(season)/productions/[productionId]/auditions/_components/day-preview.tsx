@@ -8,7 +8,11 @@ const whole = (text: string): number => (text.trim() === "" ? Number.NaN : Numbe
 /** How many slots follow from what is typed, room by room, before anything is saved. */
 export function DayPreview({ values, choices }: { values: DayFields; choices: DayChoices }) {
   if (values.localDate === "" || values.rooms.length === 0) {
-    return <p role="status" className="border-y border-rule py-3 text-ink-2">Choose a day and a room, and the number of slots stands here.</p>;
+    return (
+      <p role="status" className="border-y border-rule py-3 text-ink-2">
+        Choose a day and a room, and the number of slots stands here.
+      </p>
+    );
   }
   const result = layOutDay(
     {
@@ -24,7 +28,8 @@ export function DayPreview({ values, choices }: { values: DayFields; choices: Da
     },
     choices.zone,
   );
-  const name = (roomId: string): string => choices.rooms.find((room) => room.id === roomId)?.name ?? "Room";
+  const name = (roomId: string): string =>
+    choices.rooms.find((room) => room.id === roomId)?.name ?? "Room";
   if (!result.ok) {
     return (
       <p role="status" className="border-y border-rule py-3 text-vermilion">
@@ -33,7 +38,11 @@ export function DayPreview({ values, choices }: { values: DayFields; choices: Da
       </p>
     );
   }
-  const count = (kind: string) => result.rooms.reduce((sum, room) => sum + room.items.filter((item) => item.kind === kind).length, 0);
+  const count = (kind: string) =>
+    result.rooms.reduce(
+      (sum, room) => sum + room.items.filter((item) => item.kind === kind).length,
+      0,
+    );
   const holds = count("hold");
   return (
     <div role="status" className="border-y border-rule py-3">
@@ -47,7 +56,9 @@ export function DayPreview({ values, choices }: { values: DayFields; choices: Da
           return (
             <li key={room.roomId}>
               {name(room.roomId)}: {room.items.filter((item) => item.kind === "slot").length} slots
-              {pauses.map((pause) => `, ${pause.kind} ${clockSpan(pause.from, pause.to, choices.zone)}`).join("")}
+              {pauses
+                .map((pause) => `, ${pause.kind} ${clockSpan(pause.from, pause.to, choices.zone)}`)
+                .join("")}
             </li>
           );
         })}

@@ -26,8 +26,17 @@ const tones: Record<SignUpState, string> = {
 /** How far a sign-up has come: a shape and the word for it. */
 export function StateMark({ state, className }: { state: SignUpState; className?: string }) {
   return (
-    <span className={cx("inline-flex items-center gap-1.5 whitespace-nowrap", tones[state], className)}>
-      <svg viewBox="0 0 12 12" width="11" height="11" stroke="currentColor" aria-hidden="true" className="shrink-0">
+    <span
+      className={cx("inline-flex items-center gap-1.5 whitespace-nowrap", tones[state], className)}
+    >
+      <svg
+        viewBox="0 0 12 12"
+        width="11"
+        height="11"
+        stroke="currentColor"
+        aria-hidden="true"
+        className="shrink-0"
+      >
         {shapes[state]}
       </svg>
       {state}

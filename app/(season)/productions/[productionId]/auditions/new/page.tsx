@@ -8,7 +8,9 @@ import { NewDayForm } from "../_components/day-form";
 export const metadata: Metadata = { title: "Make an audition day" };
 
 /** A new audition day: date, rooms, slots, rests and lunch. */
-export default async function NewDayPage({ params }: PageProps<"/productions/[productionId]/auditions/new">) {
+export default async function NewDayPage({
+  params,
+}: PageProps<"/productions/[productionId]/auditions/new">) {
   const { productionId } = await params;
   const actor = await pageActor(`/productions/${productionId}/auditions/new`);
   const choices = await orNotFound(listDayChoices(actor, productionId));
@@ -26,7 +28,10 @@ export default async function NewDayPage({ params }: PageProps<"/productions/[pr
   };
   return (
     <>
-      <PageTitle title="Make an audition day" sub="The rooms are booked when you save; a room that is taken says who has it." />
+      <PageTitle
+        title="Make an audition day"
+        sub="The rooms are booked when you save; a room that is taken says who has it."
+      />
       <NewDayForm choices={choices} initial={initial} />
     </>
   );

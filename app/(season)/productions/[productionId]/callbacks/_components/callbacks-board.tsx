@@ -9,6 +9,7 @@ import { SideColumn } from "@/components/layout/side-column";
 import { Chip } from "@/components/ui/chip";
 import { Notice } from "@/components/ui/notice";
 import { callbacksQuery, isShown, type DraftSinger } from "@/lib/client/callbacks";
+import { LOOK_AGAIN } from "@/lib/client/look-again";
 import { matches } from "@/lib/client/matches";
 import { AnswersSummary } from "./answers-summary";
 import { MarksFilter, type MarksView } from "./marks-filter";
@@ -33,12 +34,11 @@ export function CallbacksBoard({
   productionId: string;
   rooms: readonly RoomOption[];
 }) {
-  const query = callbacksQuery(productionId);
   const marks = useMarks(productionId);
   const { data: draft, error } = useQuery({
-    ...query,
+    ...callbacksQuery(productionId),
     // An answer that left before the tick arrived would take it off the screen again.
-    refetchInterval: marks.busy ? false : query.refetchInterval,
+    refetchInterval: marks.busy ? false : LOOK_AGAIN,
   });
   const [view, setView] = useState<MarksView>({ typed: "", roleId: "", shown: "everyone" });
   const [hearing, setHearing] = useState<DraftSinger | null>(null);

@@ -34,7 +34,7 @@ export function PublishRound({
   if (why !== null || (again && preview.told + preview.takenOff === 0)) {
     return (
       <span className="flex flex-wrap items-center gap-x-3 gap-y-1">
-        <span id="why-not-published" className="text-sm text-ink-2">
+        <span id="why-not-published" className={why === null ? "sr-only" : "text-sm text-ink-2"}>
           {why ?? "Everything has gone out."}
         </span>
         <Button aria-disabled aria-describedby="why-not-published">

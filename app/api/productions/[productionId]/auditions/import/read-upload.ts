@@ -7,9 +7,15 @@ const WRAPPING = 8 * 1024;
  * The one file of a multipart form, read no further than `maxBytes`. Throws `too-large`, or `invalid` when there is no
  * file in the field "file".
  */
-export async function readUpload(request: Request, maxBytes: number): Promise<{ bytes: Uint8Array; name: string }> {
+export async function readUpload(
+  request: Request,
+  maxBytes: number,
+): Promise<{ bytes: Uint8Array; name: string }> {
   const tooLarge = (): AppError =>
-    new AppError("too-large", `This file is over ${String(maxBytes / 1024 / 1024)} MB. Remove pictures and other sheets, or save it as CSV.`);
+    new AppError(
+      "too-large",
+      `This file is over ${String(maxBytes / 1024 / 1024)} MB. Remove pictures and other sheets, or save it as CSV.`,
+    );
   if (Number(request.headers.get("content-length") ?? 0) > maxBytes + WRAPPING) throw tooLarge();
   const chunks: Uint8Array<ArrayBuffer>[] = [];
   let total = 0;

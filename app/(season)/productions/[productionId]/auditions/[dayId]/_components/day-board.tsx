@@ -21,7 +21,11 @@ import { toldBy, useMoves, type Move } from "./use-moves";
 import { useSlotDrag } from "./use-slot-drag";
 import { useSlotKeys } from "./use-slot-keys";
 
-type Props = { initial: AuditionDayView; accompanists: readonly { personId: string; name: string }[]; locale: string };
+type Props = {
+  initial: AuditionDayView;
+  accompanists: readonly { personId: string; name: string }[];
+  locale: string;
+};
 
 /** Local minutes after midnight, for the drawing. */
 function minutesOf(iso: string, zone: string): number {
@@ -45,7 +49,10 @@ const LANE_TONES = ["smalt", "verdigris", "ochre"] as const;
 
 /** One audition day, live: rooms as columns of time, singers to be moved by pointer or keyboard, and what waits beside it. */
 export function DayBoard({ initial, accompanists, locale }: Props) {
-  const query = useQuery({ ...auditionDayQuery(initial.productionId, initial.id), initialData: initial });
+  const query = useQuery({
+    ...auditionDayQuery(initial.productionId, initial.id),
+    initialData: initial,
+  });
   const day = query.data;
   const now = useNow();
   const { move } = useMoves(day);
@@ -67,7 +74,9 @@ export function DayBoard({ initial, accompanists, locale }: Props) {
   const singerOpened = [...singers, ...day.waiting].find((singer) => singer.signUpId === opened);
   const nobody = day.rooms.some((room) => pianistLanes(room).some((piece) => piece.name === null));
   const place = (singer: SingerOnDay) => {
-    const free = items.find((item) => item.kind === "slot" && item.singer === null) ?? items.find((item) => item.kind === "slot");
+    const free =
+      items.find((item) => item.kind === "slot" && item.singer === null) ??
+      items.find((item) => item.kind === "slot");
     keys.pickUp(singer.signUpId, singer.name, free?.id ?? null);
   };
 
@@ -79,7 +88,9 @@ export function DayBoard({ initial, accompanists, locale }: Props) {
         chips={
           <>
             <Chip tone="fits">{`${String(singers.length)} placed`}</Chip>
-            {day.waiting.length > 0 && <Chip tone="stretch">{`${String(day.waiting.length)} waiting`}</Chip>}
+            {day.waiting.length > 0 && (
+              <Chip tone="stretch">{`${String(day.waiting.length)} waiting`}</Chip>
+            )}
             {nobody && <Chip tone="clash">no pianist for part of the day</Chip>}
           </>
         }
@@ -95,32 +106,63 @@ export function DayBoard({ initial, accompanists, locale }: Props) {
       </p>
       <SideColumn
         sideLabel="Plan, waiting list and pianists"
-        side={<DaySide day={day} accompanists={accompanists} locale={locale} onPlace={place} onOpen={(singer) => setOpened(singer.signUpId)} />}
+        side={
+          <DaySide
+            day={day}
+            accompanists={accompanists}
+            locale={locale}
+            onPlace={place}
+            onOpen={(singer) => setOpened(singer.signUpId)}
+          />
+        }
       >
         {day.may.plan && (
           <div className="mb-2 flex min-h-11 flex-wrap items-center gap-3 text-sm text-ink-2 print:hidden">
             {keys.carrying ? (
               <>
                 <span>
-                  <strong className="text-ink">{keys.carrying.name}</strong> is picked up: press a slot, or choose with the arrow keys and Enter.
+                  <strong className="text-ink">{keys.carrying.name}</strong> is picked up: press a
+                  slot, or choose with the arrow keys and Enter.
                 </span>
                 <Button size="small" onClick={keys.letGo}>
                   Leave as it was
                 </Button>
               </>
             ) : (
-              <span>Drag a singer, or press one and then a slot. By keyboard: Enter, arrow keys, Enter; Esc leaves it.</span>
+              <span>
+                Drag a singer, or press one and then a slot. By keyboard: Enter, arrow keys, Enter;
+                Esc leaves it.
+              </span>
             )}
           </div>
         )}
         <DayColumns
           label={`${longDay(day.localDate, locale)}, rooms side by side`}
-          from={Math.floor(Math.min(...day.rooms.map((room) => minutesOf(room.opensAt, day.zone))) / 30) * 30}
-          to={Math.ceil(Math.max(...day.rooms.map((room) => minutesOf(room.closesAt, day.zone))) / 30) * 30}
-          now={now && localDay(now, day.zone) === day.localDate ? minutesOf(now.toISOString(), day.zone) : null}
+          from={
+            Math.floor(
+              Math.min(...day.rooms.map((room) => minutesOf(room.opensAt, day.zone))) / 30,
+            ) * 30
+          }
+          to={
+            Math.ceil(
+              Math.max(...day.rooms.map((room) => minutesOf(room.closesAt, day.zone))) / 30,
+            ) * 30
+          }
+          now={
+            now && localDay(now, day.zone) === day.localDate
+              ? minutesOf(now.toISOString(), day.zone)
+              : null
+          }
           rooms={day.rooms.map((room) => columnOf(room, day.zone, accompanists))}
           renderSlot={({ item }, room) => (
-            <SlotCell day={day} item={item} roomName={room.label} keys={keys} drag={drag} onOpen={(singer) => setOpened(singer.signUpId)} />
+            <SlotCell
+              day={day}
+              item={item}
+              roomName={room.label}
+              keys={keys}
+              drag={drag}
+              onOpen={(singer) => setOpened(singer.signUpId)}
+            />
           )}
         />
       </SideColumn>
@@ -150,17 +192,27 @@ export function DayBoard({ initial, accompanists, locale }: Props) {
 
 /** A room as the drawing takes it: singable items, hatched rests, the pianists' lane. */
 function columnOf(room: RoomOnDay, zone: string, accompanists: Props["accompanists"]) {
-  const span = (part: { startsAt: string; endsAt: string }) => ({ start: minutesOf(part.startsAt, zone), end: minutesOf(part.endsAt, zone) });
+  const span = (part: { startsAt: string; endsAt: string }) => ({
+    start: minutesOf(part.startsAt, zone),
+    end: minutesOf(part.endsAt, zone),
+  });
   const rest = (item: ItemOnDay): string => {
-    if (item.kind === "rest") return `Pianist rests ${String(span(item).end - span(item).start)} min`;
-    const changes = room.pianists.some((p) => p.endsAt > item.startsAt && p.endsAt <= item.endsAt) && room.pianists.some((p) => p.startsAt >= item.endsAt);
+    if (item.kind === "rest")
+      return `Pianist rests ${String(span(item).end - span(item).start)} min`;
+    const changes =
+      room.pianists.some((p) => p.endsAt > item.startsAt && p.endsAt <= item.endsAt) &&
+      room.pianists.some((p) => p.startsAt >= item.endsAt);
     return changes ? "Lunch · change of pianist" : "Lunch";
   };
   return {
     id: room.id,
     label: room.name,
-    slots: room.items.filter((item) => item.kind === "slot" || item.kind === "hold").map((item) => ({ id: item.id, ...span(item), item })),
-    rests: room.items.filter((item) => item.kind === "rest" || item.kind === "lunch").map((item) => ({ id: item.id, ...span(item), label: rest(item) })),
+    slots: room.items
+      .filter((item) => item.kind === "slot" || item.kind === "hold")
+      .map((item) => ({ id: item.id, ...span(item), item })),
+    rests: room.items
+      .filter((item) => item.kind === "rest" || item.kind === "lunch")
+      .map((item) => ({ id: item.id, ...span(item), label: rest(item) })),
     pianists: pianistLanes(room).map((piece) => ({
       id: piece.id,
       ...span(piece),
@@ -168,7 +220,12 @@ function columnOf(room: RoomOnDay, zone: string, accompanists: Props["accompanis
       tone:
         piece.name === null
           ? ("clash" as const)
-          : (LANE_TONES[Math.max(0, accompanists.findIndex((a) => a.name === piece.name)) % LANE_TONES.length] ?? "smalt"),
+          : (LANE_TONES[
+              Math.max(
+                0,
+                accompanists.findIndex((a) => a.name === piece.name),
+              ) % LANE_TONES.length
+            ] ?? "smalt"),
     })),
   };
 }

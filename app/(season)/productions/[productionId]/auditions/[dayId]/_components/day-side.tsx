@@ -35,11 +35,23 @@ function PlanFacts({ day, locale }: { day: AuditionDayView; locale: string }) {
   const router = useRouter();
   const facts: [string, string][] = [
     ["Slot", `${String(day.slotMinutes)} min`],
-    ["Pianist rests", day.restMinutes > 0 ? `${String(day.restMinutes)} min after ${String(day.restAfterMinutes)}` : "none of their own"],
-    ["Lunch", day.lunchMinutes > 0 ? `${String(day.lunchMinutes)} min, ${day.lunchFrom ?? ""}–${day.lunchTo ?? ""}` : "none"],
+    [
+      "Pianist rests",
+      day.restMinutes > 0
+        ? `${String(day.restMinutes)} min after ${String(day.restAfterMinutes)}`
+        : "none of their own",
+    ],
+    [
+      "Lunch",
+      day.lunchMinutes > 0
+        ? `${String(day.lunchMinutes)} min, ${day.lunchFrom ?? ""}–${day.lunchTo ?? ""}`
+        : "none",
+    ],
     ["Hold for late-comers", day.hold ? "1 slot an hour" : "none"],
   ];
-  const placed = day.rooms.flatMap((room) => room.items).filter((item) => item.singer !== null).length;
+  const placed = day.rooms
+    .flatMap((room) => room.items)
+    .filter((item) => item.singer !== null).length;
 
   async function remove() {
     const result = await removeDay({ productionId: day.productionId, dayId: day.id });
@@ -63,7 +75,9 @@ function PlanFacts({ day, locale }: { day: AuditionDayView; locale: string }) {
         <div className="flex flex-wrap gap-3">
           <PlaceEveryone day={day} />
           <Button asChild>
-            <Link href={`/productions/${day.productionId}/auditions/${day.id}/change`}>Change the day</Link>
+            <Link href={`/productions/${day.productionId}/auditions/${day.id}/change`}>
+              Change the day
+            </Link>
           </Button>
           <Confirm
             trigger={<Button kind="danger">Remove the day</Button>}
@@ -73,7 +87,8 @@ function PlanFacts({ day, locale }: { day: AuditionDayView; locale: string }) {
           >
             <p>
               The rooms and pianists are free again and the monitor’s link ends.{" "}
-              {placed > 0 && `${placed === 1 ? "One singer loses" : `${String(placed)} singers lose`} their time and ${placed === 1 ? "waits" : "wait"} for a new one; nobody is written to, so tell those who were invited.`}{" "}
+              {placed > 0 &&
+                `${placed === 1 ? "One singer loses" : `${String(placed)} singers lose`} their time and ${placed === 1 ? "waits" : "wait"} for a new one; nobody is written to, so tell those who were invited.`}{" "}
               This cannot be undone.
             </p>
           </Confirm>
@@ -84,7 +99,8 @@ function PlanFacts({ day, locale }: { day: AuditionDayView; locale: string }) {
 }
 
 function times(singer: SingerOnDay): string {
-  if (singer.notBefore !== null && singer.notAfter !== null) return `, between ${singer.notBefore} and ${singer.notAfter}`;
+  if (singer.notBefore !== null && singer.notAfter !== null)
+    return `, between ${singer.notBefore} and ${singer.notAfter}`;
   if (singer.notBefore !== null) return `, after ${singer.notBefore}`;
   return singer.notAfter === null ? "" : `, before ${singer.notAfter}`;
 }
@@ -95,17 +111,31 @@ function WaitingList({ day, onPlace, onOpen }: Pick<Props, "day" | "onPlace" | "
       <SectionTitle id="waiting" ruled>
         Waiting list
       </SectionTitle>
-      {day.waiting.length === 0 && <p className="py-3 text-sm text-ink-2">Nobody waits for a time.</p>}
+      {day.waiting.length === 0 && (
+        <p className="py-3 text-sm text-ink-2">Nobody waits for a time.</p>
+      )}
       <ul className="max-h-96 overflow-y-auto">
         {day.waiting.map((singer) => (
-          <li key={singer.signUpId} className="flex min-h-11 items-center justify-between gap-3 border-b border-rule py-1 text-sm">
-            <button type="button" className="min-h-8 min-w-0 text-left underline-offset-4 hover:underline" onClick={() => onOpen(singer)}>
+          <li
+            key={singer.signUpId}
+            className="flex min-h-11 items-center justify-between gap-3 border-b border-rule py-1 text-sm"
+          >
+            <button
+              type="button"
+              className="min-h-8 min-w-0 text-left underline-offset-4 hover:underline"
+              onClick={() => onOpen(singer)}
+            >
               {singer.name}
               {times(singer)}
               {singer.minor && <span className="text-ochre"> · under 18</span>}
             </button>
             {day.may.plan && (
-              <Button size="small" kind="quiet" aria-label={`Place ${singer.name}`} onClick={() => onPlace(singer)}>
+              <Button
+                size="small"
+                kind="quiet"
+                aria-label={`Place ${singer.name}`}
+                onClick={() => onPlace(singer)}
+              >
                 Place
               </Button>
             )}

@@ -10,11 +10,15 @@ import { InviteDialog } from "./invite-dialog";
 /** What can be done with the day as a whole: print it, open the door, invite. */
 export function DayTools({ day }: { day: AuditionDayView }) {
   const [inviting, setInviting] = useState(false);
-  const listed = day.rooms.flatMap((room) => room.items).filter((item) => item.singer?.state === "listed").length;
+  const listed = day.rooms
+    .flatMap((room) => room.items)
+    .filter((item) => item.singer?.state === "listed").length;
   return (
     <>
       <Button asChild>
-        <Link href={`/productions/${day.productionId}/auditions/${day.id}/running-order`}>Running order</Link>
+        <Link href={`/productions/${day.productionId}/auditions/${day.id}/running-order`}>
+          Running order
+        </Link>
       </Button>
       {day.may.door && <DoorLink day={day} />}
       {day.may.plan && (

@@ -20,7 +20,10 @@ export function DoorLink({ day }: { day: AuditionDayView }) {
   const [pending, setPending] = useState(false);
   const which = { productionId: day.productionId, dayId: day.id };
 
-  async function act<T>(work: () => Promise<{ ok: true; data: T } | { ok: false; error: { message: string } }>, then: (data: T) => void) {
+  async function act<T>(
+    work: () => Promise<{ ok: true; data: T } | { ok: false; error: { message: string } }>,
+    then: (data: T) => void,
+  ) {
     setPending(true);
     setProblem(null);
     const result = await work().catch(() => null);
@@ -45,7 +48,10 @@ export function DoorLink({ day }: { day: AuditionDayView }) {
       {problem !== null && <Notice tone="error" title={problem} />}
       {link !== null && (
         <>
-          <Field label="The monitor’s link" hint="Shown this once. Send it to the monitor, or copy it now.">
+          <Field
+            label="The monitor’s link"
+            hint="Shown this once. Send it to the monitor, or copy it now."
+          >
             <Input readOnly value={link} onFocus={(event) => event.currentTarget.select()} />
           </Field>
           <Button
@@ -53,7 +59,10 @@ export function DoorLink({ day }: { day: AuditionDayView }) {
             onClick={() => {
               void navigator.clipboard.writeText(link).then(
                 () => showToast({ title: "The link is copied." }),
-                () => setProblem("The browser did not allow copying: mark the link and copy it by hand."),
+                () =>
+                  setProblem(
+                    "The browser did not allow copying: mark the link and copy it by hand.",
+                  ),
               );
             }}
           >
@@ -84,7 +93,16 @@ export function DoorLink({ day }: { day: AuditionDayView }) {
             End the link
           </PendingButton>
         )}
-        <PendingButton kind="primary" pending={pending} onClick={() => void act(() => makeDoorLink(which), (data) => setLink(data.link))}>
+        <PendingButton
+          kind="primary"
+          pending={pending}
+          onClick={() =>
+            void act(
+              () => makeDoorLink(which),
+              (data) => setLink(data.link),
+            )
+          }
+        >
           {day.doorLink ? "Make a new link" : "Make the link"}
         </PendingButton>
       </div>

@@ -33,7 +33,10 @@ export function PlaceEveryone({ day }: { day: AuditionDayView }) {
   async function accept(placements: FillProposal["placements"]) {
     setPending(true);
     setProblem(null);
-    const result = await acceptFill({ ...which, placements: placements.map(({ signUpId, slotId }) => ({ signUpId, slotId })) }).catch(() => null);
+    const result = await acceptFill({
+      ...which,
+      placements: placements.map(({ signUpId, slotId }) => ({ signUpId, slotId })),
+    }).catch(() => null);
     setPending(false);
     if (!result?.ok) {
       setProblem(result ? result.error.message : LOST_CONNECTION);
@@ -46,7 +49,11 @@ export function PlaceEveryone({ day }: { day: AuditionDayView }) {
 
   return (
     <>
-      <PendingButton pending={pending && proposal === null} disabled={day.waiting.length === 0} onClick={() => void propose()}>
+      <PendingButton
+        pending={pending && proposal === null}
+        disabled={day.waiting.length === 0}
+        onClick={() => void propose()}
+      >
         Place everyone
       </PendingButton>
       {proposal && (
@@ -55,7 +62,11 @@ export function PlaceEveryone({ day }: { day: AuditionDayView }) {
           onOpenChange={(open) => {
             if (!open) setProposal(null);
           }}
-          title={proposal.unplaced.length === 0 ? `All ${singers(proposal.placements.length)} fit` : `${String(proposal.placements.length)} of ${singers(proposal.placements.length + proposal.unplaced.length)} fit`}
+          title={
+            proposal.unplaced.length === 0
+              ? `All ${singers(proposal.placements.length)} fit`
+              : `${String(proposal.placements.length)} of ${singers(proposal.placements.length + proposal.unplaced.length)} fit`
+          }
           description="No plan for the free slots of this day places more. Everyone stays within the times they asked for; held slots stay free."
         >
           {problem !== null && <Notice tone="error" title={problem} />}
@@ -88,7 +99,12 @@ export function PlaceEveryone({ day }: { day: AuditionDayView }) {
           <div className="flex flex-wrap justify-end gap-3">
             <Button onClick={() => setProposal(null)}>Leave the day as it is</Button>
             {problem !== null && <Button onClick={() => void propose()}>Propose again</Button>}
-            <PendingButton kind="primary" pending={pending} disabled={proposal.placements.length === 0} onClick={() => void accept(proposal.placements)}>
+            <PendingButton
+              kind="primary"
+              pending={pending}
+              disabled={proposal.placements.length === 0}
+              onClick={() => void accept(proposal.placements)}
+            >
               {`Place ${singers(proposal.placements.length)}`}
             </PendingButton>
           </div>

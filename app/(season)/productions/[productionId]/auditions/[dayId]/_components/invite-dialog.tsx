@@ -43,7 +43,11 @@ export function InviteDialog({ day, onClose }: { day: AuditionDayView; onClose: 
   async function send() {
     setPending(true);
     setProblem(null);
-    const result = await inviteSingers({ productionId, dayId, signUpIds: chosen.map((singer) => singer.signUpId) }).catch(() => null);
+    const result = await inviteSingers({
+      productionId,
+      dayId,
+      signUpIds: chosen.map((singer) => singer.signUpId),
+    }).catch(() => null);
     setPending(false);
     if (!result?.ok) {
       setProblem(result ? result.error.message : LOST_CONNECTION);
@@ -63,7 +67,9 @@ export function InviteDialog({ day, onClose }: { day: AuditionDayView; onClose: 
       title="Invite to these times"
       description="Each singer placed on this day gets one message with their own time and link. Nobody is invited twice."
     >
-      {!preview && problem === null && <SkeletonRows rows={4} label="Reading who is to be invited" />}
+      {!preview && problem === null && (
+        <SkeletonRows rows={4} label="Reading who is to be invited" />
+      )}
       {problem !== null && <Notice tone="error" title={problem} />}
       {preview && preview.recipients.length === 0 && (
         <p>Everyone placed on this day is invited already. Place more singers first.</p>
@@ -92,14 +98,22 @@ export function InviteDialog({ day, onClose }: { day: AuditionDayView; onClose: 
             ))}
           </fieldset>
           {preview.message && (
-            <section aria-label="What they read" className="rounded-sm border border-rule bg-paper p-3 text-sm">
+            <section
+              aria-label="What they read"
+              className="rounded-sm border border-rule bg-paper p-3 text-sm"
+            >
               <p className="font-bold">{preview.message.subject}</p>
               <p className="mt-2 whitespace-pre-line">{preview.message.text}</p>
             </section>
           )}
           <div className="flex flex-wrap justify-end gap-3">
             <Button onClick={onClose}>Not now</Button>
-            <PendingButton kind="primary" pending={pending} disabled={chosen.length === 0} onClick={() => void send()}>
+            <PendingButton
+              kind="primary"
+              pending={pending}
+              disabled={chosen.length === 0}
+              onClick={() => void send()}
+            >
               {`Invite ${singers(chosen.length)}`}
             </PendingButton>
           </div>

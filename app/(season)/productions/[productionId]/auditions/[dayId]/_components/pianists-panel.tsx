@@ -24,7 +24,10 @@ export function PianistsPanel({ day, accompanists }: Props) {
   const refresh = useRefreshDay(day);
 
   async function remove(session: PianistOnDay, room: RoomOnDay) {
-    const result = await removePianist({ productionId: day.productionId, sessionId: session.id }).catch(() => null);
+    const result = await removePianist({
+      productionId: day.productionId,
+      sessionId: session.id,
+    }).catch(() => null);
     if (!result?.ok) {
       showToast({ title: result ? result.error.message : LOST_CONNECTION, tone: "error" });
       return;
@@ -124,7 +127,9 @@ function suggestion(room: RoomOnDay | undefined, zone: string): { from: string; 
 
 function AssignForm({ day, accompanists, onDone }: Props & { onDone: () => void }) {
   const refresh = useRefreshDay(day);
-  const first = day.rooms.find((room) => pianistLanes(room).some((piece) => piece.name === null)) ?? day.rooms[0];
+  const first =
+    day.rooms.find((room) => pianistLanes(room).some((piece) => piece.name === null)) ??
+    day.rooms[0];
   const state = useActionForm({
     schema: assignPianistSchema,
     action: assignPianist,
@@ -157,7 +162,10 @@ function AssignForm({ day, accompanists, onDone }: Props & { onDone: () => void 
         <Select
           {...register("auditionRoomId", {
             onChange: (event: { target: { value: string } }) => {
-              const times = suggestion(day.rooms.find((room) => room.id === event.target.value), day.zone);
+              const times = suggestion(
+                day.rooms.find((room) => room.id === event.target.value),
+                day.zone,
+              );
               setValue("from", times.from);
               setValue("to", times.to);
             },

@@ -18,7 +18,12 @@ import { StateMark } from "../../_components/state-mark";
 import { hearRange } from "../../actions";
 import type { Move } from "./use-moves";
 
-type Props = { day: AuditionDayView; singer: SingerOnDay; onMove: (move: Move) => void; onClose: () => void };
+type Props = {
+  day: AuditionDayView;
+  singer: SingerOnDay;
+  onMove: (move: Move) => void;
+  onClose: () => void;
+};
 
 function facts(singer: SingerOnDay): string[] {
   return [
@@ -42,13 +47,17 @@ export function SingerPanel({ day, singer, onMove, onClose }: Props) {
         if (!open) onClose();
       }}
       title={singer.name}
-      description={told.length > 0 ? `${told.join(", ")}.` : "Nothing more is known of what they bring."}
+      description={
+        told.length > 0 ? `${told.join(", ")}.` : "Nothing more is known of what they bring."
+      }
     >
       <p className="flex flex-wrap gap-x-4 text-sm">
         <StateMark state={singer.state} />
         {singer.pronouns !== null && <span className="text-ink-2">{singer.pronouns}</span>}
       </p>
-      {day.may.plan && <MoveTo day={day} singer={singer} from={from} onMove={onMove} onClose={onClose} />}
+      {day.may.plan && (
+        <MoveTo day={day} singer={singer} from={from} onMove={onMove} onClose={onClose} />
+      )}
       {day.may.hear && <RangeHeard day={day} singer={singer} />}
     </Dialog>
   );
@@ -68,11 +77,18 @@ function MoveTo({ day, singer, from, onMove, onClose }: Props & { from: string |
           {day.rooms.map((room) => (
             <optgroup key={room.id} label={room.name}>
               {room.items
-                .filter((item) => (item.kind === "slot" || item.kind === "hold") && item.id !== from)
+                .filter(
+                  (item) => (item.kind === "slot" || item.kind === "hold") && item.id !== from,
+                )
                 .filter((item) => item.singer === null || from !== null)
                 .map((item) => (
                   <option key={item.id} value={item.id}>
-                    {clock(new Date(item.startsAt), day.zone)} {item.singer ? `swap with ${item.singer.name}` : item.kind === "hold" ? "held" : "free"}
+                    {clock(new Date(item.startsAt), day.zone)}{" "}
+                    {item.singer
+                      ? `swap with ${item.singer.name}`
+                      : item.kind === "hold"
+                        ? "held"
+                        : "free"}
                   </option>
                 ))}
             </optgroup>
@@ -90,7 +106,10 @@ function MoveTo({ day, singer, from, onMove, onClose }: Props & { from: string |
 function RangeHeard({ day, singer }: { day: AuditionDayView; singer: SingerOnDay }) {
   const client = useQueryClient();
   const hintId = useId();
-  const [range, setRange] = useState<PickedRange>({ low: singer.range?.low ?? null, high: singer.range?.high ?? null });
+  const [range, setRange] = useState<PickedRange>({
+    low: singer.range?.low ?? null,
+    high: singer.range?.high ?? null,
+  });
   const [pending, setPending] = useState(false);
   const [problem, setProblem] = useState<string | null>(null);
 
@@ -111,11 +130,15 @@ function RangeHeard({ day, singer }: { day: AuditionDayView; singer: SingerOnDay
     }).catch(() => null);
     setPending(false);
     if (!result?.ok) {
-      setProblem(result ? result.error.message : "Nothing was lost: check the connection and try again.");
+      setProblem(
+        result ? result.error.message : "Nothing was lost: check the connection and try again.",
+      );
       return;
     }
     showToast({ title: `The range heard from ${singer.name} is written down.` });
-    await client.invalidateQueries({ queryKey: auditionDayQuery(day.productionId, day.id).queryKey });
+    await client.invalidateQueries({
+      queryKey: auditionDayQuery(day.productionId, day.id).queryKey,
+    });
   }
 
   return (
@@ -127,7 +150,12 @@ function RangeHeard({ day, singer }: { day: AuditionDayView; singer: SingerOnDay
           : "No range is on file."}{" "}
         Press the lowest and the highest note you heard. Never ask for a note that strains.
       </p>
-      <RangeKeyboard value={range} onChange={setRange} label={`The range heard from ${singer.name}`} aria-describedby={hintId} />
+      <RangeKeyboard
+        value={range}
+        onChange={setRange}
+        label={`The range heard from ${singer.name}`}
+        aria-describedby={hintId}
+      />
       {problem !== null && <Notice tone="error" title={problem} />}
       <PendingButton pending={pending} className="self-start" onClick={() => void save()}>
         Save the range heard

@@ -35,7 +35,8 @@ export function useMoves(day: AuditionDayView): { move: (move: Move) => void; pe
     onSuccess: (_result, { signUpId, slotId, seen }) => {
       const from = slotOfSinger(seen, signUpId);
       const told = toldBy(seen, { signUpId, slotId }).length > 0;
-      const undoable = !told && !(from === null && slotId !== null && findSlot(seen, slotId)?.item.singer);
+      const undoable =
+        !told && !(from === null && slotId !== null && findSlot(seen, slotId)?.item.singer);
       showToast({
         title: inWords(seen, { signUpId, slotId }),
         ...(undoable && {
@@ -56,7 +57,8 @@ function send(seen: AuditionDayView, { signUpId, slotId }: Move) {
   const from = slotOfSinger(seen, signUpId);
   if (slotId === null) return takeOut({ productionId, signUpId });
   const sitting = findSlot(seen, slotId)?.item.singer;
-  if (!sitting || from === null) return placeSinger({ productionId, signUpId, slotId, seenIn: from });
+  if (!sitting || from === null)
+    return placeSinger({ productionId, signUpId, slotId, seenIn: from });
   return swapSingers({
     productionId,
     first: { signUpId, slotId: from },
@@ -67,19 +69,26 @@ function send(seen: AuditionDayView, { signUpId, slotId }: Move) {
 /** Who has been told the time they would lose by this move: they are written to, or have to be. */
 export function toldBy(day: AuditionDayView, { signUpId, slotId }: Move): string[] {
   const moved = [
-    day.rooms.flatMap((room) => room.items).find((item) => item.singer?.signUpId === signUpId)?.singer,
+    day.rooms.flatMap((room) => room.items).find((item) => item.singer?.signUpId === signUpId)
+      ?.singer,
     slotId === null ? null : findSlot(day, slotId)?.item.singer,
   ];
-  return moved.flatMap((singer) => (singer && (singer.state === "invited" || singer.state === "confirmed") ? [singer.name] : []));
+  return moved.flatMap((singer) =>
+    singer && (singer.state === "invited" || singer.state === "confirmed") ? [singer.name] : [],
+  );
 }
 
 function inWords(day: AuditionDayView, { signUpId, slotId }: Move): string {
   const name =
-    [...day.waiting, ...day.rooms.flatMap((room) => room.items.flatMap((item) => item.singer ?? []))].find((s) => s.signUpId === signUpId)?.name ??
-    "The singer";
+    [
+      ...day.waiting,
+      ...day.rooms.flatMap((room) => room.items.flatMap((item) => item.singer ?? [])),
+    ].find((s) => s.signUpId === signUpId)?.name ?? "The singer";
   if (slotId === null) return `${name} waits for a time again.`;
   const found = findSlot(day, slotId);
   if (!found) return `${name} is moved.`;
   const at = `${clock(new Date(found.item.startsAt), day.zone)}, ${found.room.name}`;
-  return found.item.singer ? `${name} and ${found.item.singer.name} changed places.` : `${name} sings at ${at}.`;
+  return found.item.singer
+    ? `${name} and ${found.item.singer.name} changed places.`
+    : `${name} sings at ${at}.`;
 }

@@ -5,9 +5,12 @@ import type { AuditionDayView } from "@/lib/auditions/day-view";
 import { auditionDayQuery } from "@/lib/client/auditions";
 
 /** Reads the day again now, after something was saved. */
-export function useRefreshDay(day: Pick<AuditionDayView, "id" | "productionId">): () => Promise<void> {
+export function useRefreshDay(
+  day: Pick<AuditionDayView, "id" | "productionId">,
+): () => Promise<void> {
   const client = useQueryClient();
-  return () => client.invalidateQueries({ queryKey: auditionDayQuery(day.productionId, day.id).queryKey });
+  return () =>
+    client.invalidateQueries({ queryKey: auditionDayQuery(day.productionId, day.id).queryKey });
 }
 
 export const LOST_CONNECTION = "Nothing was lost: check the connection and try again.";

@@ -20,7 +20,9 @@ export type SlotDrag = {
 };
 
 function slotUnder(event: PointerEvent<HTMLElement>): string | null {
-  const found = document.elementFromPoint(event.clientX, event.clientY)?.closest<HTMLElement>("[data-slot]");
+  const found = document
+    .elementFromPoint(event.clientX, event.clientY)
+    ?.closest<HTMLElement>("[data-slot]");
   return found?.dataset["slot"] ?? null;
 }
 
@@ -47,7 +49,11 @@ export function useSlotDrag(onDrop: (signUpId: string, slotId: string) => void):
       onPointerMove: (event) => {
         const from = start.current;
         if (!from) return;
-        if (!dragged.current && Math.hypot(event.clientX - from.x, event.clientY - from.y) < FAR_ENOUGH) return;
+        if (
+          !dragged.current &&
+          Math.hypot(event.clientX - from.x, event.clientY - from.y) < FAR_ENOUGH
+        )
+          return;
         if (!dragged.current) event.currentTarget.setPointerCapture(event.pointerId);
         dragged.current = true;
         setDragging({ signUpId: from.signUpId, over: slotUnder(event) });

@@ -48,7 +48,9 @@ export function useSlotKeys({ day, mayMove, onDrop }: Options): SlotKeys {
   function pickUp(signUpId: string, name: string, target?: string | null) {
     if (!mayMove) return;
     setCarrying({ signUpId, name });
-    setSpoken(`${name} picked up. Arrow keys choose a slot, Enter drops, Escape leaves everything as it was.`);
+    setSpoken(
+      `${name} picked up. Arrow keys choose a slot, Enter drops, Escape leaves everything as it was.`,
+    );
     if (target) goTo(target);
   }
 
@@ -68,7 +70,11 @@ export function useSlotKeys({ day, mayMove, onDrop }: Options): SlotKeys {
       setSpoken(`${carrying.name} stays where they were.`);
       return;
     }
-    setSpoken(item.singer ? `${carrying.name} and ${item.singer.name} change places.` : `${carrying.name} goes to ${clock(new Date(item.startsAt), day.zone)}.`);
+    setSpoken(
+      item.singer
+        ? `${carrying.name} and ${item.singer.name} change places.`
+        : `${carrying.name} goes to ${clock(new Date(item.startsAt), day.zone)}.`,
+    );
     onDrop(carrying.signUpId, item.id);
   }
 
@@ -80,7 +86,10 @@ export function useSlotKeys({ day, mayMove, onDrop }: Options): SlotKeys {
       const other = columns[column + step];
       const at = new Date(item.startsAt).getTime();
       const away = (o: ItemOnDay): number => Math.abs(new Date(o.startsAt).getTime() - at);
-      return other?.reduce<ItemOnDay | undefined>((best, o) => (best === undefined || away(o) < away(best) ? o : best), undefined);
+      return other?.reduce<ItemOnDay | undefined>(
+        (best, o) => (best === undefined || away(o) < away(best) ? o : best),
+        undefined,
+      );
     };
     switch (key) {
       case "ArrowDown":

@@ -10,10 +10,14 @@ import { ChangeDayForm } from "../../_components/day-form";
 export const metadata: Metadata = { title: "Change the audition day" };
 
 /** Changes an audition day; whoever's time still exists keeps it. */
-export default async function ChangeDayPage({ params }: PageProps<"/productions/[productionId]/auditions/[dayId]/change">) {
+export default async function ChangeDayPage({
+  params,
+}: PageProps<"/productions/[productionId]/auditions/[dayId]/change">) {
   const { productionId, dayId } = await params;
   const actor = await pageActor(`/productions/${productionId}/auditions/${dayId}/change`);
-  const [choices, day] = await orNotFound(Promise.all([listDayChoices(actor, productionId), readDay(actor, productionId, dayId)]));
+  const [choices, day] = await orNotFound(
+    Promise.all([listDayChoices(actor, productionId), readDay(actor, productionId, dayId)]),
+  );
   const initial = {
     productionId,
     dayId,

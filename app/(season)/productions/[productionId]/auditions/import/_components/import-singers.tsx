@@ -18,7 +18,10 @@ async function askPreview(productionId: string, file: File): Promise<ImportPrevi
   const body = new FormData();
   body.set("file", file);
   try {
-    const response = await fetch(`/api/productions/${productionId}/auditions/import`, { method: "POST", body });
+    const response = await fetch(`/api/productions/${productionId}/auditions/import`, {
+      method: "POST",
+      body,
+    });
     const answer = (await response.json()) as ImportPreview | { error: { message: string } };
     return "error" in answer ? answer.error.message : answer;
   } catch {
@@ -48,14 +51,18 @@ export function ImportSingers({ productionId }: { productionId: string }) {
     } else setPreview(answer);
   }
 
-  const good = preview?.rows.filter((row) => row.becomes === "new person" || row.becomes === "known person") ?? [];
+  const good =
+    preview?.rows.filter((row) => row.becomes === "new person" || row.becomes === "known person") ??
+    [];
   const bad = preview?.rows.filter((row) => row.becomes === "problem") ?? [];
   const already = preview?.rows.filter((row) => row.becomes === "signed up").length ?? 0;
 
   async function accept() {
     setPending(true);
     setProblem(null);
-    const result = await importSingers({ productionId, rows: good.map((row) => row.values) }).catch(() => null);
+    const result = await importSingers({ productionId, rows: good.map((row) => row.values) }).catch(
+      () => null,
+    );
     setPending(false);
     if (result?.ok) setDone(result.data);
     else setProblem(result ? result.error.message : LOST);
@@ -106,20 +113,37 @@ export function ImportSingers({ productionId }: { productionId: string }) {
         <>
           <div className="flex flex-wrap items-center justify-between gap-4 border-y border-rule py-3">
             <p>
-              <strong>{people(good.length)}</strong> can go in{already > 0 && `, ${String(already)} on the list already`}
-              {bad.length > 0 && `, ${bad.length === 1 ? "1 row needs" : `${String(bad.length)} rows need`} another look`}.
+              <strong>{people(good.length)}</strong> can go in
+              {already > 0 && `, ${String(already)} on the list already`}
+              {bad.length > 0 &&
+                `, ${bad.length === 1 ? "1 row needs" : `${String(bad.length)} rows need`} another look`}
+              .
             </p>
-            <PendingButton kind="primary" pending={pending} disabled={good.length === 0} onClick={() => void accept()}>
+            <PendingButton
+              kind="primary"
+              pending={pending}
+              disabled={good.length === 0}
+              onClick={() => void accept()}
+            >
               {`Sign up ${people(good.length)}`}
             </PendingButton>
           </div>
           {bad.length > 0 && (
-            <Notice tone="caution" title={bad.length === 1 ? "One row is left out." : `${String(bad.length)} rows are left out.`}>
+            <Notice
+              tone="caution"
+              title={
+                bad.length === 1
+                  ? "One row is left out."
+                  : `${String(bad.length)} rows are left out.`
+              }
+            >
               Put them right in the spreadsheet and choose it again later: nobody goes in twice.
             </Notice>
           )}
           {preview.unknownColumns.length > 0 && (
-            <p className="text-sm text-ink-2">Left out, since these headings mean nothing here: {preview.unknownColumns.join(", ")}.</p>
+            <p className="text-sm text-ink-2">
+              Left out, since these headings mean nothing here: {preview.unknownColumns.join(", ")}.
+            </p>
           )}
           <ImportTable rows={preview.rows} />
         </>

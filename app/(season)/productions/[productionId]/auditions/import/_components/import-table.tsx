@@ -10,7 +10,8 @@ const verdicts: Record<ImportRow["becomes"], { tone: ChipTone; words: string }> 
   problem: { tone: "clash", words: "left out" },
 };
 
-const note = (value: ImportRow["values"]["low"]): string => (typeof value === "number" ? pitchName(value) : "");
+const note = (value: ImportRow["values"]["low"]): string =>
+  typeof value === "number" ? pitchName(value) : "";
 
 function details({ values }: ImportRow): string {
   const range = [note(values.low), note(values.high)].filter(Boolean).join("–");
@@ -29,7 +30,10 @@ function details({ values }: ImportRow): string {
 
 /** The sheet row by row: those with problems first, then in its own order. */
 export function ImportTable({ rows }: { rows: readonly ImportRow[] }) {
-  const inOrder = [...rows.filter((row) => row.becomes === "problem"), ...rows.filter((row) => row.becomes !== "problem")];
+  const inOrder = [
+    ...rows.filter((row) => row.becomes === "problem"),
+    ...rows.filter((row) => row.becomes !== "problem"),
+  ];
   return (
     <Table caption="What each row becomes">
       <thead>
@@ -45,10 +49,14 @@ export function ImportTable({ rows }: { rows: readonly ImportRow[] }) {
         {inOrder.map((row) => (
           <tr key={row.line}>
             <Cell>{row.line}</Cell>
-            <RowHead>{row.values.name || <span className="font-normal text-ink-2">no name</span>}</RowHead>
+            <RowHead>
+              {row.values.name || <span className="font-normal text-ink-2">no name</span>}
+            </RowHead>
             <Cell>
               <Chip tone={verdicts[row.becomes].tone}>{verdicts[row.becomes].words}</Chip>
-              {row.knownAs !== null && <p className="mt-1 text-sm text-ink-2">known as {row.knownAs}, which stays</p>}
+              {row.knownAs !== null && (
+                <p className="mt-1 text-sm text-ink-2">known as {row.knownAs}, which stays</p>
+              )}
               {row.problems.map((problem) => (
                 <p key={problem} className="mt-1 min-w-56 text-sm text-vermilion">
                   {problem}

@@ -1,6 +1,7 @@
 import { Skeleton, SkeletonRows } from "@/components/ui/skeleton";
 
-export default function CallbacksLoading() {
+/** The shape of the callback list while it is on its way. */
+export function CallbacksLoading() {
   return (
     <div>
       <Skeleton className="h-11 w-48" />

@@ -1,0 +1,5 @@
+import { SkeletonRows } from "@/components/ui/skeleton";
+
+export default function Loading() {
+  return <SkeletonRows />;
+}

@@ -1,0 +1,63 @@
+"use client";
+
+import { FormError } from "@/components/forms/form-error";
+import { useActionForm } from "@/components/forms/use-action-form";
+import { Field } from "@/components/ui/field";
+import { Input } from "@/components/ui/input";
+import { PendingButton } from "@/components/ui/pending-button";
+import { requestLinkSchema } from "@/lib/schemas/sign-in";
+import { requestLink } from "../actions";
+
+export type LinkFormProps = {
+  /** Where to go once signed in; empty for one's own first page. */
+  to?: string;
+  /** Keeps the label for screen readers, where the page around says what the field is. */
+  labelHidden?: boolean;
+};
+
+/** Sign-in by one field: an address, and a link comes. */
+export function LinkForm({ to = "", labelHidden = false }: LinkFormProps) {
+  const state = useActionForm({
+    schema: requestLinkSchema,
+    action: requestLink,
+    defaultValues: { email: "", to },
+  });
+  const { register, formState } = state.form;
+  return (
+    <form
+      noValidate
+      onSubmit={(event) => void state.submit(event)}
+      className="flex w-full flex-col gap-3"
+    >
+      <div className="flex flex-wrap items-end gap-x-3 gap-y-3">
+        <Field
+          label="Your e-mail"
+          labelHidden={labelHidden}
+          error={formState.errors.email?.message}
+          className="flex-[1_1_16rem]"
+        >
+          <Input
+            type="email"
+            autoComplete="email"
+            inputMode="email"
+            autoCapitalize="none"
+            spellCheck={false}
+            placeholder="Your e-mail"
+            className="min-h-13 md:min-h-13"
+            {...register("email")}
+          />
+        </Field>
+        <PendingButton
+          kind="primary"
+          size="large"
+          pending={state.pending}
+          pendingLabel="Sending"
+          className="max-sm:w-full"
+        >
+          Send me a link
+        </PendingButton>
+      </div>
+      <FormError message={state.formError} />
+    </form>
+  );
+}

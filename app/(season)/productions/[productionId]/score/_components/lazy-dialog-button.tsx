@@ -1,0 +1,48 @@
+"use client";
+
+import { Suspense, useState } from "react";
+import type { ComponentType, ReactElement, ReactNode } from "react";
+import { Button } from "@/components/ui/button";
+import type { ButtonKind } from "@/components/ui/button";
+
+export type LazyDialogProps = {
+  trigger: ReactElement;
+  open: boolean;
+  onOpenChange: (open: boolean) => void;
+};
+
+type Props = {
+  children: ReactNode;
+  kind?: ButtonKind;
+  /** Fetches the dialog's code; called when a hand or the focus comes near. */
+  load: () => Promise<unknown>;
+  /** The lazy dialog; gets its trigger, so that focus comes back to it. */
+  dialog: ComponentType<LazyDialogProps>;
+};
+
+/** A button whose dialog, with its form and rules, is fetched only when somebody is about to open it. */
+export function LazyDialogButton({ children, kind = "secondary", load, dialog: Dialog }: Props) {
+  const [wanted, setWanted] = useState(false);
+  const [open, setOpen] = useState(false);
+  const button = (
+    <Button
+      kind={kind}
+      onPointerEnter={() => void load()}
+      onFocus={() => void load()}
+      {...(!wanted && {
+        onClick: () => {
+          setWanted(true);
+          setOpen(true);
+        },
+      })}
+    >
+      {children}
+    </Button>
+  );
+  if (!wanted) return button;
+  return (
+    <Suspense fallback={button}>
+      <Dialog trigger={button} open={open} onOpenChange={setOpen} />
+    </Suspense>
+  );
+}

@@ -1,0 +1,410 @@
+import { eq } from "drizzle-orm";
+import { beforeEach, describe, expect, test } from "vitest";
+import { db } from "@/db/client";
+import { newId } from "@/db/columns";
+import * as t from "@/db/schema";
+import { loadActor } from "@/lib/data/actor";
+import { recordAudit } from "@/lib/data/audit";
+import { listCompaniesRun, readCompany } from "@/lib/data/companies";
+import { readSeason } from "@/lib/data/season";
+import { readTrail } from "@/lib/data/trail";
+import type { PositionKind } from "@/lib/permissions/types";
+import { makeWorld } from "../helpers/world";
+import type { World } from "../helpers/world";
+
+const WINDOW = { from: new Date("2027-03-08T00:00:00Z"), to: new Date("2027-05-10T00:00:00Z") };
+
+let world: World;
+beforeEach(async () => {
+  world = await makeWorld();
+});
+
+async function actorOf(userId: string) {
+  const actor = await loadActor(userId);
+  if (!actor) throw new Error("no such login");
+  return actor;
+}
+const seasonOf = async (userId: string) => readSeason(await actorOf(userId), WINDOW);
+
+type CallOver = Partial<typeof t.calls.$inferInsert> & { who?: string[]; minutes?: number[] };
+
+/** A published music call from 18:00 to 20:00 UTC on 24 March, as one block of two hours unless told. */
+async function makeCall(productionId: string, over: CallOver = {}): Promise<string> {
+  const { who = [], minutes = [120], ...columns } = over;
+  const id = newId();
+  await db.insert(t.calls).values({
+    id,
+    productionId,
+    kind: "music",
+    startsAt: new Date("2027-03-24T18:00:00Z"),
+    endsAt: new Date("2027-03-24T20:00:00Z"),
+    localDate: "2027-03-24",
+    localTime: "18:00",
+    zone: "Europe/London",
+    state: "published",
+    ...columns,
+  });
+  for (const [place, length] of minutes.entries()) {
+    const blockId = newId();
+    await db
+      .insert(t.blocks)
+      .values({ id: blockId, callId: id, place, kind: "scene", minutes: length });
+    // One person to a block where there are several blocks.
+    const called = minutes.length === 1 ? who : who.slice(place, place + 1);
+    for (const personId of called) {
+      await db.insert(t.called).values({ blockId, personId, source: "hand" });
+    }
+  }
+  return id;
+}
+
+/** The other company's record of a login of the first, with a position in its production. */
+async function alsoAt(userId: string, kind: PositionKind, productionId?: string): Promise<string> {
+  const personId = newId();
+  await db
+    .insert(t.people)
+    .values({ id: personId, companyId: world.otherCompanyId, userId, name: "As known there" });
+  await db.insert(t.positions).values({
+    companyId: world.otherCompanyId,
+    personId,
+    kind,
+    productionId: productionId ?? world.otherProductionId,
+  });
+  return personId;
+}
+
+describe("clashes across companies", () => {
+  test("one login called in two companies clashes for who sees both, with names and both events", async () => {
+    const { actor, md } = world.people;
+    const there = await alsoAt(actor.userId, "actor");
+    await alsoAt(md.userId, "music_director");
+    const here = await makeCall(world.productionId, { who: [actor.personId] });
+    const other = await makeCall(world.otherProductionId, {
+      who: [there],
+      startsAt: new Date("2027-03-24T19:00:00Z"),
+      endsAt: new Date("2027-03-24T21:00:00Z"),
+    });
+    const season = await seasonOf(md.userId);
+    expect(season.productions.map((p) => p.title).sort()).toEqual([
+      "A Fair at Candlemas",
+      "The Tidewatcher",
+    ]);
+    expect(season.clashes).toMatchObject([
+      {
+        kind: "person",
+        eventIds: [here, other],
+        elsewhere: false,
+        from: new Date("2027-03-24T19:00:00Z"),
+        to: new Date("2027-03-24T20:00:00Z"),
+      },
+    ]);
+  });
+
+  test("who sees one company learns that the person is engaged, and nothing else of the other", async () => {
+    const { actor, md } = world.people;
+    const there = await alsoAt(actor.userId, "actor");
+    const here = await makeCall(world.productionId, { who: [actor.personId] });
+    await makeCall(world.otherProductionId, { who: [there], roomId: world.otherRoomId });
+    const season = await seasonOf(md.userId);
+    expect(season.clashes).toMatchObject([
+      { kind: "person", who: ["Wren Tallis"], eventIds: [here], elsewhere: true },
+    ]);
+    const told = JSON.stringify(season);
+    for (const secret of [
+      "Fenmoor",
+      "Candlemas",
+      "Hall",
+      "As known there",
+      world.otherCompanyId,
+      world.otherProductionId,
+      there,
+    ]) {
+      expect(told).not.toContain(secret);
+    }
+  });
+
+  test("a draft, a cancelled call and a removed production of another company hold nobody", async () => {
+    const { actor, md } = world.people;
+    const there = await alsoAt(actor.userId, "actor");
+    await makeCall(world.productionId, { who: [actor.personId] });
+    await makeCall(world.otherProductionId, { who: [there], state: "draft" });
+    await makeCall(world.otherProductionId, { who: [there], state: "cancelled" });
+    expect((await seasonOf(md.userId)).clashes).toEqual([]);
+    await makeCall(world.otherProductionId, { who: [there] });
+    expect((await seasonOf(md.userId)).clashes).toHaveLength(1);
+    await db
+      .update(t.productions)
+      .set({ removedAt: new Date() })
+      .where(eq(t.productions.id, world.otherProductionId));
+    expect((await seasonOf(md.userId)).clashes).toEqual([]);
+  });
+
+  test("two records without a login are two people", async () => {
+    const { md } = world.people;
+    await alsoAt(md.userId, "music_director");
+    const [here, there] = [newId(), newId()];
+    await db.insert(t.people).values([
+      { id: here, companyId: world.companyId, name: "Ada Quill" },
+      { id: there, companyId: world.otherCompanyId, name: "Ada Quill" },
+    ]);
+    await makeCall(world.productionId, { who: [here] });
+    await makeCall(world.otherProductionId, { who: [there] });
+    expect((await seasonOf(md.userId)).clashes).toEqual([]);
+  });
+});
+
+describe("clashes within a company", () => {
+  test("two people of one pair of calls are one clash with two names", async () => {
+    const { actor, otherActor, md } = world.people;
+    const who = [actor.personId, otherActor.personId];
+    const calls = [
+      await makeCall(world.productionId, { who }),
+      await makeCall(world.productionId, {
+        who,
+        kind: "staging",
+        endsAt: new Date("2027-03-24T20:30:00Z"),
+      }),
+    ];
+    expect((await seasonOf(md.userId)).clashes).toMatchObject([
+      { kind: "person", who: ["Dele Fashanu", "Wren Tallis"], eventIds: calls },
+    ]);
+  });
+
+  test("someone called to the last block only is free for another call before it", async () => {
+    const { actor, otherActor, md } = world.people;
+    await makeCall(world.productionId, {
+      who: [otherActor.personId, actor.personId],
+      minutes: [60, 60],
+    });
+    await makeCall(world.productionId, {
+      who: [actor.personId],
+      minutes: [60],
+      endsAt: new Date("2027-03-24T19:00:00Z"),
+    });
+    expect((await seasonOf(md.userId)).clashes).toEqual([]);
+  });
+
+  test("whoever leads a call and is called to it does not clash with themselves", async () => {
+    const { md } = world.people;
+    await makeCall(world.productionId, {
+      who: [md.personId],
+      leaderId: md.personId,
+      pianistId: md.personId,
+    });
+    expect((await seasonOf(md.userId)).clashes).toEqual([]);
+  });
+
+  test("a room taken twice is named; a conflict counts for who plans calls and not for the table", async () => {
+    const { actor, md, director } = world.people;
+    await makeCall(world.productionId, { roomId: world.roomId, who: [actor.personId] });
+    await makeCall(world.productionId, { roomId: world.roomId, state: "draft", minutes: [120] });
+    await db.insert(t.conflicts).values({
+      personId: actor.personId,
+      startsAt: new Date("2027-03-24T19:00:00Z"),
+      endsAt: new Date("2027-03-24T23:00:00Z"),
+      localFrom: "2027-03-24",
+      localTo: "2027-03-24",
+      timeFrom: "19:00",
+      timeTo: "23:00",
+      zone: "Europe/London",
+    });
+    const forMd = await seasonOf(md.userId);
+    expect(forMd.clashes.map((c) => [c.kind, c.who])).toEqual([
+      ["room", ["Room 1"]],
+      ["conflict", ["Wren Tallis"]],
+    ]);
+    const forTable = await seasonOf(director.userId);
+    expect(forTable.clashes.map((c) => c.kind)).toEqual(["room"]);
+  });
+
+  test("a way that takes longer than the time between is short by the rest", async () => {
+    const { actor, md } = world.people;
+    const [venueId, roomId] = [newId(), newId()];
+    await db
+      .insert(t.venues)
+      .values({ id: venueId, companyId: world.companyId, name: "Ropewalk Hall" });
+    await db
+      .insert(t.rooms)
+      .values({ id: roomId, companyId: world.companyId, venueId, name: "Loft" });
+    const [venueA = "", venueB = ""] = [world.venueId, venueId].sort();
+    await db.insert(t.travelTimes).values({ venueA, venueB, minutes: 35 });
+    await makeCall(world.productionId, { who: [actor.personId], roomId: world.roomId });
+    await makeCall(world.productionId, {
+      who: [actor.personId],
+      roomId,
+      minutes: [60],
+      startsAt: new Date("2027-03-24T20:10:00Z"),
+      endsAt: new Date("2027-03-24T21:10:00Z"),
+    });
+    expect((await seasonOf(md.userId)).clashes).toMatchObject([{ kind: "travel", short: 25 }]);
+  });
+});
+
+describe("who sees what of a season", () => {
+  test("the company admin sees calls, but neither auditions, callbacks nor casting", async () => {
+    const dayId = newId();
+    await db.insert(t.auditionDays).values({
+      id: dayId,
+      productionId: world.productionId,
+      localDate: "2027-03-20",
+      zone: "Europe/London",
+      slotMinutes: 8,
+    });
+    await db.insert(t.auditionRooms).values({
+      dayId,
+      roomId: world.roomId,
+      opensAt: new Date("2027-03-20T10:00:00Z"),
+      closesAt: new Date("2027-03-20T16:00:00Z"),
+    });
+    await db.insert(t.callbackRounds).values({
+      productionId: world.productionId,
+      title: "Callbacks",
+      startsAt: new Date("2027-03-22T10:00:00Z"),
+      endsAt: new Date("2027-03-22T16:00:00Z"),
+      zone: "Europe/London",
+    });
+    await makeCall(world.productionId);
+    const admin = await seasonOf(world.people.admin.userId);
+    expect(admin.events.map((e) => e.kind)).toEqual(["music"]);
+    expect(admin.progress.map((p) => [p.roles, p.signUps, p.unanswered])).toEqual([
+      [null, null, null],
+      [null, null, null],
+    ]);
+    const md = await seasonOf(world.people.md.userId);
+    expect(md.events.map((e) => e.kind)).toEqual(["audition", "callback", "music"]);
+    expect(md.progress).toHaveLength(1);
+    const sm = await seasonOf(world.people.stageManager.userId);
+    expect(sm.progress[0]).toMatchObject({ roles: null, unanswered: 0 });
+  });
+
+  test.each(["actor", "accompanist", "outsiderMd"] as const)(
+    "the %s has no part of it",
+    async (who) => {
+      await makeCall(world.productionId);
+      const season = await seasonOf(world.people[who].userId);
+      expect(season.events).toEqual([]);
+      expect(season.productions.map((p) => p.id)).not.toContain(world.productionId);
+    },
+  );
+
+  test("what one does in productions one does not run is one's own to see", async () => {
+    const there = await alsoAt(world.people.md.userId, "accompanist");
+    await makeCall(world.otherProductionId, { pianistId: there });
+    const mine = await seasonOf(world.people.md.userId);
+    expect(mine.elsewhere).toMatchObject([{ kind: "music", production: "A Fair at Candlemas" }]);
+    expect((await seasonOf(world.people.assistant.userId)).elsewhere).toEqual([]);
+  });
+
+  test("a role is cast when as many are cast as it needs; covers do not count", async () => {
+    const [solo, chorus] = [newId(), newId()];
+    const { productionId } = world;
+    await db.insert(t.roles).values([
+      { id: solo, productionId, name: "Orsolo", place: 1 },
+      { id: chorus, productionId, name: "Ferrymen", place: 2, needed: 2 },
+    ]);
+    const choose = (roleId: string, personId: string, kind: "principal" | "cover") =>
+      db.insert(t.choices).values({ productionId, roleId, personId, kind, state: "cast" });
+    const { actor, otherActor, md } = world.people;
+    await choose(solo, actor.personId, "cover");
+    await choose(chorus, actor.personId, "principal");
+    const castNow = async () => (await seasonOf(md.userId)).progress[0]?.roles;
+    expect(await castNow()).toEqual({ all: 2, cast: 0 });
+    await choose(chorus, otherActor.personId, "principal");
+    expect(await castNow()).toEqual({ all: 2, cast: 1 });
+  });
+});
+
+describe("companies and their trails", () => {
+  test("those who run a production or the company enter it; its actors and accompanists do not", async () => {
+    for (const who of ["admin", "md", "assistant", "stageManager", "director"] as const) {
+      const company = await readCompany(await actorOf(world.people[who].userId), world.companyId);
+      expect(company.name).toBe("Lantern Street Theatre");
+    }
+    for (const who of ["actor", "accompanist", "outsiderAdmin", "outsiderMd"] as const) {
+      const actor = await actorOf(world.people[who].userId);
+      await expect(readCompany(actor, world.companyId)).rejects.toMatchObject({
+        code: "not-found",
+      });
+    }
+    expect(await listCompaniesRun(await actorOf(world.people.actor.userId))).toEqual([]);
+  });
+
+  test("the admin reads the company's, the music director their own production's, others none", async () => {
+    const { companyId, productionId, siblingProductionId, otherCompanyId } = world;
+    const entry = { action: "role.add", subjectKind: "role" };
+    await recordAudit(db, null, { ...entry, companyId, productionId, summary: "Here" });
+    await recordAudit(db, null, {
+      ...entry,
+      companyId,
+      productionId: siblingProductionId,
+      summary: "Beside",
+    });
+    await recordAudit(db, null, { ...entry, companyId, summary: "Company" });
+    await recordAudit(db, null, { ...entry, companyId: otherCompanyId, summary: "Theirs" });
+    const read = async (who: keyof World["people"], query: { productionId?: string } = {}) =>
+      (
+        await readTrail(await actorOf(world.people[who].userId), { companyId, ...query })
+      ).events.map((event) => event.what);
+    expect((await read("admin")).sort()).toEqual(["Beside", "Company", "Here"]);
+    expect(await read("admin", { productionId: siblingProductionId })).toEqual(["Beside"]);
+    expect(await read("md")).toEqual(["Here"]);
+    expect(await read("stageManager", { productionId })).toEqual(["Here"]);
+    const refused = { code: "not-found" };
+    await expect(read("md", { productionId: siblingProductionId })).rejects.toMatchObject(refused);
+    await expect(read("admin", { productionId: world.otherProductionId })).rejects.toMatchObject(
+      refused,
+    );
+    for (const who of ["director", "actor", "accompanist", "outsiderAdmin"] as const) {
+      await expect(read(who)).rejects.toMatchObject(refused);
+    }
+  });
+
+  test("who was chosen for what is kept from the stage manager until the list is out, and from the admin", async () => {
+    const { companyId, productionId } = world;
+    await recordAudit(db, null, {
+      companyId,
+      productionId,
+      action: "casting.choose",
+      subjectKind: "role",
+      summary: "Wren Tallis as Orsolo: cast",
+    });
+    const seenBy = async (who: keyof World["people"]) =>
+      (await readTrail(await actorOf(world.people[who].userId), { companyId })).events.length;
+    expect([await seenBy("md"), await seenBy("stageManager"), await seenBy("admin")]).toEqual([
+      1, 0, 0,
+    ]);
+    await db
+      .update(t.productions)
+      .set({ castPublishedAt: new Date() })
+      .where(eq(t.productions.id, productionId));
+    expect([await seenBy("md"), await seenBy("stageManager"), await seenBy("admin")]).toEqual([
+      1, 1, 0,
+    ]);
+  });
+
+  test("fifty a page, the newest first; a percent sign is looked for as itself", async () => {
+    const { companyId } = world;
+    for (let i = 0; i < 51; i += 1) {
+      await db.insert(t.auditEvents).values({
+        companyId,
+        actorName: "Cora Finch",
+        action: "venue.add",
+        subjectKind: "venue",
+        summary: i === 0 ? "Took 100% of the rooms" : `Added venue ${String(i)}`,
+        at: new Date(Date.UTC(2027, 2, 1, 10, i)),
+      });
+    }
+    const actor = await actorOf(world.people.admin.userId);
+    const first = await readTrail(actor, { companyId });
+    expect([first.events.length, first.hasNext, first.events[0]?.what]).toEqual([
+      50,
+      true,
+      "Added venue 50",
+    ]);
+    const second = await readTrail(actor, { companyId, page: 2 });
+    expect(second.events.map((e) => e.what)).toEqual(["Took 100% of the rooms"]);
+    expect(second.hasNext).toBe(false);
+    expect((await readTrail(actor, { companyId, text: "%" })).events).toHaveLength(1);
+    expect((await readTrail(actor, { companyId, text: "cora" })).events).toHaveLength(50);
+  });
+});
