@@ -13,6 +13,21 @@ export const CALL_KIND_NAMES = {
   performance: "Performance",
 } as const;
 
+/** The same inside a sentence: "is called to a music call". */
+export const CALL_PHRASES: Record<keyof typeof CALL_KIND_NAMES, string> = {
+  music: "a music call",
+  staging: "staging",
+  choreography: "choreography",
+  orchestra: "a band call",
+  sitzprobe: "a sitzprobe",
+  wandelprobe: "a wandelprobe",
+  tech: "tech",
+  dress: "a dress rehearsal",
+  put_in: "a put-in",
+  brush_up: "a brush-up",
+  performance: "a performance",
+};
+
 export type CallKind = keyof typeof CALL_KIND_NAMES;
 
 export const CALL_KINDS = Object.keys(CALL_KIND_NAMES) as [CallKind, ...CallKind[]];

@@ -154,7 +154,7 @@ describe("clashes while a call is being made", () => {
     await published({ leaderId: "", roomId: world.secondRoomId });
     const solo = { leaderId: "", localTime: "19:00", blocks: [{ ...callForm(world).blocks[0], kind: "warm_up", numberId: "", title: "Scales" }] };
     const { clashes } = await checked(solo);
-    expect(clashes.map((clash) => clash.words)).toEqual(["Hanne Briscoe plays for a another music call of this production, 18:30–20:00: 30 min of this call".replace("a another", "another")]);
+    expect(clashes.map((clash) => clash.words)).toEqual(["Hanne Briscoe plays for a music call of this production, 18:30–20:00: 30 min of this call"]);
     expect(clashes[0]?.remedies[0]).toEqual({ kind: "pianist", label: "Osric Dlamini plays instead", personId: world.secondPianist.personId });
   });
 
@@ -177,7 +177,7 @@ describe("clashes while a call is being made", () => {
     await published({ leaderId: "", pianistId: "", localTime: "17:00", roomId: farRoom, blocks: [{ ...callForm(world).blocks[0], minutes: 80 }] });
     const { clashes } = await checked({ leaderId: "", pianistId: "" });
     expect(clashes.map((clash) => clash.words)).toEqual([
-      "Wren Tallis is called to another music call of this production, 17:00–18:20, and has 10 min for the way: 15 min short",
+      "Wren Tallis is called to a music call of this production, 17:00–18:20, and has 10 min for the way: 15 min short",
     ]);
     expect(clashes[0]?.remedies.map((remedy) => remedy.label)).toContain("Start at 18:45, when nothing clashes");
   });

@@ -5,7 +5,7 @@ import {
   auditionDays, auditionRooms, blocks, callbackInvitations, callbackRounds, called, calls, people, pianistSessions, productions,
   rooms, signUps, slotAssignments, slots,
 } from "@/db/schema";
-import { CALL_KIND_NAMES } from "@/lib/calls/call-kinds";
+import { CALL_PHRASES } from "@/lib/calls/call-kinds";
 import type { Engagement } from "@/lib/calls/types";
 import type { ProductionScope } from "@/lib/data/guard";
 import { groupBy } from "@/lib/group-by";
@@ -42,7 +42,7 @@ async function recordsOf(keys: Map<string, string>): Promise<Map<string, string>
 }
 
 type Unnumbered = Omit<Engagement, "id">;
-type CallRow = { callId: string; productionId: string; companyId: string; production: string; kind: keyof typeof CALL_KIND_NAMES; state: string };
+type CallRow = { callId: string; productionId: string; companyId: string; production: string; kind: keyof typeof CALL_PHRASES; state: string };
 
 const callColumns = {
   callId: calls.id,
@@ -56,9 +56,9 @@ const callColumns = {
 
 function callLabel(who: Who, verb: string, call: CallRow): string {
   if (call.companyId !== who.companyId) return "is engaged";
-  const what = CALL_KIND_NAMES[call.kind].toLowerCase();
-  if (call.productionId !== who.productionId) return `${verb} ${what} of ${call.production}`;
-  return `${verb} another ${what} of this production${call.state === "draft" ? " (a draft)" : ""}`;
+  const what = `${verb} ${CALL_PHRASES[call.kind]}`;
+  if (call.productionId !== who.productionId) return `${what} of ${call.production}`;
+  return `${what} of this production${call.state === "draft" ? " (a draft)" : ""}`;
 }
 
 /** Drafts are nobody else's business; the other productions' calls count once they are published. */
@@ -180,7 +180,7 @@ async function playingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
       who: who.people.get(row.personId ?? "") ?? "",
       plays: true,
       callId: row.callId,
-      label: callLabel(who, "plays for a", row),
+      label: callLabel(who, "plays for", row),
       venueId: row.venueId,
     })),
     ...inRooms.map((row) => ({

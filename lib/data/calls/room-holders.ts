@@ -2,7 +2,7 @@ import "server-only";
 import { aliasedTable, and, asc, eq, gt, lt } from "drizzle-orm";
 import { db } from "@/db/client";
 import { auditionDays, auditionRooms, callbackRounds, calls, productions, roomBookings, rooms } from "@/db/schema";
-import { CALL_KIND_NAMES } from "@/lib/calls/call-kinds";
+import { CALL_PHRASES } from "@/lib/calls/call-kinds";
 import type { HeldRoom } from "@/lib/calls/types";
 import type { Interval } from "@/lib/schedule/types";
 
@@ -33,7 +33,7 @@ export async function readRoomHolders(companyId: string, window: Interval): Prom
     .where(and(eq(rooms.companyId, companyId), lt(roomBookings.startsAt, window.to), gt(roomBookings.endsAt, window.from)))
     .orderBy(asc(roomBookings.startsAt));
   return rows.map(({ roomId, callId, from, to, auditions, call, callKind, round }) => {
-    if (call !== null && callKind !== null) return { roomId, callId, from, to, label: `a ${CALL_KIND_NAMES[callKind].toLowerCase()} of ${call}` };
+    if (call !== null && callKind !== null) return { roomId, callId, from, to, label: `${CALL_PHRASES[callKind]} of ${call}` };
     const label = round === null ? `the auditions of ${auditions ?? "another production"}` : `the callbacks of ${round}`;
     return { roomId, callId, from, to, label };
   });

@@ -2,7 +2,7 @@ import { answerCallback, answerSlot, joinCompany } from "@/app/(me)/actions";
 import type { OwnSlot } from "@/lib/data/auditions/own";
 import type { OwnCallback } from "@/lib/data/callbacks/own";
 import type { OwnInvitation } from "@/lib/data/invitations";
-import { clock, clockSpan, localDay, longDay } from "@/lib/format-dates";
+import { clock, localDay, longDay } from "@/lib/format-dates";
 import { AnswerButtons } from "./answer-buttons";
 import { DecisionFrame, Prepare, WhenAndWhere } from "./decision-frame";
 

@@ -11,11 +11,12 @@ import { Notice } from "@/components/ui/notice";
 import { callbacksQuery, isShown, type DraftSinger } from "@/lib/client/callbacks";
 import { LOOK_AGAIN } from "@/lib/client/look-again";
 import { matches } from "@/lib/client/matches";
+import type { RoomChoice } from "@/lib/data/rooms";
 import { AnswersSummary } from "./answers-summary";
 import { MarksFilter, type MarksView } from "./marks-filter";
 import { MarksTable } from "./marks-table";
 import { PublishRound } from "./publish-round";
-import { RoundForm, type RoomOption } from "./round-form";
+import { RoundForm } from "./round-form";
 import { RoundSummary } from "./round-summary";
 import { useMarks } from "./use-marks";
 
@@ -32,7 +33,7 @@ export function CallbacksBoard({
   rooms,
 }: {
   productionId: string;
-  rooms: readonly RoomOption[];
+  rooms: readonly RoomChoice[];
 }) {
   const marks = useMarks(productionId);
   const { data: draft, error } = useQuery({

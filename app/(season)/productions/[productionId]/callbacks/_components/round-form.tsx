@@ -12,12 +12,11 @@ import { Select } from "@/components/ui/select";
 import { Textarea } from "@/components/ui/textarea";
 import { showToast } from "@/components/ui/toast-store";
 import { callbacksQuery, type DraftRound } from "@/lib/client/callbacks";
+import type { RoomChoice } from "@/lib/data/rooms";
 import { clock, localDay } from "@/lib/format-dates";
 import { changeRoundSchema } from "@/lib/schemas/callbacks";
 import { changeRound } from "../actions";
 import { whenInWords } from "./round-summary";
-
-export type RoomOption = { id: string; name: string; venue: string };
 
 function valuesOf(productionId: string, round: DraftRound) {
   const at = (iso: string | null, write: (at: Date, zone: string) => string) =>
@@ -42,7 +41,7 @@ export function RoundForm({
 }: {
   productionId: string;
   round: DraftRound;
-  rooms: readonly RoomOption[];
+  rooms: readonly RoomChoice[];
 }) {
   const client = useQueryClient();
   const state = useActionForm({

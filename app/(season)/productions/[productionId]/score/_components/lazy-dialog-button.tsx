@@ -1,7 +1,7 @@
 "use client";
 
 import { Suspense, useState } from "react";
-import type { ComponentType, ReactElement, ReactNode } from "react";
+import type { ReactElement, ReactNode } from "react";
 import { Button } from "@/components/ui/button";
 import type { ButtonKind } from "@/components/ui/button";
 
@@ -16,12 +16,12 @@ type Props = {
   kind?: ButtonKind;
   /** Fetches the dialog's code; called when a hand or the focus comes near. */
   load: () => Promise<unknown>;
-  /** The lazy dialog; gets its trigger, so that focus comes back to it. */
-  dialog: ComponentType<LazyDialogProps>;
+  /** Draws the lazy dialog around its trigger, so that focus comes back to it. */
+  dialog: (props: LazyDialogProps) => ReactElement;
 };
 
 /** A button whose dialog, with its form and rules, is fetched only when somebody is about to open it. */
-export function LazyDialogButton({ children, kind = "secondary", load, dialog: Dialog }: Props) {
+export function LazyDialogButton({ children, kind = "secondary", load, dialog }: Props) {
   const [wanted, setWanted] = useState(false);
   const [open, setOpen] = useState(false);
   const button = (
@@ -41,8 +41,6 @@ export function LazyDialogButton({ children, kind = "secondary", load, dialog: D
   );
   if (!wanted) return button;
   return (
-    <Suspense fallback={button}>
-      <Dialog trigger={button} open={open} onOpenChange={setOpen} />
-    </Suspense>
+    <Suspense fallback={button}>{dialog({ trigger: button, open, onOpenChange: setOpen })}</Suspense>
   );
 }
