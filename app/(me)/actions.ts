@@ -8,11 +8,13 @@ import { answerCallback as writeCallbackAnswer } from "@/lib/data/callbacks/own"
 import * as conflictData from "@/lib/data/conflicts";
 import { acceptOwnInvitation } from "@/lib/data/invitations";
 import { claimRange as writeRange } from "@/lib/data/ranges";
+import { acknowledgeSheet as writeAcknowledgement } from "@/lib/data/sheets/own";
 import { answerCallbackSchema } from "@/lib/schemas/callbacks";
 import { idField } from "@/lib/schemas/common";
 import { addConflictSchema, conflictIdsSchema } from "@/lib/schemas/conflicts";
 import { answerSlotSchema } from "@/lib/schemas/me";
 import { claimRangeSchema } from "@/lib/schemas/ranges";
+import { acknowledgeSheetSchema } from "@/lib/schemas/sheets";
 
 export const answerSlot = defineAction({ input: answerSlotSchema }, async (input, actor) => {
   await writeSlotAnswer(actor, input);
@@ -24,6 +26,14 @@ export const answerCallback = defineAction(
   async (input, actor) => {
     await writeCallbackAnswer(actor, input);
     revalidatePath("/me");
+  },
+);
+
+export const acknowledgeSheet = defineAction(
+  { input: acknowledgeSheetSchema },
+  async ({ issueId }, actor) => {
+    await writeAcknowledgement(actor, issueId);
+    revalidatePath("/me", "layout");
   },
 );
 

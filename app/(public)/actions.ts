@@ -2,7 +2,6 @@
 
 import { headers } from "next/headers";
 import { redirect } from "next/navigation";
-import type { Route } from "next";
 import { currentUserId } from "@/lib/auth/current-user";
 import { definePublicAction } from "@/lib/auth/define-action";
 import { ownPath } from "@/lib/auth/own-path";
@@ -33,7 +32,7 @@ export const signInWithPassword = definePublicAction(
   { input: passwordSignInSchema },
   async ({ email, password, to }) => {
     await signInAs(await checkPassword(email, password, sourceOf(await headers())));
-    redirect(ownPath(to, AFTER_SIGN_IN) as Route);
+    redirect(ownPath(to, AFTER_SIGN_IN));
   },
 );
 
@@ -44,6 +43,6 @@ export const acceptInvitation = definePublicAction(
     await countTry(RATES.linkFromSource, sourceOf(await headers()));
     const userId = await accept(token);
     if ((await currentUserId()) !== userId) await signInAs(userId);
-    redirect(ownPath(to, AFTER_SIGN_IN) as Route);
+    redirect(ownPath(to, AFTER_SIGN_IN));
   },
 );

@@ -48,8 +48,10 @@ export default async function FrontPage() {
       <div className="relative overflow-hidden">
         <StaveOrnament className="pointer-events-none absolute top-14 right-0 hidden w-[41.25rem] max-w-[46%] lg:block" />
         <section className="relative px-4 pt-12 pb-14 md:px-8 md:pt-20 lg:min-h-[39rem] lg:pt-24">
-          <h1 className="max-w-[47rem] text-[clamp(2.5rem,6.5vw,4.5rem)] leading-[1.06] tracking-[-0.01em]">
-            The whole season, from the first sixteen bars to the last call.
+          <h1 className="max-w-[52rem] text-[clamp(2.5rem,5vw,4.5rem)] leading-[1.06] tracking-[-0.01em] text-balance">
+            <span className="lg:block">The whole season, </span>
+            <span className="lg:block">from the first sixteen bars </span>
+            <span className="lg:block">to the last call.</span>
           </h1>
           <p className="mt-6 max-w-[38rem] text-lg md:text-xl">
             For the music director at the piano, and the singers, stage managers and pianists who

@@ -31,6 +31,8 @@ export function ActionForm<Input extends FieldValues, Output, Data>({
   return (
     <form
       noValidate
+      // Pressed before the page is awake, the browser sends it itself: never into the address.
+      method="post"
       onSubmit={(event) => {
         void state.submit(event);
       }}

@@ -2,7 +2,7 @@
 
 import * as AlertDialog from "radix-ui/alert-dialog";
 import { useState, type ReactNode } from "react";
-import { Button } from "./button";
+import { Button, type ButtonKind } from "./button";
 import { overlayClass, panelClass } from "./panel";
 import { PendingButton } from "./pending-button";
 
@@ -15,6 +15,8 @@ export type ConfirmProps = {
   /** The act in a verb: "Delete the day". */
   confirmLabel: string;
   cancelLabel?: string;
+  /** "primary" for what is sent rather than destroyed. */
+  confirmKind?: ButtonKind;
   /** Closes when the promise resolves to anything but `{ ok: false }`; else stays open. */
   onConfirm: () => unknown;
 };
@@ -30,6 +32,7 @@ export function Confirm({
   children,
   confirmLabel,
   cancelLabel = "Keep it",
+  confirmKind = "danger",
   onConfirm,
 }: ConfirmProps) {
   const [open, setOpen] = useState(false);
@@ -60,7 +63,7 @@ export function Confirm({
               <Button>{cancelLabel}</Button>
             </AlertDialog.Cancel>
             <PendingButton
-              kind="danger"
+              kind={confirmKind}
               pending={pending}
               onClick={() => {
                 void confirm();

@@ -7,7 +7,7 @@ const LONGEST = 1000;
  * the sign-in pages themselves, which would go round in a circle.
  */
 export function ownPath(raw: unknown, fallback: string): string {
-  // eslint-disable-next-line no-control-regex -- these are what browsers drop or read as a slash
+   
   if (
     typeof raw !== "string" ||
     raw.length > LONGEST ||

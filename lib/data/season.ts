@@ -72,6 +72,7 @@ export async function listSeasonProductions(actor: Actor): Promise<SeasonProduct
       ...production,
       castPublished,
       leads: can(actor, "production:change", subject),
+      plans: can(actor, "calls:change", subject),
       sees: {
         score: can(actor, "score:read", subject),
         auditions: can(actor, "auditions:read", subject),

@@ -92,3 +92,6 @@ export const decideConflictSchema = z.object({
   conflictId: idField,
   state: z.enum(["asked", "agreed", "declined"]),
 });
+
+/** Where a call is found in an address. */
+export const callAddressSchema = z.object({ productionId: idField, callId: idField });

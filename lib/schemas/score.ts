@@ -123,7 +123,7 @@ export const writeLineSchema = z
   })
   .refine((line) => line.low.midi <= line.high.midi, {
     path: ["low"],
-    message: "The lowest note has to lie below the highest.",
+    error: "The lowest note has to lie below the highest.",
   });
 
 export const lineIdSchema = z.object({ productionId: idField, lineId: idField });
@@ -150,7 +150,7 @@ const partPlan = z
   })
   .refine((part) => part.to !== "new" || part.name !== "", {
     path: ["name"],
-    message: "Write the new role's name.",
+    error: "Write the new role's name.",
   });
 
 export const confirmReadingSchema = z.object({

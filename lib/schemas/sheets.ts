@@ -16,3 +16,11 @@ export const issueSheetSchema = z.object({
 });
 
 export const acknowledgeSheetSchema = z.object({ issueId: idField });
+
+/** Where an issue is found in an address, and as what file it is asked for. */
+export const issueAddressSchema = z.object({ productionId: idField, issueId: idField });
+
+export const sheetFileSchema = z.object({
+  format: z.enum(["xlsx", "csv"]).default("xlsx"),
+  paper: z.enum(["A4", "Letter"]).optional(),
+});

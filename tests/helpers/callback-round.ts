@@ -13,15 +13,13 @@ export async function makeCallbackRound(world: World) {
     { id: maren, productionId: world.productionId, name: "Maren", place: 1 },
     { id: bet, productionId: world.productionId, name: "Old Bet", place: 2 },
   ]);
-  await db
-    .insert(t.numbers)
-    .values({
-      id: numberId,
-      productionId: world.productionId,
-      label: "1",
-      title: "The Ness Light",
-      place: 1,
-    });
+  await db.insert(t.numbers).values({
+    id: numberId,
+    productionId: world.productionId,
+    label: "1",
+    title: "The Ness Light",
+    place: 1,
+  });
   await db.insert(t.vocalLines).values({
     roleId: maren,
     numberId,

@@ -5,6 +5,9 @@ import { eq } from "drizzle-orm";
 import { POST } from "@/app/api/productions/[productionId]/score/route";
 import { db } from "@/db/client";
 import * as t from "@/db/schema";
+import { addNumber, addRole } from "@/app/(season)/productions/[productionId]/score/actions";
+import { loadActor } from "@/lib/data/actor";
+import type { Actor } from "@/lib/permissions/types";
 import { as } from "./as";
 
 const MUSIC = path.resolve(import.meta.dirname, "../fixtures/music");
@@ -87,4 +90,69 @@ export function confirmation(
     parts: parts.map((part) => ({ octaveShift: 0, name: "", ...part })),
     ...extra,
   };
+}
+
+/** The data of an action's answer; throws when it was refused. */
+export async function data<T>(
+  result: Promise<{ ok: true; data: T } | { ok: false; error: { message: string } }>,
+): Promise<T> {
+  const answer = await result;
+  if (!answer.ok) throw new Error(JSON.stringify(answer.error));
+  return answer.data;
+}
+
+/** What the form of a number sends. */
+export const numberInput = (productionId: string, label: string, title = `Number ${label}`) => ({
+  productionId,
+  label,
+  title,
+  key: "d",
+  metre: "3/4",
+  tempo: "96",
+  bars: "40",
+  length: "2:10",
+});
+
+/** What the form of a role sends. */
+export const roleInput = (productionId: string, name: string) => ({
+  productionId,
+  name,
+  kind: "principal" as const,
+  needed: "1",
+  covers: "1",
+  about: "",
+});
+
+/** Adds a number as whoever is asking; its id. */
+export async function makeNumber(productionId: string, label: string): Promise<string> {
+  return (await data(addNumber(numberInput(productionId, label)))).numberId;
+}
+
+/** Adds a role as whoever is asking; its id. */
+export async function makeRole(productionId: string, name: string): Promise<string> {
+  return (await data(addRole(roleInput(productionId, name)))).roleId;
+}
+
+/** Everyone's lines in a number, in the order they were written. */
+export function linesIn(numberId: string) {
+  return db
+    .select({
+      id: t.vocalLines.id,
+      role: t.roles.name,
+      roleId: t.roles.id,
+      source: t.vocalLines.source,
+      low: t.vocalLines.lowSpelled,
+      high: t.vocalLines.highSpelled,
+    })
+    .from(t.vocalLines)
+    .innerJoin(t.roles, eq(t.roles.id, t.vocalLines.roleId))
+    .where(eq(t.vocalLines.numberId, numberId))
+    .orderBy(t.vocalLines.id);
+}
+
+/** The login as the data layer knows it. */
+export async function actorOf(userId: string): Promise<Actor> {
+  const actor = await loadActor(userId);
+  if (!actor) throw new Error("no such login");
+  return actor;
 }

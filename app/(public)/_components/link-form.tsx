@@ -11,24 +11,30 @@ import { requestLink } from "../actions";
 export type LinkFormProps = {
   /** Where to go once signed in; empty for one's own first page. */
   to?: string;
+  /** What was typed before the page was awake. */
+  email?: string;
   /** Keeps the label for screen readers, where the page around says what the field is. */
   labelHidden?: boolean;
 };
 
 /** Sign-in by one field: an address, and a link comes. */
-export function LinkForm({ to = "", labelHidden = false }: LinkFormProps) {
+export function LinkForm({ to = "", email = "", labelHidden = false }: LinkFormProps) {
   const state = useActionForm({
     schema: requestLinkSchema,
     action: requestLink,
-    defaultValues: { email: "", to },
+    defaultValues: { email, to },
   });
   const { register, formState } = state.form;
   return (
     <form
       noValidate
+      // Pressed before the page is awake, the browser sends it itself: the sign-in page then has what was typed.
+      method="get"
+      action="/sign-in"
       onSubmit={(event) => void state.submit(event)}
       className="flex w-full flex-col gap-3"
     >
+      {to !== "" && <input type="hidden" name="to" value={to} />}
       <div className="flex flex-wrap items-end gap-x-3 gap-y-3">
         <Field
           label="Your e-mail"

@@ -12,7 +12,7 @@ import { signInError } from "./sign-in-error";
 export const metadata: Metadata = { title: "Sign in" };
 
 export default async function SignInPage({ searchParams }: PageProps<"/sign-in">) {
-  const { to, error } = await searchParams;
+  const { to, error, email } = await searchParams;
   const path = ownPath(to, "");
   const words = signInError(error);
   const actor = await getActor();
@@ -33,7 +33,7 @@ export default async function SignInPage({ searchParams }: PageProps<"/sign-in">
           </Link>
         </Notice>
       )}
-      <LinkForm to={path} />
+      <LinkForm to={path} {...(typeof email === "string" && { email })} />
       <p className="text-sm text-ink-2">
         No password needed: the link in the mail signs you in. It is good for 30 minutes.
       </p>

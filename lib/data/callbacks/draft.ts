@@ -60,25 +60,47 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
   const subject = { companyId: scope.companyId, productionId: scope.id };
   const [round, roleRows, lines, signedUp] = await Promise.all([
     latestRound(scope.id),
-    db.select({ id: roles.id, name: roles.name }).from(roles).where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt))).orderBy(asc(roles.place)),
+    db
+      .select({ id: roles.id, name: roles.name })
+      .from(roles)
+      .where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt)))
+      .orderBy(asc(roles.place)),
     linesOf(scope.id),
     db
-      .select({ personId: people.id, name: people.name, minor: people.minor, song: signUps.song, asksFor: signUps.asksFor, state: signUps.state })
+      .select({
+        personId: people.id,
+        name: people.name,
+        minor: people.minor,
+        song: signUps.song,
+        asksFor: signUps.asksFor,
+        state: signUps.state,
+      })
       .from(signUps)
       .innerJoin(people, eq(people.id, signUps.personId))
       .where(and(eq(signUps.productionId, scope.id), isNull(people.removedAt)))
       .orderBy(asc(signUps.place)),
   ]);
   const [ranges, marks, standing, wanted] = await Promise.all([
-    rangesOf(db, signedUp.map((row) => row.personId)),
-    round ? db.select({ personId: callbackMarks.personId, roleId: callbackMarks.roleId }).from(callbackMarks).where(eq(callbackMarks.roundId, round.id)) : [],
+    rangesOf(
+      db,
+      signedUp.map((row) => row.personId),
+    ),
+    round
+      ? db
+          .select({ personId: callbackMarks.personId, roleId: callbackMarks.roleId })
+          .from(callbackMarks)
+          .where(eq(callbackMarks.roundId, round.id))
+      : [],
     round ? standingInvitations(db, round.id) : [],
     round ? wantedSnapshots(db, scope.id, round) : new Map<string, never>(),
   ]);
   const whole = wholeLines(lines);
   const changes = compareWithSent(wanted, standing);
   const marksOf = groupBy(marks, (mark) => mark.personId);
-  const may = { mark: can(actor, "callbacks:draft", subject), publish: can(actor, "callbacks:publish", subject) };
+  const may = {
+    mark: can(actor, "callbacks:draft", subject),
+    publish: can(actor, "callbacks:publish", subject),
+  };
   return {
     round,
     roles: roleRows.map((role) => {
@@ -86,14 +108,23 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
       return { ...role, line: line ? { low: line.low, high: line.high } : null };
     }),
     singers: signedUp
-      .filter((row) => row.state !== "withdrawn" || marksOf.has(row.personId) || changes.has(row.personId))
+      .filter(
+        (row) =>
+          row.state !== "withdrawn" || marksOf.has(row.personId) || changes.has(row.personId),
+      )
       .map(({ state, ...row }) => {
         const best = ranges.get(row.personId)?.best ?? null;
         const sent = standing.find((s) => s.personId === row.personId);
         return {
           ...row,
           withdrawn: state === "withdrawn",
-          range: best && { low: best.low, high: best.high, comfortableLow: best.comfortableLow, comfortableHigh: best.comfortableHigh, kind: best.kind },
+          range: best && {
+            low: best.low,
+            high: best.high,
+            comfortableLow: best.comfortableLow,
+            comfortableHigh: best.comfortableHigh,
+            kind: best.kind,
+          },
           fits: roleRows.map((role) => fitWords(best, whole.get(role.id))),
           marks: (marksOf.get(row.personId) ?? []).map((m) => m.roleId),
           sent: sent ? { answer: sent.answer } : null,
@@ -107,20 +138,39 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
 }
 
 /** Begins a round. One round at a time is drafted; a new one may begin when the last is published. */
-export async function startRound(actor: Actor, input: z.output<typeof startRoundSchema>): Promise<string> {
+export async function startRound(
+  actor: Actor,
+  input: z.output<typeof startRoundSchema>,
+): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "callbacks:publish");
   const last = await latestRound(scope.id);
-  if (last && last.issue === 0) throw new AppError("refused", "There is a round that has not been published yet. Finish that one first.");
+  if (last && last.issue === 0)
+    throw new AppError(
+      "refused",
+      "There is a round that has not been published yet. Finish that one first.",
+    );
   const id = newId();
   await inTransaction(async (tx) => {
-    await tx.insert(callbackRounds).values({ id, productionId: scope.id, title: input.title, zone: scope.zone });
-    await recordAudit(tx, actor, { companyId: scope.companyId, productionId: scope.id, action: "callbacks.start", subjectKind: "round", subjectId: id, summary: `Began the round ${input.title}` });
+    await tx
+      .insert(callbackRounds)
+      .values({ id, productionId: scope.id, title: input.title, zone: scope.zone });
+    await recordAudit(tx, actor, {
+      companyId: scope.companyId,
+      productionId: scope.id,
+      action: "callbacks.start",
+      subjectKind: "round",
+      subjectId: id,
+      summary: `Began the round ${input.title}`,
+    });
   });
   return id;
 }
 
 /** Sets when and where the round is and what to prepare. Nothing goes out until it is published. */
-export async function changeRound(actor: Actor, input: z.output<typeof changeRoundSchema>): Promise<void> {
+export async function changeRound(
+  actor: Actor,
+  input: z.output<typeof changeRoundSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "callbacks:publish");
   if (input.roomId !== null) await roomOfCompany(scope, input.roomId);
   const [result] = await db
@@ -132,7 +182,13 @@ export async function changeRound(actor: Actor, input: z.output<typeof changeRou
       material: input.material,
       version: sql`${callbackRounds.version} + 1`,
     })
-    .where(and(eq(callbackRounds.id, input.roundId), eq(callbackRounds.productionId, scope.id), eq(callbackRounds.version, input.version)));
+    .where(
+      and(
+        eq(callbackRounds.id, input.roundId),
+        eq(callbackRounds.productionId, scope.id),
+        eq(callbackRounds.version, input.version),
+      ),
+    );
   if (result.affectedRows === 0) await refuseStale(scope.id, input.roundId);
 }
 
@@ -149,24 +205,51 @@ export async function setMark(actor: Actor, input: z.output<typeof markSchema>):
     } else {
       await tx
         .delete(callbackMarks)
-        .where(and(eq(callbackMarks.roundId, input.roundId), eq(callbackMarks.personId, input.personId), eq(callbackMarks.roleId, input.roleId)));
+        .where(
+          and(
+            eq(callbackMarks.roundId, input.roundId),
+            eq(callbackMarks.personId, input.personId),
+            eq(callbackMarks.roleId, input.roleId),
+          ),
+        );
     }
   });
 }
 
-async function assertMarkable(tx: Tx, scope: ProductionScope, input: z.output<typeof markSchema>): Promise<void> {
-  const [round] = await tx.select({ id: callbackRounds.id }).from(callbackRounds).where(and(eq(callbackRounds.id, input.roundId), eq(callbackRounds.productionId, scope.id)));
-  const [role] = await tx.select({ id: roles.id }).from(roles).where(and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt)));
-  const [singer] = await tx.select({ id: signUps.id }).from(signUps).where(and(eq(signUps.personId, input.personId), eq(signUps.productionId, scope.id)));
+async function assertMarkable(
+  tx: Tx,
+  scope: ProductionScope,
+  input: z.output<typeof markSchema>,
+): Promise<void> {
+  const [round] = await tx
+    .select({ id: callbackRounds.id })
+    .from(callbackRounds)
+    .where(and(eq(callbackRounds.id, input.roundId), eq(callbackRounds.productionId, scope.id)));
+  const [role] = await tx
+    .select({ id: roles.id })
+    .from(roles)
+    .where(
+      and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt)),
+    );
+  const [singer] = await tx
+    .select({ id: signUps.id })
+    .from(signUps)
+    .where(and(eq(signUps.personId, input.personId), eq(signUps.productionId, scope.id)));
   if (!round || !role || !singer) throw new AppError("not-found");
 }
 
 async function roomOfCompany(scope: ProductionScope, roomId: string): Promise<void> {
-  const [room] = await db.select({ id: rooms.id }).from(rooms).where(and(eq(rooms.id, roomId), eq(rooms.companyId, scope.companyId)));
+  const [room] = await db
+    .select({ id: rooms.id })
+    .from(rooms)
+    .where(and(eq(rooms.id, roomId), eq(rooms.companyId, scope.companyId)));
   if (!room) throw new AppError("not-found", "That room is no longer there. Choose another.");
 }
 
 async function refuseStale(productionId: string, roundId: string): Promise<never> {
-  const [round] = await db.select({ id: callbackRounds.id }).from(callbackRounds).where(and(eq(callbackRounds.id, roundId), eq(callbackRounds.productionId, productionId)));
+  const [round] = await db
+    .select({ id: callbackRounds.id })
+    .from(callbackRounds)
+    .where(and(eq(callbackRounds.id, roundId), eq(callbackRounds.productionId, productionId)));
   throw new AppError(round ? "stale" : "not-found");
 }

@@ -39,7 +39,13 @@ export async function listOwnCallbacks(actor: Actor): Promise<OwnCallback[]> {
     .from(callbackInvitations)
     .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
     .innerJoin(productions, eq(productions.id, callbackRounds.productionId))
-    .where(and(inArray(callbackInvitations.personId, ids), isNull(callbackInvitations.supersededAt), isNull(productions.removedAt)))
+    .where(
+      and(
+        inArray(callbackInvitations.personId, ids),
+        isNull(callbackInvitations.supersededAt),
+        isNull(productions.removedAt),
+      ),
+    )
     .orderBy(desc(callbackInvitations.publishedAt));
   return rows.map(({ snapshot, ...row }) => ({
     ...row,
@@ -53,19 +59,38 @@ export async function listOwnCallbacks(actor: Actor): Promise<OwnCallback[]> {
 }
 
 /** The actor's own answer to what was published to them; it may be changed until the list changes. */
-export async function answerCallback(actor: Actor, input: z.output<typeof answerCallbackSchema>): Promise<void> {
+export async function answerCallback(
+  actor: Actor,
+  input: z.output<typeof answerCallbackSchema>,
+): Promise<void> {
   const [row] = await db
-    .select({ personId: callbackInvitations.personId, supersededAt: callbackInvitations.supersededAt, companyId: productions.companyId, productionId: productions.id })
+    .select({
+      personId: callbackInvitations.personId,
+      supersededAt: callbackInvitations.supersededAt,
+      companyId: productions.companyId,
+      productionId: productions.id,
+    })
     .from(callbackInvitations)
     .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
     .innerJoin(productions, eq(productions.id, callbackRounds.productionId))
     .where(eq(callbackInvitations.id, input.invitationId));
   if (!row || !actor.people.some((p) => p.id === row.personId)) throw new AppError("not-found");
-  if (row.supersededAt !== null) throw new AppError("stale", "The list has changed since. Load the page again to see what it says now.");
+  if (row.supersededAt !== null)
+    throw new AppError(
+      "stale",
+      "The list has changed since. Load the page again to see what it says now.",
+    );
   await inTransaction(async (tx) => {
-    await tx.update(callbackInvitations).set({ answer: input.answer, answeredAt: new Date() }).where(eq(callbackInvitations.id, input.invitationId));
+    await tx
+      .update(callbackInvitations)
+      .set({ answer: input.answer, answeredAt: new Date() })
+      .where(eq(callbackInvitations.id, input.invitationId));
     await recordAudit(tx, actor, {
-      companyId: row.companyId, productionId: row.productionId, action: "callbacks.answer", subjectKind: "invitation", subjectId: input.invitationId,
+      companyId: row.companyId,
+      productionId: row.productionId,
+      action: "callbacks.answer",
+      subjectKind: "invitation",
+      subjectId: input.invitationId,
       summary: `Answered a callback: ${input.answer}`,
     });
   });

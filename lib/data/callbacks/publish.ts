@@ -26,32 +26,51 @@ import type { PublishedCount } from "./standing";
  * People whose snapshot is the same as before are not told again; people taken off see it no longer. Takes the room.
  * Throws `stale`, `refused` (no time or nobody marked) or `taken` (the room).
  */
-export async function publishRound(actor: Actor, input: z.output<typeof publishRoundSchema>): Promise<PublishedCount> {
+export async function publishRound(
+  actor: Actor,
+  input: z.output<typeof publishRoundSchema>,
+): Promise<PublishedCount> {
   const scope = await productionFor(actor, input.productionId, "callbacks:publish");
   const round = await latestRound(scope.id);
   if (round?.id !== input.roundId) throw new AppError("not-found");
   const { startsAt, endsAt } = round;
-  if (!startsAt || !endsAt) throw new AppError("refused", "Say when the callbacks are before the list goes out.");
+  if (!startsAt || !endsAt)
+    throw new AppError("refused", "Say when the callbacks are before the list goes out.");
   try {
     return await inTransaction(async (tx) => {
       const [locked] = await tx
         .update(callbackRounds)
-        .set({ issue: sql`${callbackRounds.issue} + 1`, publishedAt: new Date(), version: sql`${callbackRounds.version} + 1` })
+        .set({
+          issue: sql`${callbackRounds.issue} + 1`,
+          publishedAt: new Date(),
+          version: sql`${callbackRounds.version} + 1`,
+        })
         .where(and(eq(callbackRounds.id, round.id), eq(callbackRounds.version, input.version)));
       if (locked.affectedRows === 0) throw new AppError("stale");
       const wanted = await wantedSnapshots(tx, scope.id, round);
-      if (wanted.size === 0) throw new AppError("refused", "Nobody is marked yet. Mark who is called back, then publish.");
+      if (wanted.size === 0)
+        throw new AppError(
+          "refused",
+          "Nobody is marked yet. Mark who is called back, then publish.",
+        );
       await holdRoom(tx, round, startsAt, endsAt);
       const counts = await writeInvitations(tx, actor, scope, round, wanted);
       await recordAudit(tx, actor, {
-        companyId: scope.companyId, productionId: scope.id, action: "callbacks.publish", subjectKind: "round", subjectId: round.id,
+        companyId: scope.companyId,
+        productionId: scope.id,
+        action: "callbacks.publish",
+        subjectKind: "round",
+        subjectId: round.id,
         summary: `Published ${round.title}: ${String(counts.told)} told, ${String(counts.takenOff)} taken off`,
       });
       return counts;
     });
   } catch (error) {
     if (duplicateKey(error) === "room_bookings_held") {
-      throw new AppError("taken", `${round.room ?? "The room"} is taken then. Choose another room or time.`);
+      throw new AppError(
+        "taken",
+        `${round.room ?? "The room"} is taken then. Choose another room or time.`,
+      );
     }
     throw error;
   }
@@ -59,7 +78,10 @@ export async function publishRound(actor: Actor, input: z.output<typeof publishR
 
 async function holdRoom(tx: Tx, round: Round, startsAt: Date, endsAt: Date): Promise<void> {
   await tx.delete(roomBookings).where(eq(roomBookings.callbackRoundId, round.id));
-  if (round.roomId) await tx.insert(roomBookings).values({ roomId: round.roomId, startsAt, endsAt, callbackRoundId: round.id });
+  if (round.roomId)
+    await tx
+      .insert(roomBookings)
+      .values({ roomId: round.roomId, startsAt, endsAt, callbackRoundId: round.id });
 }
 
 async function writeInvitations(
@@ -73,30 +95,62 @@ async function writeInvitations(
   const changes = compareWithSent(wanted, standing);
   const over = standing.filter((row) => changes.get(row.personId) !== "none");
   if (over.length > 0) {
-    await tx.update(callbackInvitations).set({ supersededAt: new Date() }).where(inArray(callbackInvitations.id, over.map((row) => row.id)));
+    await tx
+      .update(callbackInvitations)
+      .set({ supersededAt: new Date() })
+      .where(
+        inArray(
+          callbackInvitations.id,
+          over.map((row) => row.id),
+        ),
+      );
   }
   const fresh = [...wanted].filter(([personId]) => changes.get(personId) !== "none");
   const issue = round.issue + 1;
   for (const [personId, snapshot] of fresh) {
     const id = newId();
-    await tx.insert(callbackInvitations).values({ id, roundId: round.id, personId, issue, snapshot, publishedAt: new Date() });
+    await tx
+      .insert(callbackInvitations)
+      .values({ id, roundId: round.id, personId, issue, snapshot, publishedAt: new Date() });
     await mailCallback(tx, actor, scope, { id, personId, snapshot });
   }
   return countChanges(changes);
 }
 
-async function mailCallback(tx: Tx, actor: Actor, scope: ProductionScope, invitation: { id: string; personId: string; snapshot: CallbackSnapshot }): Promise<void> {
+async function mailCallback(
+  tx: Tx,
+  actor: Actor,
+  scope: ProductionScope,
+  invitation: { id: string; personId: string; snapshot: CallbackSnapshot },
+): Promise<void> {
   const [person] = await tx
-    .select({ name: people.name, email: people.email, userId: people.userId, positionId: positions.id })
+    .select({
+      name: people.name,
+      email: people.email,
+      userId: people.userId,
+      positionId: positions.id,
+    })
     .from(people)
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), eq(positions.kind, "actor"), isNull(positions.endedAt)))
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "actor"),
+        isNull(positions.endedAt),
+      ),
+    )
     .where(eq(people.id, invitation.personId));
   if (!person?.email) return;
   const { startsAt, endsAt, zone, room } = invitation.snapshot;
   const from = new Date(startsAt ?? 0);
   const link =
     person.userId === null
-      ? await makeInvitationLink(tx, actor, { positionId: person.positionId, email: person.email, to: "/me" })
+      ? await makeInvitationLink(tx, actor, {
+          positionId: person.positionId,
+          email: person.email,
+          to: "/me",
+        })
       : new URL("/me", env().AUTH_URL).toString();
   await queueMail(tx, {
     companyId: scope.companyId,

@@ -21,28 +21,57 @@ export async function choose(actor: Actor, input: z.output<typeof chooseSchema>)
       const [role] = await tx
         .select({ id: roles.id, name: roles.name, needed: roles.needed })
         .from(roles)
-        .where(and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt)))
+        .where(
+          and(
+            eq(roles.id, input.roleId),
+            eq(roles.productionId, scope.id),
+            isNull(roles.removedAt),
+          ),
+        )
         .for("update");
       const [person] = await tx
         .select({ name: people.name })
         .from(people)
-        .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), eq(positions.kind, "actor"), isNull(positions.endedAt)))
+        .innerJoin(
+          positions,
+          and(
+            eq(positions.personId, people.id),
+            eq(positions.productionId, scope.id),
+            eq(positions.kind, "actor"),
+            isNull(positions.endedAt),
+          ),
+        )
         .where(and(eq(people.id, input.personId), eq(people.companyId, scope.companyId)));
       if (!role || !person) throw new AppError("not-found");
       const all = await tx
-        .select({ id: choices.id, personId: choices.personId, name: people.name, state: choices.state, kind: choices.kind, version: choices.version })
+        .select({
+          id: choices.id,
+          personId: choices.personId,
+          name: people.name,
+          state: choices.state,
+          kind: choices.kind,
+          version: choices.version,
+        })
         .from(choices)
         .innerJoin(people, eq(people.id, choices.personId))
         .where(eq(choices.roleId, role.id));
       const present = all.find((choice) => choice.personId === input.personId);
       if ((present?.version ?? 0) !== input.version) {
-        throw new AppError("stale", `${person.name} as ${role.name} was changed by someone else: now ${present ? present.state : "not chosen"}. Look again, then choose.`);
+        throw new AppError(
+          "stale",
+          `${person.name} as ${role.name} was changed by someone else: now ${present ? present.state : "not chosen"}. Look again, then choose.`,
+        );
       }
       if (input.state === "cast" && input.kind === "principal") {
-        const principals = all.filter((c) => c.state === "cast" && c.kind === "principal" && c.personId !== input.personId);
+        const principals = all.filter(
+          (c) => c.state === "cast" && c.kind === "principal" && c.personId !== input.personId,
+        );
         if (principals.length >= role.needed) {
           const holders = principals.map((c) => c.name).join(", ");
-          throw new AppError("taken", `${role.name} is cast: ${holders}. Take that back first, or make ${person.name} a cover or an alternate.`);
+          throw new AppError(
+            "taken",
+            `${role.name} is cast: ${holders}. Take that back first, or make ${person.name} a cover or an alternate.`,
+          );
         }
       }
       if (input.state === "none") {
@@ -50,15 +79,37 @@ export async function choose(actor: Actor, input: z.output<typeof chooseSchema>)
       } else if (present) {
         await tx
           .update(choices)
-          .set({ state: input.state, kind: input.kind, chosenBy: actor.userId, chosenAt: new Date(), version: sql`${choices.version} + 1` })
+          .set({
+            state: input.state,
+            kind: input.kind,
+            chosenBy: actor.userId,
+            chosenAt: new Date(),
+            version: sql`${choices.version} + 1`,
+          })
           .where(eq(choices.id, present.id));
       } else {
-        await tx.insert(choices).values({ productionId: scope.id, roleId: role.id, personId: input.personId, state: input.state, kind: input.kind, chosenBy: actor.userId });
+        await tx
+          .insert(choices)
+          .values({
+            productionId: scope.id,
+            roleId: role.id,
+            personId: input.personId,
+            state: input.state,
+            kind: input.kind,
+            chosenBy: actor.userId,
+          });
       }
       await recordAudit(tx, actor, {
-        companyId: scope.companyId, productionId: scope.id, action: "casting.choose", subjectKind: "role", subjectId: role.id,
+        companyId: scope.companyId,
+        productionId: scope.id,
+        action: "casting.choose",
+        subjectKind: "role",
+        subjectId: role.id,
         summary: `${person.name} as ${role.name}: ${input.state === "none" ? "taken back" : `${input.state} (${input.kind})`}`,
-        detail: { before: present ? { state: present.state, kind: present.kind } : null, after: input.state === "none" ? null : { state: input.state, kind: input.kind } },
+        detail: {
+          before: present ? { state: present.state, kind: present.kind } : null,
+          after: input.state === "none" ? null : { state: input.state, kind: input.kind },
+        },
       });
     });
   } catch (error) {
@@ -68,14 +119,29 @@ export async function choose(actor: Actor, input: z.output<typeof chooseSchema>)
 }
 
 /** Publishes the cast list (from then on the stage manager sees the grid), or takes it back. */
-export async function publishCast(actor: Actor, input: z.output<typeof publishCastSchema>): Promise<void> {
+export async function publishCast(
+  actor: Actor,
+  input: z.output<typeof publishCastSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "casting:choose");
   await inTransaction(async (tx) => {
-    const cast = await tx.select({ id: choices.id }).from(choices).where(and(eq(choices.productionId, scope.id), eq(choices.state, "cast"))).limit(1);
-    if (input.published && cast.length === 0) throw new AppError("refused", "Nobody is cast yet. Cast someone, then publish.");
-    await tx.update(productions).set({ castPublishedAt: input.published ? new Date() : null }).where(eq(productions.id, scope.id));
+    const cast = await tx
+      .select({ id: choices.id })
+      .from(choices)
+      .where(and(eq(choices.productionId, scope.id), eq(choices.state, "cast")))
+      .limit(1);
+    if (input.published && cast.length === 0)
+      throw new AppError("refused", "Nobody is cast yet. Cast someone, then publish.");
+    await tx
+      .update(productions)
+      .set({ castPublishedAt: input.published ? new Date() : null })
+      .where(eq(productions.id, scope.id));
     await recordAudit(tx, actor, {
-      companyId: scope.companyId, productionId: scope.id, action: "casting.publish", subjectKind: "production", subjectId: scope.id,
+      companyId: scope.companyId,
+      productionId: scope.id,
+      action: "casting.publish",
+      subjectKind: "production",
+      subjectId: scope.id,
       summary: input.published ? "Published the cast list" : "Took the cast list back",
     });
   });

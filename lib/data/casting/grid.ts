@@ -2,7 +2,14 @@ import "server-only";
 import { and, asc, desc, eq, inArray, isNull } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
-import { callbackInvitations, callbackMarks, callbackRounds, choices, people, roles } from "@/db/schema";
+import {
+  callbackInvitations,
+  callbackMarks,
+  callbackRounds,
+  choices,
+  people,
+  roles,
+} from "@/db/schema";
 import { productionFor } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
 import type { PersonRanges, RangeOnFile } from "@/lib/data/ranges";
@@ -18,9 +25,19 @@ import type { fitSchema } from "@/lib/schemas/casting";
 import { fitWords, linesOf, toSingerRange, wholeLines } from "./lines";
 import type { FitWords } from "./lines";
 
-export type CastingRole = { id: string; name: string; kind: string; needed: number; line: (PitchSpan & { tessitura: PitchSpan | null }) | null };
+export type CastingRole = {
+  id: string;
+  name: string;
+  kind: string;
+  needed: number;
+  line: (PitchSpan & { tessitura: PitchSpan | null }) | null;
+};
 
-export type CastingChoice = { state: "considered" | "cast"; kind: (typeof choices.$inferSelect)["kind"]; version: number };
+export type CastingChoice = {
+  state: "considered" | "cast";
+  kind: (typeof choices.$inferSelect)["kind"];
+  version: number;
+};
 
 export type CastingCell = FitWords & { choice: CastingChoice | null };
 
@@ -53,34 +70,65 @@ export type CastingGrid = {
 export async function readCastingGrid(actor: Actor, productionId: string): Promise<CastingGrid> {
   const scope = await productionFor(actor, productionId, "casting:see");
   const [roleRows, lines, marked, chosen] = await Promise.all([
-    db.select({ id: roles.id, name: roles.name, kind: roles.kind, needed: roles.needed }).from(roles).where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt))).orderBy(asc(roles.place)),
+    db
+      .select({ id: roles.id, name: roles.name, kind: roles.kind, needed: roles.needed })
+      .from(roles)
+      .where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt)))
+      .orderBy(asc(roles.place)),
     linesOf(scope.id),
     db
-      .select({ personId: callbackMarks.personId, roleId: callbackMarks.roleId, roundId: callbackMarks.roundId })
+      .select({
+        personId: callbackMarks.personId,
+        roleId: callbackMarks.roleId,
+        roundId: callbackMarks.roundId,
+      })
       .from(callbackMarks)
       .innerJoin(callbackRounds, eq(callbackRounds.id, callbackMarks.roundId))
       .where(eq(callbackRounds.productionId, scope.id)),
     db
-      .select({ personId: choices.personId, roleId: choices.roleId, state: choices.state, kind: choices.kind, version: choices.version })
+      .select({
+        personId: choices.personId,
+        roleId: choices.roleId,
+        state: choices.state,
+        kind: choices.kind,
+        version: choices.version,
+      })
       .from(choices)
       .where(eq(choices.productionId, scope.id)),
   ]);
   const ids = [...new Set([...marked.map((m) => m.personId), ...chosen.map((c) => c.personId)])];
   const [singerRows, ranges, answers] = await Promise.all([
-    ids.length === 0 ? [] : db.select({ personId: people.id, name: people.name, minor: people.minor }).from(people).where(and(inArray(people.id, ids), isNull(people.removedAt))).orderBy(asc(people.name)),
+    ids.length === 0
+      ? []
+      : db
+          .select({ personId: people.id, name: people.name, minor: people.minor })
+          .from(people)
+          .where(and(inArray(people.id, ids), isNull(people.removedAt)))
+          .orderBy(asc(people.name)),
     rangesOf(db, ids),
     db
       .select({ personId: callbackInvitations.personId, answer: callbackInvitations.answer })
       .from(callbackInvitations)
       .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
-      .where(and(eq(callbackRounds.productionId, scope.id), isNull(callbackInvitations.supersededAt)))
+      .where(
+        and(eq(callbackRounds.productionId, scope.id), isNull(callbackInvitations.supersededAt)),
+      )
       // The newest round speaks first.
       .orderBy(desc(callbackInvitations.publishedAt)),
   ]);
   const whole = wholeLines(lines);
   const grid = roleRows.map((role): CastingRole => {
     const line = whole.get(role.id);
-    return { ...role, line: line ? { low: line.low, high: line.high, tessitura: line.histogram ? tessitura(line.histogram) : null } : null };
+    return {
+      ...role,
+      line: line
+        ? {
+            low: line.low,
+            high: line.high,
+            tessitura: line.histogram ? tessitura(line.histogram) : null,
+          }
+        : null,
+    };
   });
   return {
     roles: grid,
@@ -88,13 +136,29 @@ export async function readCastingGrid(actor: Actor, productionId: string): Promi
       const best = ranges.get(row.personId)?.best ?? null;
       return {
         ...row,
-        range: best && { low: best.low, high: best.high, comfortableLow: best.comfortableLow, comfortableHigh: best.comfortableHigh, kind: best.kind },
-        calledBackFor: [...new Set(marked.filter((m) => m.personId === row.personId).map((m) => m.roleId))],
+        range: best && {
+          low: best.low,
+          high: best.high,
+          comfortableLow: best.comfortableLow,
+          comfortableHigh: best.comfortableHigh,
+          kind: best.kind,
+        },
+        calledBackFor: [
+          ...new Set(marked.filter((m) => m.personId === row.personId).map((m) => m.roleId)),
+        ],
         answer: answers.find((a) => a.personId === row.personId)?.answer ?? null,
         cells: Object.fromEntries(
           roleRows.map((role) => {
             const choice = chosen.find((c) => c.personId === row.personId && c.roleId === role.id);
-            return [role.id, { ...fitWords(best, whole.get(role.id)), choice: choice ? { state: choice.state, kind: choice.kind, version: choice.version } : null }];
+            return [
+              role.id,
+              {
+                ...fitWords(best, whole.get(role.id)),
+                choice: choice
+                  ? { state: choice.state, kind: choice.kind, version: choice.version }
+                  : null,
+              },
+            ];
           }),
         ),
       };
@@ -110,15 +174,39 @@ export type FitDetail = {
   singer: { name: string; minor: boolean; ranges: PersonRanges };
   role: { name: string };
   whole: RangeFit & { words: string };
-  numbers: { numberId: string; label: string; title: string; line: PitchSpan; fit: RangeFit; words: string }[];
+  numbers: {
+    numberId: string;
+    label: string;
+    title: string;
+    line: PitchSpan;
+    fit: RangeFit;
+    words: string;
+  }[];
 };
 
 /** One singer against one role, number by number: which numbers are the trouble and by how much. */
-export async function computeFit(actor: Actor, input: z.output<typeof fitSchema>): Promise<FitDetail> {
+export async function computeFit(
+  actor: Actor,
+  input: z.output<typeof fitSchema>,
+): Promise<FitDetail> {
   const scope = await productionFor(actor, input.productionId, "casting:see");
   const [[role], [person], lines, ranges] = await Promise.all([
-    db.select({ id: roles.id, name: roles.name }).from(roles).where(and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt))),
-    db.select({ name: people.name, minor: people.minor }).from(people).where(and(eq(people.id, input.personId), eq(people.companyId, scope.companyId), isNull(people.removedAt))),
+    db
+      .select({ id: roles.id, name: roles.name })
+      .from(roles)
+      .where(
+        and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt)),
+      ),
+    db
+      .select({ name: people.name, minor: people.minor })
+      .from(people)
+      .where(
+        and(
+          eq(people.id, input.personId),
+          eq(people.companyId, scope.companyId),
+          isNull(people.removedAt),
+        ),
+      ),
     linesOf(scope.id),
     rangesOf(db, [input.personId]),
   ]);
@@ -126,8 +214,16 @@ export async function computeFit(actor: Actor, input: z.output<typeof fitSchema>
   const own = lines.filter((line) => line.roleId === role.id);
   const line = mergeLines(own);
   const onFile = ranges.get(input.personId) ?? { claimed: null, heard: null, best: null };
-  if (!line) throw new AppError("refused", `${role.name} has no vocal line yet. Read a score or type the line in first.`);
-  if (!onFile.best) throw new AppError("refused", `There is no range on file for ${person.name}. Hear one, or ask the singer to give it.`);
+  if (!line)
+    throw new AppError(
+      "refused",
+      `${role.name} has no vocal line yet. Read a score or type the line in first.`,
+    );
+  if (!onFile.best)
+    throw new AppError(
+      "refused",
+      `There is no range on file for ${person.name}. Hear one, or ask the singer to give it.`,
+    );
   const singer = toSingerRange(onFile.best);
   const whole = rangeFit(singer, line);
   return {
@@ -136,7 +232,14 @@ export async function computeFit(actor: Actor, input: z.output<typeof fitSchema>
     whole: { ...whole, words: fitInWords(whole) },
     numbers: own.map((each) => {
       const fit = rangeFit(singer, each);
-      return { numberId: each.numberId, label: each.label, title: each.title, line: { low: each.low, high: each.high }, fit, words: fitInWords(fit) };
+      return {
+        numberId: each.numberId,
+        label: each.label,
+        title: each.title,
+        line: { low: each.low, high: each.high },
+        fit,
+        words: fitInWords(fit),
+      };
     }),
   };
 }

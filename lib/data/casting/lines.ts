@@ -9,7 +9,12 @@ import { mergeLines } from "@/lib/music/merge-lines";
 import { rangeFit } from "@/lib/music/range-fit";
 import type { FitVerdict, SingerRange, VocalLine } from "@/lib/music/types";
 
-export type LineRow = VocalLine & { roleId: string; numberId: string; label: string; title: string };
+export type LineRow = VocalLine & {
+  roleId: string;
+  numberId: string;
+  label: string;
+  title: string;
+};
 
 /** A singer against a role in a word or a few; without a verdict where the words say what is missing. */
 export type FitWords = { verdict: FitVerdict | null; words: string };
@@ -18,8 +23,15 @@ export type FitWords = { verdict: FitVerdict | null; words: string };
 export async function linesOf(productionId: string): Promise<LineRow[]> {
   const rows = await db
     .select({
-      roleId: vocalLines.roleId, numberId: numbers.id, label: numbers.label, title: numbers.title, low: vocalLines.low, high: vocalLines.high,
-      optionalLow: vocalLines.optionalLow, optionalHigh: vocalLines.optionalHigh, histogram: vocalLines.histogram,
+      roleId: vocalLines.roleId,
+      numberId: numbers.id,
+      label: numbers.label,
+      title: numbers.title,
+      low: vocalLines.low,
+      high: vocalLines.high,
+      optionalLow: vocalLines.optionalLow,
+      optionalHigh: vocalLines.optionalHigh,
+      histogram: vocalLines.histogram,
     })
     .from(vocalLines)
     .innerJoin(numbers, and(eq(numbers.id, vocalLines.numberId), isNull(numbers.removedAt)))
@@ -45,7 +57,12 @@ export function wholeLines(lines: readonly LineRow[]): Map<string, VocalLine> {
 
 /** A range on file as the arithmetic takes it. */
 export function toSingerRange(range: RangeOnFile): SingerRange {
-  return { low: range.low, high: range.high, comfortableLow: range.comfortableLow ?? undefined, comfortableHigh: range.comfortableHigh ?? undefined };
+  return {
+    low: range.low,
+    high: range.high,
+    comfortableLow: range.comfortableLow ?? undefined,
+    comfortableHigh: range.comfortableHigh ?? undefined,
+  };
 }
 
 /** The verdict on a range against a line, with its words. */

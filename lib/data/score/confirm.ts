@@ -178,15 +178,13 @@ async function placeRoles(
       }
       roleId = newId();
       made.set(key, roleId);
-      await tx
-        .insert(roles)
-        .values({
-          id: roleId,
-          productionId,
-          name: plan.name,
-          kind: plan.kind,
-          place: await nextRolePlace(tx, productionId),
-        });
+      await tx.insert(roles).values({
+        id: roleId,
+        productionId,
+        name: plan.name,
+        kind: plan.kind,
+        place: await nextRolePlace(tx, productionId),
+      });
     }
     roleOf.set(plan.scorePartId, roleId);
   }

@@ -26,14 +26,12 @@ export async function addNumber(
     await lockScore(tx, scope.id);
     await assertLabelFree(tx, scope.id, input.label, null);
     const id = newId();
-    await tx
-      .insert(numbers)
-      .values({
-        id,
-        productionId: scope.id,
-        place: await nextNumberPlace(tx, scope.id),
-        ...numberColumns(input),
-      });
+    await tx.insert(numbers).values({
+      id,
+      productionId: scope.id,
+      place: await nextNumberPlace(tx, scope.id),
+      ...numberColumns(input),
+    });
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
       productionId: scope.id,

@@ -18,7 +18,7 @@ type Input = {
 };
 
 /**
- * What cannot stand among the events. People are told apart by login where they have one, so that one person in two
+ * What cannot stand among the events, as far as it is the actor's to mend or their own. People are told apart by login where they have one, so that one person in two
  * companies is found; of what they do in productions the actor may not see, only the time is used.
  */
 export async function readClashes(
@@ -101,12 +101,19 @@ export async function readClashes(
     travel,
   });
   const mayKnow = new Set(productions.filter((p) => p.sees.conflicts).map((p) => p.id));
+  const planned = new Set(productions.filter((p) => p.plans).map((p) => p.id));
   const productionOf = new Map(events.map((event) => [event.id, event.productionId]));
   const standing = found.flatMap((clash) => {
     const sides = clash.calls.map((id) => eventOf.get(id) ?? null);
     const eventIds = sides.filter((id) => id !== null);
     const [first] = eventIds;
     if (first === undefined || (eventIds.length === 2 && eventIds[1] === first)) return [];
+    // Clashes are for those who plan one of the calls, and for the person themselves.
+    if (
+      clash.who !== actor.userId &&
+      !eventIds.some((id) => planned.has(productionOf.get(id) ?? ""))
+    )
+      return [];
     if (clash.kind === "conflict") {
       // A conflict was told to one company, and is for those of its productions who plan calls.
       if (clash.conflict !== companyOf.get(first)) return [];

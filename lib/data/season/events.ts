@@ -35,10 +35,7 @@ export async function readEvents(
   const found = await Promise.all([
     readAuditions(idsOf(productions, "auditions"), window, ownIn),
     readRounds(idsOf(productions, "callbacks"), window, ownIn),
-    readCalls(
-      productions.map((p) => p.id),
-      window,
-    ),
+    readCalls(productions, window),
   ]);
   return {
     events: found
@@ -195,7 +192,12 @@ async function readRounds(ids: string[], window: Interval, ownIn: OwnIn): Promis
   return { events, held };
 }
 
-async function readCalls(ids: string[], window: Interval): Promise<Found> {
+/** Drafts are for those who plan; nobody else is told of a call before it is published. */
+async function readCalls(
+  productions: readonly SeasonProduction[],
+  window: Interval,
+): Promise<Found> {
+  const planned = productions.filter((p) => p.plans).map((p) => p.id);
   const rows = await db
     .select({
       id: calls.id,
@@ -215,8 +217,16 @@ async function readCalls(ids: string[], window: Interval): Promise<Found> {
     .leftJoin(rooms, eq(rooms.id, calls.roomId))
     .where(
       and(
-        inArray(calls.productionId, ids),
-        ne(calls.state, "cancelled"),
+        inArray(
+          calls.productionId,
+          productions.map((p) => p.id),
+        ),
+        or(
+          eq(calls.state, "published"),
+          planned.length > 0
+            ? and(eq(calls.state, "draft"), inArray(calls.productionId, planned))
+            : undefined,
+        ),
         lt(calls.startsAt, window.to),
         gt(calls.endsAt, window.from),
       ),

@@ -14,6 +14,8 @@ export type SeasonProduction = ProductionListed & {
   };
   /** Whether the actor leads its music, and so hears its auditions and callbacks. */
   leads: boolean;
+  /** Whether the actor may move its calls. */
+  plans: boolean;
 };
 
 export type SeasonEventKind = "audition" | "callback" | CallKind;

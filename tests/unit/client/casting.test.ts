@@ -35,7 +35,7 @@ function singer(name: string, low: number | null, high: number, roles: GridRole[
       ? null
       : { low, high, comfortableLow: null, comfortableHigh: null, kind: "claimed" as const };
   const cells = roles.map((one) => {
-    const verdict = range && one.line ? rangeFit(range, one.line).verdict : null;
+    const verdict = low !== null && one.line ? rangeFit({ low, high }, one.line).verdict : null;
     return [one.id, { verdict, words: verdict ?? "", choice: null }] as const;
   });
   return {

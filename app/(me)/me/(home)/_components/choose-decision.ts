@@ -1,18 +1,21 @@
 import type { OwnSlot } from "@/lib/data/auditions/own";
 import type { OwnCallback } from "@/lib/data/callbacks/own";
 import type { OwnInvitation } from "@/lib/data/invitations";
+import type { OwnSheetListed } from "@/lib/data/sheets/own";
 import { fromCallback, fromSlot } from "./upcoming";
 import type { Upcoming } from "./upcoming";
 
 export type Decision =
   | { kind: "invitation"; id: string; invitation: OwnInvitation }
   | { kind: "slot"; id: string; slot: OwnSlot }
-  | { kind: "callback"; id: string; callback: OwnCallback };
+  | { kind: "callback"; id: string; callback: OwnCallback }
+  | { kind: "sheet"; id: string; sheet: OwnSheetListed };
 
 export type Own = {
   invitations: readonly OwnInvitation[];
   slots: readonly OwnSlot[];
   callbacks: readonly OwnCallback[];
+  sheets: readonly OwnSheetListed[];
 };
 
 export type Chosen = {
@@ -20,7 +23,7 @@ export type Chosen = {
   shown: Decision | null;
   /** What waits besides. */
   waiting: Decision[];
-  /** What is settled and still to come, in order. */
+  /** What is settled and still to come. */
   upcoming: Upcoming[];
 };
 
@@ -38,6 +41,9 @@ export function chooseDecision(own: Own, asked: unknown, now: Date): Chosen {
     })),
     ...slots.filter((slot) => slot.state === "invited").map(slotDecision),
     ...callbacks.filter((callback) => callback.answer === null).map(callbackDecision),
+    ...own.sheets
+      .filter((sheet) => sheet.acknowledgedAt === null)
+      .map((sheet) => ({ kind: "sheet" as const, id: sheet.issueId, sheet })),
   ];
   const settled = [
     ...slots.filter((slot) => slot.state !== "invited").map(slotDecision),
@@ -47,10 +53,7 @@ export function chooseDecision(own: Own, asked: unknown, now: Date): Chosen {
   return {
     shown,
     waiting: open.filter((decision) => decision !== shown),
-    upcoming: settled
-      .filter((decision) => decision !== shown)
-      .flatMap(toUpcoming)
-      .sort((a, b) => a.startsAt.getTime() - b.startsAt.getTime()),
+    upcoming: settled.filter((decision) => decision !== shown).flatMap(toUpcoming),
   };
 }
 
@@ -64,6 +67,7 @@ const callbackDecision = (callback: OwnCallback): Decision => ({
 function toUpcoming(decision: Decision): Upcoming[] {
   switch (decision.kind) {
     case "invitation":
+    case "sheet":
       return [];
     case "slot":
       return [fromSlot(decision.slot)];

@@ -1,5 +1,5 @@
 import type { Decision } from "./choose-decision";
-import { CallbackDecision, InvitationDecision, SlotDecision } from "./decisions";
+import { CallbackDecision, InvitationDecision, SheetDecision, SlotDecision } from "./decisions";
 
 export function DecisionShown({ decision }: { decision: Decision }) {
   switch (decision.kind) {
@@ -9,5 +9,7 @@ export function DecisionShown({ decision }: { decision: Decision }) {
       return <SlotDecision slot={decision.slot} />;
     case "callback":
       return <CallbackDecision callback={decision.callback} />;
+    case "sheet":
+      return <SheetDecision sheet={decision.sheet} />;
   }
 }

@@ -1,8 +1,12 @@
+import type { Route } from "next";
+import Link from "next/link";
 import { answerCallback, answerSlot, joinCompany } from "@/app/(me)/actions";
 import type { OwnSlot } from "@/lib/data/auditions/own";
 import type { OwnCallback } from "@/lib/data/callbacks/own";
 import type { OwnInvitation } from "@/lib/data/invitations";
+import type { OwnSheetListed } from "@/lib/data/sheets/own";
 import { clock, localDay, longDay } from "@/lib/format-dates";
+import { Button } from "@/components/ui/button";
 import { AnswerButtons } from "./answer-buttons";
 import { DecisionFrame, Prepare, WhenAndWhere } from "./decision-frame";
 
@@ -103,6 +107,30 @@ export function CallbackDecision({ callback }: { callback: OwnCallback }) {
           { label: "I can’t", action: answer("no"), said: "They know that you can’t." },
         ]}
       />
+    </DecisionFrame>
+  );
+}
+
+export function SheetDecision({ sheet }: { sheet: OwnSheetListed }) {
+  return (
+    <DecisionFrame
+      title={sheet.number === 1 ? "A call sheet for you" : "The call sheet has changed"}
+      sub={
+        <>
+          <cite>{sheet.production}</cite>, {sheet.company} · issue {sheet.number}
+        </>
+      }
+    >
+      <WhenAndWhere day={longDay(sheet.localDate)} time={sheet.from ?? "not called"}>
+        {sheet.releasedAt === null
+          ? "You were called by an earlier issue."
+          : `free to go at ${sheet.releasedAt}`}
+      </WhenAndWhere>
+      <div className="mt-4 flex">
+        <Button asChild kind="primary" size="large" className="flex-1">
+          <Link href={`/me/call-sheets/${sheet.issueId}` as Route}>Read and acknowledge</Link>
+        </Button>
+      </div>
     </DecisionFrame>
   );
 }

@@ -1,4 +1,3 @@
-import type { Route } from "next";
 import Link from "next/link";
 import { PageTitle } from "@/components/layout/page-title";
 import { Button } from "@/components/ui/button";
@@ -13,7 +12,7 @@ export function NothingYet({ email }: { email: string }) {
         title="No company yet"
         action={
           <Button asChild kind="primary" size="large">
-            <Link href={"/companies/new" as Route}>Start a company</Link>
+            <Link href={"/companies/new"}>Start a company</Link>
           </Button>
         }
       >

@@ -32,7 +32,8 @@ export function OwnRanges({ records }: { records: readonly OwnRecord[] }) {
         if (!first || !best) {
           return (
             <p key={companies} className="text-ink-2">
-              {named}none yet. With it they can see which roles may suit you.
+              {named === "" ? "None yet." : `${named}none yet.`} With it they can see which roles
+              may suit you.
             </p>
           );
         }

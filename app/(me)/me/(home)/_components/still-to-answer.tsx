@@ -18,6 +18,12 @@ function inWords(decision: Decision): { what: string; work: string; day: string 
         work: decision.slot.production,
         day: shortDay(decision.slot.localDate),
       };
+    case "sheet":
+      return {
+        what: "Call sheet",
+        work: decision.sheet.production,
+        day: shortDay(decision.sheet.localDate),
+      };
     case "callback": {
       const { startsAt, zone, production } = decision.callback;
       return {

@@ -9,7 +9,7 @@ const ANSWERS = {
 
 const UNSENT = {
   new: "not sent yet",
-  changed: "change not sent yet",
+  changed: "not sent yet",
   off: "to be taken off",
   none: null,
 };

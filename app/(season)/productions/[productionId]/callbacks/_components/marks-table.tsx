@@ -156,7 +156,7 @@ export function MarksTable({ draft, singers, roles, onMark, onHear }: MarksTable
                     role={cellRole}
                     className={cx(
                       cellClass,
-                      "min-w-28 border-l px-2 py-2.5 max-md:col-span-2 max-md:border-l-0 max-md:px-3",
+                      "min-w-32 border-l px-2 py-2.5 max-md:col-span-2 max-md:border-l-0 max-md:px-3",
                     )}
                   >
                     <AnswerCell singer={singer} published />

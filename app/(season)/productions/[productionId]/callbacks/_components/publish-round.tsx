@@ -64,6 +64,7 @@ export function PublishRound({
       trigger={<Button kind="primary">{label}</Button>}
       title={again ? "Publish the changes?" : "Publish the list?"}
       confirmLabel="Publish"
+      confirmKind="primary"
       cancelLabel="Not yet"
       onConfirm={publish}
     >

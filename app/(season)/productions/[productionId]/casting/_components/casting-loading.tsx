@@ -10,7 +10,10 @@ export function CastingLoading() {
       <div className="grid gap-8 lg:grid-cols-[minmax(0,1fr)_18.75rem] xl:gap-12">
         <div className="border-y-2 border-ink bg-sheet">
           {Array.from({ length: 6 }, (_, row) => (
-            <div key={row} className="flex h-28 items-center gap-8 border-b border-rule px-3">
+            <div
+              key={row}
+              className="flex h-28 items-center gap-4 border-b border-rule px-3 md:gap-8"
+            >
               <Skeleton className="h-5 w-36" />
               <Skeleton className="h-16 w-14" />
               <Skeleton className="h-16 w-14" />

@@ -150,15 +150,16 @@ export function GridTable({ grid, singers, selected, onSelect, sortedBy, onSort 
                       role="gridcell"
                       aria-selected={isSelected}
                       onClick={(event: MouseEvent<HTMLTableCellElement>) => {
-                        event.currentTarget.focus();
+                        event.currentTarget.focus({ preventScroll: true });
                         onSelect(where, false);
                       }}
                       onKeyDown={(event) => press(event, where)}
                       className={cx(
-                        "relative cursor-pointer scroll-mt-40 scroll-ml-48 border-b border-l border-rule align-middle -outline-offset-2 group-last:border-b-0 hover:bg-paper",
+                        "relative cursor-pointer scroll-mt-40 scroll-ml-48 border-b border-l border-rule align-middle -outline-offset-2 group-last:border-b-0",
                         roomy ? "h-28 min-w-36 px-3 py-2" : "h-36 min-w-24 px-3 py-2",
-                        isSelected &&
-                          "bg-bone shadow-[inset_0_0_0_2px_var(--color-ink)] hover:bg-bone",
+                        isSelected
+                          ? "bg-bone shadow-[inset_0_0_0_2px_var(--color-ink)]"
+                          : "hover:bg-paper",
                       )}
                       {...keys.cell(row, column)}
                     >

@@ -49,6 +49,7 @@ export function PublishCast({ productionId, grid }: { productionId: string; grid
       trigger={<Button kind="primary">Publish the cast list</Button>}
       title="Publish the cast list?"
       confirmLabel="Publish"
+      confirmKind="primary"
       cancelLabel="Not yet"
       onConfirm={() => publish(true)}
     >

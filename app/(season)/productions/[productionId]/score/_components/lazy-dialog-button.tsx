@@ -41,6 +41,8 @@ export function LazyDialogButton({ children, kind = "secondary", load, dialog }:
   );
   if (!wanted) return button;
   return (
-    <Suspense fallback={button}>{dialog({ trigger: button, open, onOpenChange: setOpen })}</Suspense>
+    <Suspense fallback={button}>
+      {dialog({ trigger: button, open, onOpenChange: setOpen })}
+    </Suspense>
   );
 }

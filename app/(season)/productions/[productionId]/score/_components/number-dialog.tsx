@@ -68,7 +68,7 @@ function AddForm({ productionId, onDone }: { productionId: string; onDone: () =>
     <ActionForm state={state} submitLabel="Add the number">
       <NumberFields
         register={state.form.register as unknown as UseFormRegister<NumberFieldValues>}
-        errors={state.form.formState.errors as FieldErrors<NumberFieldValues>}
+        errors={state.form.formState.errors}
       />
     </ActionForm>
   );
@@ -101,7 +101,7 @@ function ChangeForm({
     <ActionForm state={state} submitLabel="Keep the changes">
       <NumberFields
         register={state.form.register as unknown as UseFormRegister<NumberFieldValues>}
-        errors={state.form.formState.errors as FieldErrors<NumberFieldValues>}
+        errors={state.form.formState.errors}
       />
     </ActionForm>
   );

@@ -41,8 +41,8 @@ export function OctaveNotice({ looks, role, number, reaches, mayChange, ...part 
         ),
       })}
     >
-      As written it lies mostly outside {looks.voice}’s range and reaches {reaches}. A clef without
-      its 8 does that. Compare it with the printed score.
+      As it stands it lies mostly outside {looks.voice}’s range and reaches {reaches}. A clef
+      without its 8 does that. Compare it with the printed score.
     </Notice>
   );
 }

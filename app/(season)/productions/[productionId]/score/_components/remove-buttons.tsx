@@ -10,7 +10,17 @@ import { tell } from "./tell";
 type Act = () => Promise<ActionResult<unknown>>;
 
 /** Removes at once, with the way back in the message. */
-function RemoveButton({ name, remove, restore }: { name: string; remove: Act; restore: Act }) {
+function RemoveButton({
+  children,
+  name,
+  remove,
+  restore,
+}: {
+  children: string;
+  name: string;
+  remove: Act;
+  restore: Act;
+}) {
   const [pending, setPending] = useState(false);
   return (
     <PendingButton
@@ -32,7 +42,7 @@ function RemoveButton({ name, remove, restore }: { name: string; remove: Act; re
         });
       }}
     >
-      Remove
+      {children}
     </PendingButton>
   );
 }
@@ -52,7 +62,9 @@ export function RemoveNumberButton({
       name={`Number ${name}`}
       remove={() => removeNumber(which)}
       restore={() => restoreNumber(which)}
-    />
+    >
+      Remove the number
+    </RemoveButton>
   );
 }
 
@@ -67,6 +79,8 @@ export function RemoveRoleButton({
 }) {
   const which = { productionId, roleId };
   return (
-    <RemoveButton name={name} remove={() => removeRole(which)} restore={() => restoreRole(which)} />
+    <RemoveButton name={name} remove={() => removeRole(which)} restore={() => restoreRole(which)}>
+      Remove the role
+    </RemoveButton>
   );
 }

@@ -34,7 +34,7 @@ export function EditNumberButton({
       load={loadNumber}
       dialog={(props) => <NumberDialog {...props} productionId={productionId} number={number} />}
     >
-      Change
+      Change the number
     </LazyDialogButton>
   );
 }
@@ -56,7 +56,7 @@ export function EditRoleButton({ productionId, role }: { productionId: string; r
       load={loadRole}
       dialog={(props) => <RoleDialog {...props} productionId={productionId} role={role} />}
     >
-      Change
+      Change the role
     </LazyDialogButton>
   );
 }

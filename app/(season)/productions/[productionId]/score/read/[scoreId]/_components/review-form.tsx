@@ -118,8 +118,8 @@ export function ReviewForm({
               </Field>
             )}
             <NumberFields
-              register={form.register as unknown as UseFormRegister<NumberFieldValues>}
-              errors={form.formState.errors as FieldErrors<NumberFieldValues>}
+              register={form.register}
+              errors={form.formState.errors}
               {...(proposed.keyFifths !== null && {
                 keyHint: `The score shows ${signatureInWords(proposed.keyFifths)}; small letters are minor`,
               })}

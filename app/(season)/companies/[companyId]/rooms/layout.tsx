@@ -1,0 +1,14 @@
+import { orNotFound } from "@/lib/auth/deny";
+import { pageActor } from "@/lib/auth/get-actor";
+import { companyFor } from "@/lib/data/guard";
+
+/** Asks for permission outside the loading state, so that a refusal answers 404 before anything is sent. */
+export default async function RoomsLayout({
+  children,
+  params,
+}: LayoutProps<"/companies/[companyId]/rooms">) {
+  const { companyId } = await params;
+  const actor = await pageActor(`/companies/${companyId}/rooms`);
+  await orNotFound(companyFor(actor, companyId, "rooms:manage"));
+  return children;
+}

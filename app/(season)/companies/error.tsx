@@ -1,0 +1,19 @@
+"use client";
+
+import { Button } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+
+export default function CompaniesError({ retry }: { retry: () => void }) {
+  return (
+    <EmptyState
+      title="The companies could not be shown"
+      action={
+        <Button kind="primary" onClick={() => retry()}>
+          Try again
+        </Button>
+      }
+    >
+      Something went wrong on our side. Everything in them is as it was.
+    </EmptyState>
+  );
+}

@@ -1,0 +1,14 @@
+import { orNotFound } from "@/lib/auth/deny";
+import { pageActor } from "@/lib/auth/get-actor";
+import { productionFor } from "@/lib/data/guard";
+
+/** Asks for permission outside the loading state, so that a refusal answers 404 before anything is sent. */
+export default async function CallSheetsLayout({
+  children,
+  params,
+}: LayoutProps<"/productions/[productionId]/call-sheets">) {
+  const { productionId } = await params;
+  const actor = await pageActor(`/productions/${productionId}/call-sheets`);
+  await orNotFound(productionFor(actor, productionId, "sheets:read"));
+  return children;
+}

@@ -1,0 +1,19 @@
+"use client";
+
+import { Button } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+
+export default function ProductionError({ retry }: { retry: () => void }) {
+  return (
+    <EmptyState
+      title="This page could not be shown"
+      action={
+        <Button kind="primary" onClick={() => retry()}>
+          Try again
+        </Button>
+      }
+    >
+      Something went wrong on our side. What was saved in this production is kept.
+    </EmptyState>
+  );
+}

@@ -1,0 +1,18 @@
+import Link from "next/link";
+import { Button } from "@/components/ui/button";
+import { EmptyState } from "@/components/ui/empty-state";
+
+export default function ProductionNotFound() {
+  return (
+    <EmptyState
+      title="This is not here"
+      action={
+        <Button asChild>
+          <Link href="/season">Back to your season</Link>
+        </Button>
+      }
+    >
+      It may have been removed, or it is not for your position in the production.
+    </EmptyState>
+  );
+}

@@ -1,0 +1,50 @@
+import type { LadderRow } from "@/components/schedule/call-ladder";
+import type { CallBlockRead } from "@/lib/data/calls/read";
+
+/** Above so many people with the same roles and the same blocks, one row stands for all of them. */
+const ROWS_EACH = 3;
+
+type Person = { personId: string; name: string; roles: string; blockIds: string[]; reason: string | null };
+
+/**
+ * The rows of a call's ladder: a role and who sings it, in the order they come; a crowd that is needed in
+ * the same blocks under the same role is one row with its number.
+ */
+export function ladderRows(blocks: readonly CallBlockRead[]): LadderRow[] {
+  const people = new Map<string, Person & { roleSet: Set<string> }>();
+  for (const block of blocks) {
+    for (const called of block.called) {
+      if (called.excused) continue;
+      const person = people.get(called.personId) ?? {
+        personId: called.personId,
+        name: called.name,
+        roles: "",
+        roleSet: new Set<string>(),
+        blockIds: [],
+        reason: called.source === "hand" ? called.reason : null,
+      };
+      for (const role of called.roles) person.roleSet.add(role);
+      person.blockIds.push(block.key);
+      people.set(called.personId, person);
+    }
+  }
+  const groups = new Map<string, Person[]>();
+  for (const { roleSet, ...person } of people.values()) {
+    const roles = [...roleSet].join(", ");
+    const name = `${roles} ${person.blockIds.join(" ")}`;
+    groups.set(name, [...(groups.get(name) ?? []), { ...person, roles }]);
+  }
+  return [...groups.values()].flatMap((group): LadderRow[] => {
+    const [first] = group;
+    if (!first) return [];
+    if (group.length > ROWS_EACH && first.roles !== "") {
+      return [{ id: first.personId, name: first.roles, sub: `${String(group.length)} singers`, blockIds: first.blockIds }];
+    }
+    return group.map((person) => ({
+      id: person.personId,
+      name: person.roles === "" ? person.name : person.roles,
+      sub: person.roles === "" ? (person.reason ?? "called by hand") : person.name,
+      blockIds: person.blockIds,
+    }));
+  });
+}

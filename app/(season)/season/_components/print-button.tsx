@@ -1,0 +1,7 @@
+"use client";
+
+import { Button } from "@/components/ui/button";
+
+export function PrintButton({ children }: { children: string }) {
+  return <Button onClick={() => window.print()}>{children}</Button>;
+}
