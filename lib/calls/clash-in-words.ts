@@ -50,7 +50,9 @@ function wordsOf(plan: CallPlan, facts: CallFacts, clash: FoundClash): string {
 function adviceOf(plan: CallPlan, clash: FoundClash, remedies: Remedy[]): string {
   if (remedies.length > 0) return "";
   if (clash.kind === "room") return "No other room is free then. Choose another day or time.";
-  if (clash.personId === plan.pianistId) return "No other accompanist of the production is free then. Choose another day or time, or call without a pianist.";
-  if (clash.personId === plan.leaderId) return "Choose somebody else to lead, or another day or time.";
+  if (clash.personId === plan.pianistId)
+    return "No other accompanist of the production is free then. Choose another day or time, or call without a pianist.";
+  if (clash.personId === plan.leaderId)
+    return "Choose somebody else to lead, or another day or time.";
   return "Choose another day or time, or leave them out.";
 }

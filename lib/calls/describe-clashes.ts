@@ -6,7 +6,11 @@ import { nearestFreeStart } from "./nearest-free-start";
 import type { CallFacts, CallPlan, ClashInWords } from "./types";
 
 /** Every clash of a call in words, with what to do; the whole call may be moved inside `within`. */
-export function describeClashes(plan: CallPlan, facts: CallFacts, within: Interval): ClashInWords[] {
+export function describeClashes(
+  plan: CallPlan,
+  facts: CallFacts,
+  within: Interval,
+): ClashInWords[] {
   const clashes = findCallClashes(plan, facts);
   if (clashes.length === 0) return [];
   const freeStart = nearestFreeStart(plan, facts, within);

@@ -54,7 +54,15 @@ export function findCallClashes(plan: CallPlan, facts: CallFacts): FoundClash[] 
     }));
   const held: ScheduledCall[] = facts.bookings.flatMap((booking, index) =>
     booking.roomId === plan.roomId && isOther(booking.callId)
-      ? [{ id: `room ${index}`, from: booking.from, to: booking.to, people: [], room: booking.roomId }]
+      ? [
+          {
+            id: `room ${index}`,
+            from: booking.from,
+            to: booking.to,
+            people: [],
+            room: booking.roomId,
+          },
+        ]
       : [],
   );
   const conflicts = facts.conflicts
@@ -62,7 +70,11 @@ export function findCallClashes(plan: CallPlan, facts: CallFacts): FoundClash[] 
     .map(({ id, from, to, personId }) => ({ id, from, to, person: keyOf(personId) }));
 
   const found = new Map<string, FoundClash>();
-  for (const clash of findClashes({ calls: [...own, ...others, ...held], conflicts, travel: facts.travel })) {
+  for (const clash of findClashes({
+    calls: [...own, ...others, ...held],
+    conflicts,
+    travel: facts.travel,
+  })) {
     const withId = otherSide(clash);
     if (withId === null) continue;
     const personId = clash.kind === "room" ? null : (personOf.get(clash.who) ?? null);

@@ -30,7 +30,11 @@ export function findRemedies(
   if (clash.personId !== null && clash.personId === plan.pianistId) {
     remedies.push(...otherPianists(plan, facts, solves));
   }
-  if (clash.personId !== null && clash.personId !== plan.pianistId && clash.personId !== plan.leaderId) {
+  if (
+    clash.personId !== null &&
+    clash.personId !== plan.pianistId &&
+    clash.personId !== plan.leaderId
+  ) {
     remedies.push(...otherOrder(plan, clash, clash.personId, solves));
     remedies.push(...withoutThem(plan, facts, clash, clash.personId, solves));
   }
@@ -71,7 +75,9 @@ function otherRooms(plan: CallPlan, facts: CallFacts, solves: Test): Remedy[] {
 
 function otherPianists(plan: CallPlan, facts: CallFacts, solves: Test): Remedy[] {
   return facts.pianists
-    .filter(({ personId }) => personId !== plan.pianistId && solves({ ...plan, pianistId: personId }))
+    .filter(
+      ({ personId }) => personId !== plan.pianistId && solves({ ...plan, pianistId: personId }),
+    )
     .slice(0, AT_MOST)
     .map(({ personId, name }) => ({ kind: "pianist", label: `${name} plays instead`, personId }));
 }
@@ -106,7 +112,13 @@ function otherOrder(plan: CallPlan, clash: FoundClash, personId: string, solves:
   return [];
 }
 
-function withoutThem(plan: CallPlan, facts: CallFacts, clash: FoundClash, personId: string, solves: Test): Remedy[] {
+function withoutThem(
+  plan: CallPlan,
+  facts: CallFacts,
+  clash: FoundClash,
+  personId: string,
+  solves: Test,
+): Remedy[] {
   const theirs = plan.blocks.filter((block) => calledTo(block).includes(personId));
   const met = theirs.filter((block) => overlaps(block, clash));
   const name = facts.names.get(personId) ?? "them";
@@ -117,7 +129,8 @@ function withoutThem(plan: CallPlan, facts: CallFacts, clash: FoundClash, person
         : block,
     );
     if (!solves({ ...plan, blocks })) continue;
-    const from = leave.length === theirs.length ? "" : ` out of ${listOf(leave.map((b) => b.title))}`;
+    const from =
+      leave.length === theirs.length ? "" : ` out of ${listOf(leave.map((b) => b.title))}`;
     return [
       {
         kind: "excuse",

@@ -61,7 +61,12 @@ function forbiddenStarts(plan: CallPlan, facts: CallFacts): Interval[] {
   return forbidden;
 }
 
-function withTravel(busy: Interval, here: string | null, there: string | null, facts: CallFacts): Interval {
+function withTravel(
+  busy: Interval,
+  here: string | null,
+  there: string | null,
+  facts: CallFacts,
+): Interval {
   if (here === null || there === null || here === there) return busy;
   const minutes = facts.travel
     .filter(({ a, b }) => (a === here && b === there) || (a === there && b === here))

@@ -6,7 +6,8 @@ import { readJson } from "./read-json";
 export function callClashesQuery(productionId: string, callId: string) {
   return queryOptions({
     queryKey: ["call-clashes", callId],
-    queryFn: () => readJson<CallClashes>(`/api/productions/${productionId}/calls/${callId}/clashes`),
+    queryFn: () =>
+      readJson<CallClashes>(`/api/productions/${productionId}/calls/${callId}/clashes`),
     refetchInterval: 20_000,
   });
 }

@@ -145,7 +145,12 @@ async function writeConflict(
       c.timeFrom === dates.timeFrom &&
       c.timeTo === dates.timeTo,
   );
-  if (same) return same.id;
+  if (same) {
+    // The same time told again: what is said of it now counts.
+    if (input.reason !== null)
+      await tx.update(conflicts).set({ reason: input.reason }).where(eq(conflicts.id, same.id));
+    return same.id;
+  }
   if (open.length >= MOST_OPEN)
     throw new AppError(
       "refused",

@@ -53,7 +53,10 @@ const draftShape = {
     .array(blockSchema)
     .min(1, "Add at least one block: a number, a scene or a warm-up.")
     .max(60, "At most 60 blocks in one call.")
-    .refine((blocks) => new Set(blocks.map((block) => block.key)).size === blocks.length, "The same block is there twice. Take one out.")
+    .refine(
+      (blocks) => new Set(blocks.map((block) => block.key)).size === blocks.length,
+      "The same block is there twice. Take one out.",
+    )
     .refine(
       (blocks) => blocks.reduce((sum, block) => sum + block.minutes, 0) <= MOST_MINUTES,
       "A call cannot be longer than a day. Shorten it, or make two.",
@@ -70,7 +73,10 @@ export const changeCallSchema = z.object({
 });
 
 /** A call as it stands in the form, saved before or not. */
-export const checkCallSchema = z.object({ ...draftShape, callId: idField.nullish().transform((id) => id ?? null) });
+export const checkCallSchema = z.object({
+  ...draftShape,
+  callId: idField.nullish().transform((id) => id ?? null),
+});
 
 export type CallDraft = z.output<typeof createCallSchema>;
 export type CallForm = z.input<typeof createCallSchema>;

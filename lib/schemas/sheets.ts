@@ -11,7 +11,12 @@ export const issueSheetSchema = z.object({
     .string()
     .max(1200, "Keep the notes to 1,200 characters.")
     .nullish()
-    .transform((text) => (text ?? "").split("\n").map((line) => line.trim()).filter((line) => line !== ""))
+    .transform((text) =>
+      (text ?? "")
+        .split("\n")
+        .map((line) => line.trim())
+        .filter((line) => line !== ""),
+    )
     .pipe(z.array(z.string()).max(8, "Keep the notes to 8 lines.")),
 });
 

@@ -25,25 +25,45 @@ beforeEach(async () => {
 type Invited = { token: string; personId: string; positionId: string; email: string };
 
 /** A record and a position in a company, with an invitation to it. */
-async function invite(name: string, options: { email?: string; kind?: PositionKind; companyId?: string; productionId?: string } = {}): Promise<Invited> {
-  const { companyId = world.companyId, productionId = world.productionId, kind = "actor", email = `${name.toLowerCase().replace(/\W+/g, ".")}.${newId().slice(-6)}@people.example` } = options;
+async function invite(
+  name: string,
+  options: { email?: string; kind?: PositionKind; companyId?: string; productionId?: string } = {},
+): Promise<Invited> {
+  const {
+    companyId = world.companyId,
+    productionId = world.productionId,
+    kind = "actor",
+    email = `${name.toLowerCase().replace(/\W+/g, ".")}.${newId().slice(-6)}@people.example`,
+  } = options;
   const personId = newId();
   const positionId = newId();
   await db.insert(people).values({ id: personId, companyId, name, email });
   await db.insert(positions).values({ id: positionId, companyId, productionId, personId, kind });
-  const link = new URL(await makeInvitationLink(db, { userId: world.people.md.userId }, { positionId, email }));
+  const link = new URL(
+    await makeInvitationLink(db, { userId: world.people.md.userId }, { positionId, email }),
+  );
   return { token: link.pathname.split("/").at(-1) ?? "", personId, positionId, email };
 }
 
 const loginOfCookie = async (): Promise<string | undefined> => {
-  const [row] = await db.select({ userId: sessions.userId }).from(sessions).where(eq(sessions.sessionToken, cookieJar().get(sessionCookieName()) ?? ""));
+  const [row] = await db
+    .select({ userId: sessions.userId })
+    .from(sessions)
+    .where(eq(sessions.sessionToken, cookieJar().get(sessionCookieName()) ?? ""));
   return row?.userId;
 };
 
 describe("an invitation", () => {
   test("says who invites, into what and whom", async () => {
     const { token, email } = await invite("Ines Okafor");
-    expect(await showInvitation(token)).toEqual({ company: "Lantern Street Theatre", production: "The Tidewatcher", position: "Actor", name: "Ines Okafor", email, from: "Runa Oake" });
+    expect(await showInvitation(token)).toEqual({
+      company: "Lantern Street Theatre",
+      production: "The Tidewatcher",
+      position: "Actor",
+      name: "Ines Okafor",
+      email,
+      from: "Runa Oake",
+    });
   });
 
   test("accepted, makes the login, links the record, signs in and goes on", async () => {
@@ -53,21 +73,28 @@ describe("an invitation", () => {
     expect(user).toMatchObject({ name: "Jonah Pell", emailVerified: expect.any(Date) });
     expect(await loginOfCookie()).toBe(user?.id);
     const actor = await actorOf(user?.id ?? "");
-    expect(actor.positions).toEqual([{ kind: "actor", companyId: world.companyId, productionId: world.productionId, personId }]);
+    expect(actor.positions).toEqual([
+      { kind: "actor", companyId: world.companyId, productionId: world.productionId, personId },
+    ]);
   });
 
   test("is accepted once: the second time it says so and signs nobody in", async () => {
     const { token } = await invite("Kirsi Vale");
     await redirectOf(acceptInvitation({ token, to: "" }));
     cookieJar().clear();
-    expect(await acceptInvitation({ token, to: "" })).toMatchObject({ ok: false, error: { code: "refused", message: expect.stringMatching(/accepted already. Sign in/) } });
+    expect(await acceptInvitation({ token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "refused", message: expect.stringMatching(/accepted already. Sign in/) },
+    });
     expect(cookieJar().size).toBe(0);
     expect(await db.$count(sessions)).toBe(1);
   });
 
   test("accepted ten times at once makes one login and one session", async () => {
     const { token, email } = await invite("Lior Stamm");
-    const answers = await Promise.allSettled(Array.from({ length: 10 }, () => redirectOf(acceptInvitation({ token, to: "" }))));
+    const answers = await Promise.allSettled(
+      Array.from({ length: 10 }, () => redirectOf(acceptInvitation({ token, to: "" }))),
+    );
     expect(answers.filter((answer) => answer.status === "fulfilled")).toHaveLength(1);
     expect(await db.$count(users, eq(users.email, email))).toBe(1);
     expect(await db.$count(sessions)).toBe(1);
@@ -75,21 +102,41 @@ describe("an invitation", () => {
 
   test("that ran out, was never made, or whose position has ended does nothing", async () => {
     const old = await invite("Mona Reiss");
-    await db.update(invitations).set({ expiresAt: new Date(Date.now() - 1000) }).where(eq(invitations.positionId, old.positionId));
-    expect(await acceptInvitation({ token: old.token, to: "" })).toMatchObject({ ok: false, error: { code: "refused", message: expect.stringMatching(/run out. Ask the company/) } });
-    expect(await acceptInvitation({ token: "x".repeat(43), to: "" })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    await db
+      .update(invitations)
+      .set({ expiresAt: new Date(Date.now() - 1000) })
+      .where(eq(invitations.positionId, old.positionId));
+    expect(await acceptInvitation({ token: old.token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "refused", message: expect.stringMatching(/run out. Ask the company/) },
+    });
+    expect(await acceptInvitation({ token: "x".repeat(43), to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "not-found" },
+    });
     const ended = await invite("Nils Ebert");
-    await db.update(positions).set({ endedAt: new Date() }).where(eq(positions.id, ended.positionId));
-    expect(await acceptInvitation({ token: ended.token, to: "" })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    await db
+      .update(positions)
+      .set({ endedAt: new Date() })
+      .where(eq(positions.id, ended.positionId));
+    expect(await acceptInvitation({ token: ended.token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "not-found" },
+    });
     const gone = await invite("Oona Fry");
     await db.update(people).set({ removedAt: new Date() }).where(eq(people.id, gone.personId));
-    expect(await acceptInvitation({ token: gone.token, to: "" })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    expect(await acceptInvitation({ token: gone.token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "not-found" },
+    });
     expect(await db.$count(sessions)).toBe(0);
   });
 
   test("leads to no other site", async () => {
     const { token } = await invite("Pia Stroud");
-    expect(await redirectOf(acceptInvitation({ token, to: "//evil.example" }))).toBe("/sign-in/done");
+    expect(await redirectOf(acceptInvitation({ token, to: "//evil.example" }))).toBe(
+      "/sign-in/done",
+    );
   });
 
   test("opened by somebody else who is signed in: accepting signs the invited address in, not them", async () => {
@@ -104,7 +151,11 @@ describe("an invitation", () => {
 
   test("accepted by its own login that is signed in keeps the session it has", async () => {
     const { actor } = world.people;
-    const { token } = await invite("Wren Tallis", { email: actor.email, companyId: world.otherCompanyId, productionId: world.otherProductionId });
+    const { token } = await invite("Wren Tallis", {
+      email: actor.email,
+      companyId: world.otherCompanyId,
+      productionId: world.otherProductionId,
+    });
     as(actor.userId);
     await redirectOf(acceptInvitation({ token, to: "" }));
     expect(await db.$count(sessions)).toBe(0);
@@ -114,15 +165,29 @@ describe("an invitation", () => {
   test("to a record that belongs to another login is refused, and can still be put right", async () => {
     const { token, personId, positionId } = await invite("Ravi Thorne");
     await db.update(people).set({ userId: world.strangerId }).where(eq(people.id, personId));
-    expect(await acceptInvitation({ token, to: "" })).toMatchObject({ ok: false, error: { code: "refused", message: expect.stringMatching(/another sign-in/) } });
-    expect(await db.select({ acceptedAt: invitations.acceptedAt }).from(invitations).where(eq(invitations.positionId, positionId))).toEqual([{ acceptedAt: null }]);
+    expect(await acceptInvitation({ token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "refused", message: expect.stringMatching(/another sign-in/) },
+    });
+    expect(
+      await db
+        .select({ acceptedAt: invitations.acceptedAt })
+        .from(invitations)
+        .where(eq(invitations.positionId, positionId)),
+    ).toEqual([{ acceptedAt: null }]);
   });
 
   test("to a second record in a company the login is in already is refused in words", async () => {
     const { director } = world.people;
-    await db.update(people).set({ email: "old.address@people.example" }).where(eq(people.id, director.personId));
+    await db
+      .update(people)
+      .set({ email: "old.address@people.example" })
+      .where(eq(people.id, director.personId));
     const { token } = await invite("Odile Marsh", { email: director.email });
-    expect(await acceptInvitation({ token, to: "" })).toMatchObject({ ok: false, error: { code: "refused", message: expect.stringMatching(/in this company already/) } });
+    expect(await acceptInvitation({ token, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "refused", message: expect.stringMatching(/in this company already/) },
+    });
   });
 });
 
@@ -133,7 +198,12 @@ describe("invitations that wait on one's own page", () => {
     await db.insert(users).values({ id: userId, email, emailVerified: new Date() });
     const { positionId } = await invite("Saskia Wood", { email });
     const [waiting] = await listOwnInvitations(await actorOf(userId));
-    expect(waiting).toMatchObject({ company: "Lantern Street Theatre", position: "Actor", production: "The Tidewatcher", from: "Runa Oake" });
+    expect(waiting).toMatchObject({
+      company: "Lantern Street Theatre",
+      position: "Actor",
+      production: "The Tidewatcher",
+      from: "Runa Oake",
+    });
     expect(await listOwnInvitations(await actorOf(world.people.otherActor.userId))).toEqual([]);
     const input = { invitationId: waiting?.id ?? "" };
     for (const other of [world.people.otherActor, world.people.md, world.people.outsiderMd]) {
@@ -155,8 +225,14 @@ describe("invitations that wait on one's own page", () => {
     await db.insert(users).values({ id: userId, email });
     const { positionId } = await invite("Tove Lind", { email });
     expect(await listOwnInvitations(await actorOf(userId))).toEqual([]);
-    const [row] = await db.select({ id: invitations.id }).from(invitations).where(eq(invitations.positionId, positionId));
+    const [row] = await db
+      .select({ id: invitations.id })
+      .from(invitations)
+      .where(eq(invitations.positionId, positionId));
     as(userId);
-    expect(await joinCompany({ invitationId: row?.id ?? "" })).toMatchObject({ ok: false, error: { code: "not-found" } });
+    expect(await joinCompany({ invitationId: row?.id ?? "" })).toMatchObject({
+      ok: false,
+      error: { code: "not-found" },
+    });
   });
 });

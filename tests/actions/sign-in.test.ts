@@ -14,14 +14,19 @@ const PASSWORD = "four brass lanterns";
 let world: World;
 beforeAll(async () => {
   world = await makeWorld();
-  await db.insert(passwordHashes).values({ userId: world.people.md.userId, hash: await hashPassword(PASSWORD) });
+  await db
+    .insert(passwordHashes)
+    .values({ userId: world.people.md.userId, hash: await hashPassword(PASSWORD) });
 });
 beforeEach(async () => {
   await db.delete(rateCounters);
 });
 
 async function linksTo(email: string): Promise<URL[]> {
-  const rows = await db.select({ data: outbox.data }).from(outbox).where(and(eq(outbox.toEmail, email), eq(outbox.template, "sign-in")));
+  const rows = await db
+    .select({ data: outbox.data })
+    .from(outbox)
+    .where(and(eq(outbox.toEmail, email), eq(outbox.template, "sign-in")));
   return rows.map((row) => new URL(String(row.data["link"])));
 }
 
@@ -47,9 +52,18 @@ describe("asking for a link", () => {
     expect(await linksTo("shouting.person@people.example")).toHaveLength(1);
   });
 
-  test.each(["", "nobody", "a@b.example, c@d.example", "a@b.example\r\nBcc: c@d.example", `${"a".repeat(250)}@b.example`])("%j is refused beside its field", async (email) => {
+  test.each([
+    "",
+    "nobody",
+    "a@b.example, c@d.example",
+    "a@b.example\r\nBcc: c@d.example",
+    `${"a".repeat(250)}@b.example`,
+  ])("%j is refused beside its field", async (email) => {
     const before = await db.$count(outbox);
-    expect(await requestLink({ email, to: "" })).toMatchObject({ ok: false, error: { code: "invalid", fields: { email: expect.any(String) } } });
+    expect(await requestLink({ email, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "invalid", fields: { email: expect.any(String) } },
+    });
     expect(await db.$count(outbox)).toBe(before);
   });
 
@@ -70,27 +84,54 @@ describe("asking for a link", () => {
   });
 
   test("the sixth link to one address within a quarter of an hour is refused, whatever its letters; other addresses go on", async () => {
-    for (let i = 0; i < 5; i += 1) await redirectOf(requestLink({ email: "often@people.example", to: "" }));
-    expect(await requestLink({ email: "OFTEN@people.example", to: "" })).toMatchObject({ ok: false, error: { code: "too-many", message: expect.stringMatching(/Wait \d+ min/) } });
+    for (let i = 0; i < 5; i += 1)
+      await redirectOf(requestLink({ email: "often@people.example", to: "" }));
+    expect(await requestLink({ email: "OFTEN@people.example", to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "too-many", message: expect.stringMatching(/Wait \d+ min/) },
+    });
     expect(await linksTo("often@people.example")).toHaveLength(5);
-    expect(await redirectOf(requestLink({ email: "seldom@people.example", to: "" }))).toBe("/sign-in/sent");
+    expect(await redirectOf(requestLink({ email: "seldom@people.example", to: "" }))).toBe(
+      "/sign-in/sent",
+    );
   });
 
   test("one source cannot send to one address after another without end", async () => {
-    for (let i = 0; i < 40; i += 1) await redirectOf(requestLink({ email: `n${String(i)}@people.example`, to: "" }));
-    expect(await requestLink({ email: "n41@people.example", to: "" })).toMatchObject({ ok: false, error: { code: "too-many" } });
+    for (let i = 0; i < 40; i += 1)
+      await redirectOf(requestLink({ email: `n${String(i)}@people.example`, to: "" }));
+    expect(await requestLink({ email: "n41@people.example", to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "too-many" },
+    });
   });
 });
 
 describe("signing in with a password", () => {
-  const refusal = { ok: false, error: { code: "refused", message: "Address and password do not fit together. Try again, or ask for a link by e-mail." } };
+  const refusal = {
+    ok: false,
+    error: {
+      code: "refused",
+      message: "Address and password do not fit together. Try again, or ask for a link by e-mail.",
+    },
+  };
 
   test("the right one begins a session of that login and leads where it was asked to", async () => {
     const { md } = world.people;
-    expect(await redirectOf(signInWithPassword({ email: md.email.toUpperCase(), password: PASSWORD, to: "/productions" }))).toBe("/productions");
+    expect(
+      await redirectOf(
+        signInWithPassword({
+          email: md.email.toUpperCase(),
+          password: PASSWORD,
+          to: "/productions",
+        }),
+      ),
+    ).toBe("/productions");
     const token = cookieJar().get(sessionCookieName());
     expect(token).toMatch(/^[\w-]{43}$/);
-    const [session] = await db.select().from(sessions).where(eq(sessions.sessionToken, token ?? ""));
+    const [session] = await db
+      .select()
+      .from(sessions)
+      .where(eq(sessions.sessionToken, token ?? ""));
     expect(session?.userId).toBe(md.userId);
     const days = ((session?.expires.getTime() ?? 0) - Date.now()) / 86_400_000;
     expect(Math.round(days)).toBe(30);
@@ -107,22 +148,48 @@ describe("signing in with a password", () => {
 
   test("a wrong one, an unknown address and one without a password get word for word the same answer, and no session", async () => {
     const before = await db.$count(sessions);
-    expect(await signInWithPassword({ email: world.people.md.email, password: "four brass lantern", to: "" })).toEqual(refusal);
-    expect(await signInWithPassword({ email: "nobody@people.example", password: PASSWORD, to: "" })).toEqual(refusal);
-    expect(await signInWithPassword({ email: world.people.actor.email, password: PASSWORD, to: "" })).toEqual(refusal);
+    expect(
+      await signInWithPassword({
+        email: world.people.md.email,
+        password: "four brass lantern",
+        to: "",
+      }),
+    ).toEqual(refusal);
+    expect(
+      await signInWithPassword({ email: "nobody@people.example", password: PASSWORD, to: "" }),
+    ).toEqual(refusal);
+    expect(
+      await signInWithPassword({ email: world.people.actor.email, password: PASSWORD, to: "" }),
+    ).toEqual(refusal);
     expect(await db.$count(sessions)).toBe(before);
     expect(cookieJar().size).toBe(0);
   });
 
   test("after eight tries the right one is refused too, until the window is over", async () => {
     const { md } = world.people;
-    for (let i = 0; i < 8; i += 1) await signInWithPassword({ email: md.email, password: `guess number ${String(i)}`, to: "" });
-    expect(await signInWithPassword({ email: md.email, password: PASSWORD, to: "" })).toMatchObject({ ok: false, error: { code: "too-many" } });
-    await db.update(rateCounters).set({ windowStart: new Date(Date.now() - 3_600_000) }).where(eq(rateCounters.hits, rateCounters.hits));
-    expect(await redirectOf(signInWithPassword({ email: md.email, password: PASSWORD, to: "" }))).toBe("/sign-in/done");
+    for (let i = 0; i < 8; i += 1)
+      await signInWithPassword({ email: md.email, password: `guess number ${String(i)}`, to: "" });
+    expect(await signInWithPassword({ email: md.email, password: PASSWORD, to: "" })).toMatchObject(
+      { ok: false, error: { code: "too-many" } },
+    );
+    await db
+      .update(rateCounters)
+      .set({ windowStart: new Date(Date.now() - 3_600_000) })
+      .where(eq(rateCounters.hits, rateCounters.hits));
+    expect(
+      await redirectOf(signInWithPassword({ email: md.email, password: PASSWORD, to: "" })),
+    ).toBe("/sign-in/done");
   });
 
   test("another site is never where it leads", async () => {
-    expect(await redirectOf(signInWithPassword({ email: world.people.md.email, password: PASSWORD, to: "//evil.example" }))).toBe("/sign-in/done");
+    expect(
+      await redirectOf(
+        signInWithPassword({
+          email: world.people.md.email,
+          password: PASSWORD,
+          to: "//evil.example",
+        }),
+      ),
+    ).toBe("/sign-in/done");
   });
 });

@@ -20,12 +20,26 @@ export async function makeRehearsalWorld() {
   const world = await makeWorld();
   const { productionId, companyId, people } = world;
   const cover = await makePerson(companyId, "Imke Dorne", { kind: "actor", productionId });
-  const secondPianist = await makePerson(companyId, "Osric Dlamini", { kind: "accompanist", productionId });
+  const secondPianist = await makePerson(companyId, "Osric Dlamini", {
+    kind: "accompanist",
+    productionId,
+  });
   const numbers = [newId(), newId(), newId()] as const;
   const titles = ["Low Water", "A Letter from Ansel", "The Ness Light"];
-  await db.insert(t.numbers).values(
-    numbers.map((id, index) => ({ id, productionId, label: String(index + 1), title: titles[index] ?? "", place: index + 1, keyName: "G", keyFifths: 1, tempo: 96 })),
-  );
+  await db
+    .insert(t.numbers)
+    .values(
+      numbers.map((id, index) => ({
+        id,
+        productionId,
+        label: String(index + 1),
+        title: titles[index] ?? "",
+        place: index + 1,
+        keyName: "G",
+        keyFifths: 1,
+        tempo: 96,
+      })),
+    );
   const maren = newId();
   const ansel = newId();
   const pip = newId();
@@ -34,10 +48,24 @@ export async function makeRehearsalWorld() {
     { id: ansel, productionId, name: "Ansel", place: 2 },
     { id: pip, productionId, name: "Pip", place: 3 },
   ]);
-  const line = (roleId: string, numberId: string) => ({ roleId, numberId, source: "typed" as const, low: 57, high: 74, lowSpelled: "A3", highSpelled: "D5" });
-  await db.insert(t.vocalLines).values([
-    line(maren, numbers[0]), line(ansel, numbers[1]), line(maren, numbers[2]), line(ansel, numbers[2]), line(pip, numbers[2]),
-  ]);
+  const line = (roleId: string, numberId: string) => ({
+    roleId,
+    numberId,
+    source: "typed" as const,
+    low: 57,
+    high: 74,
+    lowSpelled: "A3",
+    highSpelled: "D5",
+  });
+  await db
+    .insert(t.vocalLines)
+    .values([
+      line(maren, numbers[0]),
+      line(ansel, numbers[1]),
+      line(maren, numbers[2]),
+      line(ansel, numbers[2]),
+      line(pip, numbers[2]),
+    ]);
   await db.insert(t.choices).values([
     { productionId, roleId: maren, personId: people.actor.personId, state: "cast" },
     { productionId, roleId: ansel, personId: people.otherActor.personId, state: "cast" },
@@ -75,10 +103,23 @@ export function callForm(world: RehearsalWorld, change: Record<string, unknown> 
 }
 
 /** A conflict of a person between two instants. */
-export async function addConflict(personId: string, from: string, to: string, state: "asked" | "agreed" | "declined" = "asked"): Promise<string> {
+export async function addConflict(
+  personId: string,
+  from: string,
+  to: string,
+  state: "asked" | "agreed" | "declined" = "asked",
+): Promise<string> {
   const id = newId();
   await db.insert(t.conflicts).values({
-    id, personId, startsAt: new Date(from), endsAt: new Date(to), localFrom: from.slice(0, 10), localTo: to.slice(0, 10), zone: "Europe/London", reason: "Evening class", state,
+    id,
+    personId,
+    startsAt: new Date(from),
+    endsAt: new Date(to),
+    localFrom: from.slice(0, 10),
+    localTo: to.slice(0, 10),
+    zone: "Europe/London",
+    reason: "Evening class",
+    state,
   });
   return id;
 }

@@ -23,16 +23,28 @@ beforeEach(async () => {
 /** Asks for a link, and gives what the button of its page would send. */
 async function askedLink(email: string, to = ""): Promise<URLSearchParams> {
   await redirectOf(requestLink({ email, to }));
-  const [row] = await db.select({ data: outbox.data }).from(outbox).where(eq(outbox.toEmail, email.toLowerCase()));
+  const [row] = await db
+    .select({ data: outbox.data })
+    .from(outbox)
+    .where(eq(outbox.toEmail, email.toLowerCase()));
   return new URL(String(row?.data["link"])).searchParams;
 }
 
 const press = (fields: URLSearchParams | string): Promise<Response> =>
-  GET(new NextRequest(new URL(`/api/auth/callback/nodemailer?${fields.toString()}`, OWN), { headers: { "user-agent": "test" } }));
+  GET(
+    new NextRequest(new URL(`/api/auth/callback/nodemailer?${fields.toString()}`, OWN), {
+      headers: { "user-agent": "test" },
+    }),
+  );
 
 const leadsTo = (response: Response): URL => new URL(response.headers.get("location") ?? "", OWN);
 const sessionCookie = (response: Response): string | undefined =>
-  response.headers.getSetCookie().find((cookie) => cookie.startsWith("authjs.session-token=") && !cookie.startsWith("authjs.session-token=;"));
+  response.headers
+    .getSetCookie()
+    .find(
+      (cookie) =>
+        cookie.startsWith("authjs.session-token=") && !cookie.startsWith("authjs.session-token=;"),
+    );
 
 describe("the button of a sign-in link", () => {
   test("signs the address's login in, for thirty days, in a cookie that no script and no other site can use", async () => {
@@ -66,7 +78,10 @@ describe("the button of a sign-in link", () => {
 
   test("after its time it signs nobody in", async () => {
     const fields = await askedLink(world.people.actor.email);
-    await db.update(verificationTokens).set({ expires: new Date(Date.now() - 1000) }).where(eq(verificationTokens.identifier, world.people.actor.email));
+    await db
+      .update(verificationTokens)
+      .set({ expires: new Date(Date.now() - 1000) })
+      .where(eq(verificationTokens.identifier, world.people.actor.email));
     expect(leadsTo(await press(fields)).search).toBe("?error=Verification");
     expect(await db.$count(sessions)).toBe(0);
   });
@@ -78,15 +93,21 @@ describe("the button of a sign-in link", () => {
     expect(await db.$count(sessions)).toBe(0);
   });
 
-  test.each(["https://evil.example/", "//evil.example", "https://localhost:3000.evil.example/me"])("changed to lead to %s afterwards, it stays on our site", async (callbackUrl) => {
-    const fields = await askedLink(world.people.actor.email);
-    fields.set("callbackUrl", callbackUrl);
-    expect(leadsTo(await press(fields)).host).toBe(OWN.host);
-  });
+  test.each(["https://evil.example/", "//evil.example", "https://localhost:3000.evil.example/me"])(
+    "changed to lead to %s afterwards, it stays on our site",
+    async (callbackUrl) => {
+      const fields = await askedLink(world.people.actor.email);
+      fields.set("callbackUrl", callbackUrl);
+      expect(leadsTo(await press(fields)).host).toBe(OWN.host);
+    },
+  );
 
   test("the database keeps only a hash of the secret", async () => {
     const fields = await askedLink(world.people.director.email);
-    const [row] = await db.select().from(verificationTokens).where(eq(verificationTokens.identifier, world.people.director.email));
+    const [row] = await db
+      .select()
+      .from(verificationTokens)
+      .where(eq(verificationTokens.identifier, world.people.director.email));
     expect(row?.token).toBeDefined();
     expect(row?.token).not.toBe(fields.get("token"));
   });
@@ -94,21 +115,46 @@ describe("the button of a sign-in link", () => {
 
 describe("the first sign-in of an address", () => {
   test("makes a login with the name that a company wrote down, and joins nothing by itself", async () => {
-    await db.insert(people).values({ companyId: world.companyId, name: "Ayo Lindqvist", email: "ayo.lindqvist@people.example" });
+    await db
+      .insert(people)
+      .values({
+        companyId: world.companyId,
+        name: "Ayo Lindqvist",
+        email: "ayo.lindqvist@people.example",
+      });
     await press(await askedLink("Ayo.Lindqvist@People.Example"));
-    const [user] = await db.select().from(users).where(eq(users.email, "ayo.lindqvist@people.example"));
+    const [user] = await db
+      .select()
+      .from(users)
+      .where(eq(users.email, "ayo.lindqvist@people.example"));
     expect(user).toMatchObject({ name: "Ayo Lindqvist", emailVerified: expect.any(Date) });
-    const [record] = await db.select({ userId: people.userId }).from(people).where(eq(people.email, "ayo.lindqvist@people.example"));
+    const [record] = await db
+      .select({ userId: people.userId })
+      .from(people)
+      .where(eq(people.email, "ayo.lindqvist@people.example"));
     expect(record?.userId).toBeNull();
   });
 
   test("of an address no company knows makes a login without a name", async () => {
     await press(await askedLink("new.here@people.example"));
-    expect(await db.select({ name: users.name }).from(users).where(eq(users.email, "new.here@people.example"))).toEqual([{ name: null }]);
+    expect(
+      await db
+        .select({ name: users.name })
+        .from(users)
+        .where(eq(users.email, "new.here@people.example")),
+    ).toEqual([{ name: null }]);
   });
 });
 
-test.each(["signin/nodemailer", "signout", "csrf", "session", "providers", "error", "callback/credentials"])("nothing else of the sign-in library answers: %s", async (rest) => {
+test.each([
+  "signin/nodemailer",
+  "signout",
+  "csrf",
+  "session",
+  "providers",
+  "error",
+  "callback/credentials",
+])("nothing else of the sign-in library answers: %s", async (rest) => {
   const response = await GET(new NextRequest(new URL(`/api/auth/${rest}`, OWN)));
   expect(response.status).toBe(404);
   expect(response.headers.getSetCookie()).toEqual([]);

@@ -16,18 +16,29 @@ beforeAll(async () => {
 });
 
 const ask = (productionId = world.productionId, id = callId) =>
-  GET(new Request("http://localhost:3000/"), { params: Promise.resolve({ productionId, callId: id }) });
+  GET(new Request("http://localhost:3000/"), {
+    params: Promise.resolve({ productionId, callId: id }),
+  });
 
 test("the clashes of a saved call, and the conflicts its order goes around", async () => {
   // Dele is first needed at 19:00 (18:00Z): a conflict until then is gone around; Wren's is not.
-  await addConflict(world.people.otherActor.personId, "2027-04-06T17:00:00Z", "2027-04-06T18:00:00Z", "agreed");
+  await addConflict(
+    world.people.otherActor.personId,
+    "2027-04-06T17:00:00Z",
+    "2027-04-06T18:00:00Z",
+    "agreed",
+  );
   await addConflict(world.people.actor.personId, "2027-04-06T17:00:00Z", "2027-04-06T17:40:00Z");
   as(world.people.stageManager.userId);
   const response = await ask();
   expect(response.status).toBe(200);
   const body = (await response.json()) as { clashes: { words: string }[]; around: string[] };
-  expect(body.clashes.map((clash) => clash.words)).toEqual(["Wren Tallis cannot come 18:00–18:40 (Evening class), asked, not agreed yet: 10 min of this call"]);
-  expect(body.around).toEqual(["Dele Fashanu cannot come 18:00–19:00 (Evening class): their blocks are after it."]);
+  expect(body.clashes.map((clash) => clash.words)).toEqual([
+    "Wren Tallis cannot come 18:00–18:40 (Evening class), asked, not agreed yet: 10 min of this call",
+  ]);
+  expect(body.around).toEqual([
+    "Dele Fashanu cannot come 18:00–19:00 (Evening class): their blocks are after it.",
+  ]);
 });
 
 test("is for those who plan, in their own production", async () => {
@@ -36,7 +47,12 @@ test("is for those who plan, in their own production", async () => {
     expect((await ask()).status).toBe(403);
   }
   // A draft does not exist for those who only read.
-  for (const person of [world.people.director, world.people.admin, world.people.outsiderMd, world.people.siblingMd]) {
+  for (const person of [
+    world.people.director,
+    world.people.admin,
+    world.people.outsiderMd,
+    world.people.siblingMd,
+  ]) {
     as(person.userId);
     expect((await ask()).status).toBe(404);
   }

@@ -4,7 +4,10 @@ import { beforeAll, describe, expect, test } from "vitest";
 import { GET as acknowledged } from "@/app/api/productions/[productionId]/call-sheets/[issueId]/acknowledgements/route";
 import { GET as download } from "@/app/api/productions/[productionId]/call-sheets/[issueId]/route";
 import { issueSheet } from "@/app/(season)/productions/[productionId]/call-sheets/actions";
-import { createCall, publishCall } from "@/app/(season)/productions/[productionId]/rehearsals/actions";
+import {
+  createCall,
+  publishCall,
+} from "@/app/(season)/productions/[productionId]/rehearsals/actions";
 import { db } from "@/db/client";
 import { newId } from "@/db/columns";
 import * as t from "@/db/schema";
@@ -18,21 +21,47 @@ let issueId: string;
 
 beforeAll(async () => {
   world = await makeRehearsalWorld();
-  await db.update(t.productions).set({ title: "Évariste “the” Tide/Watcher" }).where(eq(t.productions.id, world.productionId));
+  await db
+    .update(t.productions)
+    .set({ title: "Évariste “the” Tide/Watcher" })
+    .where(eq(t.productions.id, world.productionId));
   await db.update(t.roles).set({ name: "=SUM(A1)" }).where(eq(t.roles.id, world.roles.maren));
-  await db.update(t.people).set({ name: "=SUM(A1)" }).where(eq(t.people.id, world.people.otherActor.personId));
+  await db
+    .update(t.people)
+    .set({ name: "=SUM(A1)" })
+    .where(eq(t.people.id, world.people.otherActor.personId));
   as(world.people.md.userId);
-  const made = await createCall(callForm(world, { hand: [{ personId: world.cover.personId, act: "call", reason: "=SUM(A1)", keys: ["b1"] }] }));
+  const made = await createCall(
+    callForm(world, {
+      hand: [{ personId: world.cover.personId, act: "call", reason: "=SUM(A1)", keys: ["b1"] }],
+    }),
+  );
   if (!made.ok) throw new Error(JSON.stringify(made.error));
-  await publishCall({ productionId: world.productionId, callId: made.data.callId, version: 1, despite: true });
-  const { seen } = await readSheetDay(await actorOf(world.people.md.userId), { productionId: world.productionId, localDate: "2027-04-06" });
-  const issued = await issueSheet({ productionId: world.productionId, localDate: "2027-04-06", seen, notes: "=1+1\n@home\n+44" });
+  await publishCall({
+    productionId: world.productionId,
+    callId: made.data.callId,
+    version: 1,
+    despite: true,
+  });
+  const { seen } = await readSheetDay(await actorOf(world.people.md.userId), {
+    productionId: world.productionId,
+    localDate: "2027-04-06",
+  });
+  const issued = await issueSheet({
+    productionId: world.productionId,
+    localDate: "2027-04-06",
+    seen,
+    notes: "=1+1\n@home\n+44",
+  });
   if (!issued.ok) throw new Error(JSON.stringify(issued.error));
   issueId = issued.data.issueId;
 });
 
 const get = (query = "", productionId = world.productionId, id = issueId) =>
-  download(new Request(`http://localhost:3000/api/productions/${productionId}/call-sheets/${id}${query}`), { params: Promise.resolve({ productionId, issueId: id }) });
+  download(
+    new Request(`http://localhost:3000/api/productions/${productionId}/call-sheets/${id}${query}`),
+    { params: Promise.resolve({ productionId, issueId: id }) },
+  );
 
 async function opened(response: Response): Promise<ExcelJS.Worksheet> {
   const workbook = new ExcelJS.Workbook();
@@ -59,7 +88,16 @@ describe("an issue as a file", () => {
     });
     expect(cells.filter((cell) => cell.type === ExcelJS.ValueType.Formula)).toEqual([]);
     const text = cells.map((cell) => cell.text).join("\n");
-    for (const word of ["Wren Tallis, Imke Dorne", "=SUM(A1)", "Low Water", "Hanne Briscoe", "=1+1", "@home", "+44"]) expect(text).toContain(word);
+    for (const word of [
+      "Wren Tallis, Imke Dorne",
+      "=SUM(A1)",
+      "Low Water",
+      "Hanne Briscoe",
+      "=1+1",
+      "@home",
+      "+44",
+    ])
+      expect(text).toContain(word);
   });
 
   test("prints on the company's paper unless another is asked for", async () => {
@@ -105,7 +143,10 @@ describe("an issue as a file", () => {
 });
 
 test("who has acknowledged is for those who issue", async () => {
-  const ask = () => acknowledged(new Request("http://localhost:3000/"), { params: Promise.resolve({ productionId: world.productionId, issueId }) });
+  const ask = () =>
+    acknowledged(new Request("http://localhost:3000/"), {
+      params: Promise.resolve({ productionId: world.productionId, issueId }),
+    });
   as(world.people.stageManager.userId);
   const response = await ask();
   expect(response.status).toBe(200);

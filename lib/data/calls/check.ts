@@ -25,7 +25,13 @@ export type CheckedPerson = {
   excused: boolean;
 };
 
-export type CheckedBlock = { key: string; from: string; to: string; called: CheckedPerson[]; uncastRoles: string[] };
+export type CheckedBlock = {
+  key: string;
+  from: string;
+  to: string;
+  called: CheckedPerson[];
+  uncastRoles: string[];
+};
 
 export type CallCheck = {
   day: string;
@@ -48,7 +54,10 @@ export type CallCheck = {
  * A call that is being made, looked at before anything is written: its times, who the score needs, and everything it
  * clashes with, with what to do. For those who may change calls.
  */
-export async function checkCall(actor: Actor, draft: CallDraft & { callId: string | null }): Promise<CallCheck> {
+export async function checkCall(
+  actor: Actor,
+  draft: CallDraft & { callId: string | null },
+): Promise<CallCheck> {
   const scope = await productionFor(actor, draft.productionId, "calls:change");
   if (draft.callId !== null) {
     const [own] = await db
@@ -77,7 +86,9 @@ export async function checkCall(actor: Actor, draft: CallDraft & { callId: strin
       uncastRoles: castHidden ? [] : block.uncastRoles,
     })),
     covers: covers.map((cover) => ({ ...cover, name: names.get(cover.personId) ?? "" })),
-    clashes: describeClashes(plan, facts, startsWithin(plan)).filter((clash) => !castHidden || shownWithoutCast(plan, clash)),
+    clashes: describeClashes(plan, facts, startsWithin(plan)).filter(
+      (clash) => !castHidden || shownWithoutCast(plan, clash),
+    ),
     waiting: castHidden ? 0 : waitingMinutes(plan.blocks),
     castHidden,
   };
@@ -85,18 +96,28 @@ export async function checkCall(actor: Actor, draft: CallDraft & { callId: strin
 
 /** Whether the reader may know who is cast: the stage manager only once the list is out. */
 export function seesCast(actor: Actor, scope: ProductionScope): boolean {
-  return can(actor, "casting:see", { companyId: scope.companyId, productionId: scope.id, castPublished: scope.castPublished });
+  return can(actor, "casting:see", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+    castPublished: scope.castPublished,
+  });
 }
 
 /** A clash of somebody whom the score needs would tell who is cast. */
 export function shownWithoutCast(plan: CallPlan, clash: ClashInWords): boolean {
   const { personId } = clash;
   if (personId === null || personId === plan.leaderId || personId === plan.pianistId) return true;
-  return !plan.blocks.some((block) => block.called.some((person) => person.personId === personId && person.source === "score"));
+  return !plan.blocks.some((block) =>
+    block.called.some((person) => person.personId === personId && person.source === "score"),
+  );
 }
 
 /** The people of a block by name; without those of the score for a reader who may not see the casting. */
-export function shownPeople(block: PlannedBlock, names: Map<string, string>, castHidden: boolean): CheckedPerson[] {
+export function shownPeople(
+  block: PlannedBlock,
+  names: Map<string, string>,
+  castHidden: boolean,
+): CheckedPerson[] {
   return block.called
     .filter((person) => !castHidden || person.source === "hand")
     .map(({ personId, roleNames, source, reason, excused }) => ({
@@ -110,24 +131,37 @@ export function shownPeople(block: PlannedBlock, names: Map<string, string>, cas
 }
 
 function clockNote(note: "skipped" | "repeated" | null, starts: string): string | null {
-  if (note === "skipped") return `The clocks go forward over that time: the call would start at ${starts}.`;
+  if (note === "skipped")
+    return `The clocks go forward over that time: the call would start at ${starts}.`;
   if (note === "repeated") return "That time comes twice that night. The first is taken.";
   return null;
 }
 
-function readCovers(score: ScoreAndCast, plan: CallPlan): { personId: string; role: string; keys: string[] }[] {
-  const called = new Set(plan.blocks.flatMap((block) => block.called.filter((person) => !person.excused).map((person) => person.personId)));
+function readCovers(
+  score: ScoreAndCast,
+  plan: CallPlan,
+): { personId: string; role: string; keys: string[] }[] {
+  const called = new Set(
+    plan.blocks.flatMap((block) =>
+      block.called.filter((person) => !person.excused).map((person) => person.personId),
+    ),
+  );
   const sings = new Set(score.lines.map((line) => `${line.roleId} ${line.numberId}`));
   const found = score.covers.map(({ roleId, personId }) => ({
     personId,
     role: score.roleNames.get(roleId) ?? "",
-    keys: plan.blocks.filter((block) => block.numberId !== null && sings.has(`${roleId} ${block.numberId}`)).map((block) => block.key),
+    keys: plan.blocks
+      .filter((block) => block.numberId !== null && sings.has(`${roleId} ${block.numberId}`))
+      .map((block) => block.key),
   }));
   return found.filter((cover) => cover.keys.length > 0 && !called.has(cover.personId));
 }
 
 async function namesOf(personIds: string[]): Promise<Map<string, string>> {
   if (personIds.length === 0) return new Map();
-  const rows = await db.select({ id: people.id, name: people.name }).from(people).where(inArray(people.id, personIds));
+  const rows = await db
+    .select({ id: people.id, name: people.name })
+    .from(people)
+    .where(inArray(people.id, personIds));
   return new Map(rows.map((row) => [row.id, row.name]));
 }

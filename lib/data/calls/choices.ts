@@ -27,7 +27,12 @@ export async function readCallChoices(actor: Actor, productionId: string): Promi
   const scope = await productionFor(actor, productionId, "calls:change");
   const [numberRows, rooms, held] = await Promise.all([
     db
-      .select({ id: numbers.id, label: numbers.label, title: numbers.title, seconds: numbers.seconds })
+      .select({
+        id: numbers.id,
+        label: numbers.label,
+        title: numbers.title,
+        seconds: numbers.seconds,
+      })
       .from(numbers)
       .where(and(eq(numbers.productionId, scope.id), isNull(numbers.removedAt)))
       .orderBy(asc(numbers.place)),
@@ -36,7 +41,13 @@ export async function readCallChoices(actor: Actor, productionId: string): Promi
       .select({ id: people.id, name: people.name, kind: positions.kind })
       .from(positions)
       .innerJoin(people, eq(people.id, positions.personId))
-      .where(and(eq(positions.productionId, scope.id), isNull(positions.endedAt), isNull(people.removedAt)))
+      .where(
+        and(
+          eq(positions.productionId, scope.id),
+          isNull(positions.endedAt),
+          isNull(people.removedAt),
+        ),
+      )
       .orderBy(asc(people.name)),
   ]);
   const each = [...groupBy(held, (row) => row.id).values()].flatMap((rows) => {
@@ -48,9 +59,18 @@ export async function readCallChoices(actor: Actor, productionId: string): Promi
     production: { id: scope.id, title: scope.title, zone: scope.zone },
     numbers: numberRows,
     rooms: rooms.map(({ id, name, venueName, hasPiano }) => ({ id, name, venueName, hasPiano })),
-    people: each.map(({ id, name, kinds }) => ({ id, name, position: kinds.map((kind) => POSITION_NAMES[kind]).join(", ") })),
+    people: each.map(({ id, name, kinds }) => ({
+      id,
+      name,
+      position: kinds.map((kind) => POSITION_NAMES[kind]).join(", "),
+    })),
     leaders: each.filter(({ kinds }) => kinds.some((kind) => kind !== "actor")).map(brief),
-    pianists: each.filter(({ kinds }) => AT_THE_PIANO.some((kind) => kinds.includes(kind))).map(brief),
-    mayAssignPianist: can(actor, "pianists:assign", { companyId: scope.companyId, productionId: scope.id }),
+    pianists: each
+      .filter(({ kinds }) => AT_THE_PIANO.some((kind) => kinds.includes(kind)))
+      .map(brief),
+    mayAssignPianist: can(actor, "pianists:assign", {
+      companyId: scope.companyId,
+      productionId: scope.id,
+    }),
   };
 }

@@ -19,8 +19,18 @@ export async function decideConflict(
   const [row] = await db
     .select({ id: conflicts.id, state: conflicts.state, personId: people.id, name: people.name })
     .from(conflicts)
-    .innerJoin(people, and(eq(people.id, conflicts.personId), eq(people.companyId, scope.companyId)))
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), isNull(positions.endedAt)))
+    .innerJoin(
+      people,
+      and(eq(people.id, conflicts.personId), eq(people.companyId, scope.companyId)),
+    )
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        isNull(positions.endedAt),
+      ),
+    )
     .where(and(eq(conflicts.id, input.conflictId), isNull(conflicts.removedAt)))
     .limit(1);
   if (!row) throw new AppError("not-found");

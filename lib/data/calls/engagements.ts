@@ -2,8 +2,20 @@ import "server-only";
 import { and, eq, gt, inArray, isNotNull, isNull, lt, ne, or } from "drizzle-orm";
 import { db } from "@/db/client";
 import {
-  auditionDays, auditionRooms, blocks, callbackInvitations, callbackRounds, called, calls, people, pianistSessions, productions,
-  rooms, signUps, slotAssignments, slots,
+  auditionDays,
+  auditionRooms,
+  blocks,
+  callbackInvitations,
+  callbackRounds,
+  called,
+  calls,
+  people,
+  pianistSessions,
+  productions,
+  rooms,
+  signUps,
+  slotAssignments,
+  slots,
 } from "@/db/schema";
 import { CALL_PHRASES } from "@/lib/calls/call-kinds";
 import type { Engagement } from "@/lib/calls/types";
@@ -18,7 +30,11 @@ type Who = { people: Map<string, string>; companyId: string; productionId: strin
  * play for, audition rooms they play in, and auditions and callbacks they sing in. Of their own production drafts count
  * too. What another company does is no more than "is engaged"; so is singing for another production.
  */
-export async function readEngagements(scope: ProductionScope, keys: Map<string, string>, window: Interval): Promise<Engagement[]> {
+export async function readEngagements(
+  scope: ProductionScope,
+  keys: Map<string, string>,
+  window: Interval,
+): Promise<Engagement[]> {
   const ids = await recordsOf(keys);
   if (ids.size === 0) return [];
   const who: Who = { people: ids, companyId: scope.companyId, productionId: scope.id };
@@ -36,13 +52,23 @@ async function recordsOf(keys: Map<string, string>): Promise<Map<string, string>
   const all = new Map(keys);
   const logins = [...new Set(keys.values())];
   if (logins.length === 0) return all;
-  const rows = await db.select({ id: people.id, userId: people.userId }).from(people).where(inArray(people.userId, logins));
+  const rows = await db
+    .select({ id: people.id, userId: people.userId })
+    .from(people)
+    .where(inArray(people.userId, logins));
   for (const row of rows) if (row.userId !== null) all.set(row.id, row.userId);
   return all;
 }
 
 type Unnumbered = Omit<Engagement, "id">;
-type CallRow = { callId: string; productionId: string; companyId: string; production: string; kind: keyof typeof CALL_PHRASES; state: string };
+type CallRow = {
+  callId: string;
+  productionId: string;
+  companyId: string;
+  production: string;
+  kind: keyof typeof CALL_PHRASES;
+  state: string;
+};
 
 const callColumns = {
   callId: calls.id,
@@ -64,7 +90,10 @@ function callLabel(who: Who, verb: string, call: CallRow): string {
 /** Drafts are nobody else's business; the other productions' calls count once they are published. */
 const counts = (who: Who, window: Interval) =>
   and(
-    or(eq(calls.state, "published"), and(eq(calls.state, "draft"), eq(calls.productionId, who.productionId))),
+    or(
+      eq(calls.state, "published"),
+      and(eq(calls.state, "draft"), eq(calls.productionId, who.productionId)),
+    ),
     isNull(productions.removedAt),
     lt(calls.startsAt, window.to),
     gt(calls.endsAt, window.from),
@@ -72,17 +101,30 @@ const counts = (who: Who, window: Interval) =>
 
 async function calledElsewhere(who: Who, window: Interval): Promise<Unnumbered[]> {
   const rows = await db
-    .select({ ...callColumns, personId: called.personId, blockId: called.blockId, startsAt: calls.startsAt })
+    .select({
+      ...callColumns,
+      personId: called.personId,
+      blockId: called.blockId,
+      startsAt: calls.startsAt,
+    })
     .from(called)
     .innerJoin(blocks, eq(blocks.id, called.blockId))
     .innerJoin(calls, eq(calls.id, blocks.callId))
     .innerJoin(productions, eq(productions.id, calls.productionId))
     .leftJoin(rooms, eq(rooms.id, calls.roomId))
-    .where(and(inArray(called.personId, [...who.people.keys()]), eq(called.excused, false), counts(who, window)));
+    .where(
+      and(
+        inArray(called.personId, [...who.people.keys()]),
+        eq(called.excused, false),
+        counts(who, window),
+      ),
+    );
   const times = await timesOfBlocks([...new Set(rows.map((row) => row.callId))]);
   const engaged: Unnumbered[] = [];
   for (const theirs of groupBy(rows, (row) => `${row.personId} ${row.callId}`).values()) {
-    const stretches = theirs.flatMap((row) => times.get(row.blockId) ?? []).sort((a, b) => a.from.getTime() - b.from.getTime());
+    const stretches = theirs
+      .flatMap((row) => times.get(row.blockId) ?? [])
+      .sort((a, b) => a.from.getTime() - b.from.getTime());
     const [row] = theirs;
     if (!row) continue;
     for (const stretch of joined(stretches)) {
@@ -114,7 +156,12 @@ async function timesOfBlocks(callIds: string[]): Promise<Map<string, Interval>> 
   const times = new Map<string, Interval>();
   if (callIds.length === 0) return times;
   const rows = await db
-    .select({ id: blocks.id, callId: blocks.callId, minutes: blocks.minutes, startsAt: calls.startsAt })
+    .select({
+      id: blocks.id,
+      callId: blocks.callId,
+      minutes: blocks.minutes,
+      startsAt: calls.startsAt,
+    })
     .from(blocks)
     .innerJoin(calls, eq(calls.id, blocks.callId))
     .where(inArray(blocks.callId, callIds))
@@ -171,7 +218,13 @@ async function playingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
       .innerJoin(productions, eq(productions.id, pianistSessions.productionId))
       .innerJoin(auditionRooms, eq(auditionRooms.id, pianistSessions.auditionRoomId))
       .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
-      .where(and(inArray(pianistSessions.bookeeId, [...new Set(who.people.values())]), lt(pianistSessions.startsAt, window.to), gt(pianistSessions.endsAt, window.from))),
+      .where(
+        and(
+          inArray(pianistSessions.bookeeId, [...new Set(who.people.values())]),
+          lt(pianistSessions.startsAt, window.to),
+          gt(pianistSessions.endsAt, window.from),
+        ),
+      ),
   ]);
   return [
     ...inCalls.map((row) => ({
@@ -189,7 +242,10 @@ async function playingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
       who: who.people.get(row.personId) ?? row.personId,
       plays: true,
       callId: null,
-      label: row.companyId === who.companyId ? `plays for the auditions of ${row.production}` : "is engaged",
+      label:
+        row.companyId === who.companyId
+          ? `plays for the auditions of ${row.production}`
+          : "is engaged",
       venueId: row.venueId,
     })),
   ];
@@ -199,7 +255,13 @@ async function singingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
   const ids = [...who.people.keys()];
   const [auditions, callbacks] = await Promise.all([
     db
-      .select({ personId: signUps.personId, productionId: signUps.productionId, from: slots.startsAt, to: slots.endsAt, venueId: rooms.venueId })
+      .select({
+        personId: signUps.personId,
+        productionId: signUps.productionId,
+        from: slots.startsAt,
+        to: slots.endsAt,
+        venueId: rooms.venueId,
+      })
       .from(slotAssignments)
       .innerJoin(signUps, eq(signUps.id, slotAssignments.signUpId))
       .innerJoin(slots, eq(slots.id, slotAssignments.slotId))
@@ -207,10 +269,22 @@ async function singingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
       .innerJoin(auditionDays, eq(auditionDays.id, auditionRooms.dayId))
       .innerJoin(rooms, eq(rooms.id, auditionRooms.roomId))
       .where(
-        and(inArray(signUps.personId, ids), inArray(signUps.state, ["invited", "confirmed"]), isNull(auditionDays.removedAt), lt(slots.startsAt, window.to), gt(slots.endsAt, window.from)),
+        and(
+          inArray(signUps.personId, ids),
+          inArray(signUps.state, ["invited", "confirmed"]),
+          isNull(auditionDays.removedAt),
+          lt(slots.startsAt, window.to),
+          gt(slots.endsAt, window.from),
+        ),
       ),
     db
-      .select({ personId: callbackInvitations.personId, productionId: callbackRounds.productionId, from: callbackRounds.startsAt, to: callbackRounds.endsAt, venueId: rooms.venueId })
+      .select({
+        personId: callbackInvitations.personId,
+        productionId: callbackRounds.productionId,
+        from: callbackRounds.startsAt,
+        to: callbackRounds.endsAt,
+        venueId: rooms.venueId,
+      })
       .from(callbackInvitations)
       .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
       .leftJoin(rooms, eq(rooms.id, callbackRounds.roomId))
@@ -238,7 +312,10 @@ async function singingElsewhere(who: Who, window: Interval): Promise<Unnumbered[
               plays: false,
               callId: null,
               // Where somebody else is heard is theirs to tell, even within one company.
-              label: row.productionId === who.productionId ? `is at the ${what} of this production` : "is engaged",
+              label:
+                row.productionId === who.productionId
+                  ? `is at the ${what} of this production`
+                  : "is engaged",
               venueId: row.venueId,
             },
           ],

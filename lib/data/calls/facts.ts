@@ -19,7 +19,10 @@ const LATEST = "23:00";
  * Everything these calls could clash with: the conflicts and engagements of everyone in them, the company's rooms and
  * who holds them, ways between venues, and who else could play. Asks no permission: the caller has.
  */
-export async function readFacts(scope: ProductionScope, plans: readonly CallPlan[]): Promise<CallFacts> {
+export async function readFacts(
+  scope: ProductionScope,
+  plans: readonly CallPlan[],
+): Promise<CallFacts> {
   const window = {
     from: new Date(Math.min(...plans.map((plan) => plan.from.getTime())) - DAY),
     to: new Date(Math.max(...plans.map((plan) => plan.to.getTime())) + DAY),
@@ -61,21 +64,47 @@ export async function readFacts(scope: ProductionScope, plans: readonly CallPlan
   };
 }
 
-async function readConflicts(personIds: string[], window: Interval): Promise<CallFacts["conflicts"]> {
+async function readConflicts(
+  personIds: string[],
+  window: Interval,
+): Promise<CallFacts["conflicts"]> {
   const rows = await db
-    .select({ id: conflicts.id, personId: conflicts.personId, from: conflicts.startsAt, to: conflicts.endsAt, reason: conflicts.reason, state: conflicts.state })
+    .select({
+      id: conflicts.id,
+      personId: conflicts.personId,
+      from: conflicts.startsAt,
+      to: conflicts.endsAt,
+      reason: conflicts.reason,
+      state: conflicts.state,
+    })
     .from(conflicts)
     .where(
-      and(inArray(conflicts.personId, personIds), isNull(conflicts.removedAt), ne(conflicts.state, "declined"), lt(conflicts.startsAt, window.to), gt(conflicts.endsAt, window.from)),
+      and(
+        inArray(conflicts.personId, personIds),
+        isNull(conflicts.removedAt),
+        ne(conflicts.state, "declined"),
+        lt(conflicts.startsAt, window.to),
+        gt(conflicts.endsAt, window.from),
+      ),
     )
     .orderBy(asc(conflicts.startsAt));
-  return rows.map((row) => ({ ...row, state: row.state === "agreed" ? "agreed" : "asked", person: row.personId }));
+  return rows.map((row) => ({
+    ...row,
+    state: row.state === "agreed" ? "agreed" : "asked",
+    person: row.personId,
+  }));
 }
 
 /** The company's rooms, by venue and name. */
 export async function readRooms(companyId: string): Promise<CallFacts["rooms"]> {
   return db
-    .select({ id: rooms.id, name: rooms.name, venueId: rooms.venueId, venueName: venues.name, hasPiano: rooms.hasPiano })
+    .select({
+      id: rooms.id,
+      name: rooms.name,
+      venueId: rooms.venueId,
+      venueName: venues.name,
+      hasPiano: rooms.hasPiano,
+    })
     .from(rooms)
     .innerJoin(venues, eq(venues.id, rooms.venueId))
     .where(eq(rooms.companyId, companyId))
@@ -96,7 +125,14 @@ export async function readAccompanists(scope: ProductionScope): Promise<CallFact
     .select({ personId: people.id, name: people.name })
     .from(positions)
     .innerJoin(people, eq(people.id, positions.personId))
-    .where(and(eq(positions.productionId, scope.id), eq(positions.kind, "accompanist"), isNull(positions.endedAt), isNull(people.removedAt)))
+    .where(
+      and(
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "accompanist"),
+        isNull(positions.endedAt),
+        isNull(people.removedAt),
+      ),
+    )
     .orderBy(asc(people.name));
 }
 
@@ -105,5 +141,8 @@ export function startsWithin(plan: CallPlan): Interval {
   const day = localDay(plan.from, plan.zone);
   const opens = toInstant(day, EARLIEST, plan.zone).instant;
   const now = new Date();
-  return { from: opens < now && plan.from > now ? now : opens, to: toInstant(day, LATEST, plan.zone).instant };
+  return {
+    from: opens < now && plan.from > now ? now : opens,
+    to: toInstant(day, LATEST, plan.zone).instant,
+  };
 }

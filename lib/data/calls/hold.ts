@@ -48,20 +48,30 @@ export async function lockCall(tx: Tx, productionId: string, callId: string, ver
  */
 export async function holdForCall(tx: Tx, productionId: string, wanted: Holding): Promise<void> {
   const { callId, roomId, pianistId, startsAt, endsAt } = wanted;
-  if (roomId !== null) await tx.select({ id: rooms.id }).from(rooms).where(eq(rooms.id, roomId)).for("update");
+  if (roomId !== null)
+    await tx.select({ id: rooms.id }).from(rooms).where(eq(rooms.id, roomId)).for("update");
   const bookeeId = pianistId === null ? null : await lockBookee(tx, productionId, pianistId);
   await tx.delete(roomBookings).where(eq(roomBookings.callId, callId));
   if (roomId !== null) await tx.insert(roomBookings).values({ roomId, startsAt, endsAt, callId });
   const [held] = await tx
-    .select({ personId: pianistSessions.personId, startsAt: pianistSessions.startsAt, endsAt: pianistSessions.endsAt })
+    .select({
+      personId: pianistSessions.personId,
+      startsAt: pianistSessions.startsAt,
+      endsAt: pianistSessions.endsAt,
+    })
     .from(pianistSessions)
     .where(eq(pianistSessions.callId, callId));
-  const same = held?.personId === pianistId && held.startsAt.getTime() === startsAt.getTime() && held.endsAt.getTime() === endsAt.getTime();
+  const same =
+    held?.personId === pianistId &&
+    held.startsAt.getTime() === startsAt.getTime() &&
+    held.endsAt.getTime() === endsAt.getTime();
   // A session the pianist has confirmed stays confirmed when nothing about it changes.
   if (held && same) return;
   await tx.delete(pianistSessions).where(eq(pianistSessions.callId, callId));
   if (pianistId === null || bookeeId === null) return;
-  await tx.insert(pianistSessions).values({ productionId, personId: pianistId, bookeeId, callId, startsAt, endsAt });
+  await tx
+    .insert(pianistSessions)
+    .values({ productionId, personId: pianistId, bookeeId, callId, startsAt, endsAt });
 }
 
 /** Frees the room and the pianist of a call. */
@@ -74,17 +84,34 @@ async function lockBookee(tx: Tx, productionId: string, personId: string): Promi
   const [person] = await tx
     .select({ id: people.id, userId: people.userId })
     .from(people)
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, productionId), isNull(positions.endedAt)))
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, productionId),
+        isNull(positions.endedAt),
+      ),
+    )
     .where(eq(people.id, personId))
     .limit(1);
-  if (!person) throw new AppError("refused", "The pianist has no position in this production any more. Choose another.");
-  if (person.userId === null) await tx.select({ id: people.id }).from(people).where(eq(people.id, person.id)).for("update");
-  else await tx.select({ id: users.id }).from(users).where(eq(users.id, person.userId)).for("update");
+  if (!person)
+    throw new AppError(
+      "refused",
+      "The pianist has no position in this production any more. Choose another.",
+    );
+  if (person.userId === null)
+    await tx.select({ id: people.id }).from(people).where(eq(people.id, person.id)).for("update");
+  else
+    await tx.select({ id: users.id }).from(users).where(eq(users.id, person.userId)).for("update");
   return person.userId ?? person.id;
 }
 
 /** Runs the work; a room or pianist that is taken becomes a refusal that says by what, when, and what to do. */
-export async function orTaken<T>(scope: ProductionScope, wanted: Holding, work: () => Promise<T>): Promise<T> {
+export async function orTaken<T>(
+  scope: ProductionScope,
+  wanted: Holding,
+  work: () => Promise<T>,
+): Promise<T> {
   try {
     return await work();
   } catch (error) {
@@ -96,7 +123,13 @@ export async function orTaken<T>(scope: ProductionScope, wanted: Holding, work: 
       .from(people)
       .where(eq(people.id, wanted.pianistId));
     throw await pianistTaken(
-      { bookeeId: person?.userId ?? wanted.pianistId, name: person?.name ?? "The pianist", startsAt: wanted.startsAt, endsAt: wanted.endsAt, exceptCallId: wanted.callId },
+      {
+        bookeeId: person?.userId ?? wanted.pianistId,
+        name: person?.name ?? "The pianist",
+        startsAt: wanted.startsAt,
+        endsAt: wanted.endsAt,
+        exceptCallId: wanted.callId,
+      },
       scope.companyId,
       scope.zone,
     );
@@ -106,10 +139,20 @@ export async function orTaken<T>(scope: ProductionScope, wanted: Holding, work: 
 async function roomTaken(scope: ProductionScope, wanted: Holding): Promise<AppError> {
   const time = { from: wanted.startsAt, to: wanted.endsAt };
   const holders = await readRoomHolders(scope.companyId, time);
-  const [room] = await db.select({ name: rooms.name }).from(rooms).where(eq(rooms.id, wanted.roomId ?? ""));
+  const [room] = await db
+    .select({ name: rooms.name })
+    .from(rooms)
+    .where(eq(rooms.id, wanted.roomId ?? ""));
   const name = room?.name ?? "The room";
-  const holder = holders.find((held) => held.roomId === wanted.roomId && held.callId !== wanted.callId && overlaps(held, time));
-  if (!holder) return new AppError("taken", `${name} was taken a moment ago. Load the page again and choose another room or time.`);
+  const holder = holders.find(
+    (held) =>
+      held.roomId === wanted.roomId && held.callId !== wanted.callId && overlaps(held, time),
+  );
+  if (!holder)
+    return new AppError(
+      "taken",
+      `${name} was taken a moment ago. Load the page again and choose another room or time.`,
+    );
   return new AppError(
     "taken",
     `${name} is taken by ${holder.label}, ${clockSpan(holder.from, holder.to, scope.zone)}. Choose another room, or a time outside that.`,

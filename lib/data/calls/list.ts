@@ -15,7 +15,17 @@ import type { SavedCall } from "./saved";
 
 export type CallListed = Pick<
   SavedCall,
-  "id" | "kind" | "title" | "state" | "localDate" | "zone" | "startsAt" | "endsAt" | "room" | "leader" | "pianist"
+  | "id"
+  | "kind"
+  | "title"
+  | "state"
+  | "localDate"
+  | "zone"
+  | "startsAt"
+  | "endsAt"
+  | "room"
+  | "leader"
+  | "pianist"
 > & {
   /** What is worked on, in order. */
   what: { label: string | null; title: string }[];
@@ -34,9 +44,15 @@ export type CallsOfWeek = {
 };
 
 /** The calls of the seven local days from `monday`. Drafts and cancelled calls are seen only by those who plan. */
-export async function listCallsOfWeek(actor: Actor, { productionId, monday }: { productionId: string; monday: string }): Promise<CallsOfWeek> {
+export async function listCallsOfWeek(
+  actor: Actor,
+  { productionId, monday }: { productionId: string; monday: string },
+): Promise<CallsOfWeek> {
   const scope = await productionFor(actor, productionId, "calls:read");
-  const mayChange = can(actor, "calls:change", { companyId: scope.companyId, productionId: scope.id });
+  const mayChange = can(actor, "calls:change", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+  });
   const visible = mayChange ? undefined : eq(calls.state, "published");
   const sunday = format(addDays(parseISO(monday), 6), "yyyy-MM-dd");
   const [saved, score, [counted]] = await Promise.all([
@@ -48,7 +64,9 @@ export async function listCallsOfWeek(actor: Actor, { productionId, monday }: { 
       .where(and(eq(calls.productionId, scope.id), visible)),
   ]);
   const { plans } = await savedPlans(score, saved);
-  const standing = saved.filter((call) => call.state !== "cancelled").flatMap((call) => plans.get(call.id) ?? []);
+  const standing = saved
+    .filter((call) => call.state !== "cancelled")
+    .flatMap((call) => plans.get(call.id) ?? []);
   const facts = mayChange && standing.length > 0 ? await readFacts(scope, standing) : null;
   return {
     any: (counted?.n ?? 0) > 0,
@@ -57,12 +75,26 @@ export async function listCallsOfWeek(actor: Actor, { productionId, monday }: { 
     zone: scope.zone,
     calls: saved.map((call) => {
       const plan = plans.get(call.id);
-      const { id, kind, title, state, localDate, zone, startsAt, endsAt, room, leader, pianist } = call;
+      const { id, kind, title, state, localDate, zone, startsAt, endsAt, room, leader, pianist } =
+        call;
       return {
-        id, kind, title, state, localDate, zone, startsAt, endsAt, room, leader, pianist,
-        what: (plan?.blocks ?? []).filter((block) => block.kind !== "break").map((block) => ({ label: block.label, title: block.title })),
+        id,
+        kind,
+        title,
+        state,
+        localDate,
+        zone,
+        startsAt,
+        endsAt,
+        room,
+        leader,
+        pianist,
+        what: (plan?.blocks ?? [])
+          .filter((block) => block.kind !== "break")
+          .map((block) => ({ label: block.label, title: block.title })),
         people: new Set((plan?.blocks ?? []).flatMap(calledTo)).size,
-        clashes: facts && plan && state !== "cancelled" ? findCallClashes(plan, facts).length : null,
+        clashes:
+          facts && plan && state !== "cancelled" ? findCallClashes(plan, facts).length : null,
       };
     }),
   };
@@ -73,7 +105,16 @@ export async function nextCalls(productionId: string, localDate: string): Promis
   const [next] = await db
     .select({ localDate: sql<string | null>`min(${calls.localDate})` })
     .from(calls)
-    .where(and(eq(calls.productionId, productionId), eq(calls.state, "published"), sql`${calls.localDate} > ${localDate}`));
+    .where(
+      and(
+        eq(calls.productionId, productionId),
+        eq(calls.state, "published"),
+        sql`${calls.localDate} > ${localDate}`,
+      ),
+    );
   if (!next?.localDate) return [];
-  return savedCalls(productionId, and(eq(calls.localDate, next.localDate), eq(calls.state, "published")));
+  return savedCalls(
+    productionId,
+    and(eq(calls.localDate, next.localDate), eq(calls.state, "published")),
+  );
 }

@@ -86,7 +86,10 @@ export async function planCall(
     const number = block.kind === "number" ? score.numbers.get(block.numberId ?? "") : undefined;
     const roleName = (roleId: string): string => score.roleNames.get(roleId) ?? "";
     const byScore: CalledPerson[] = (need?.people ?? []).map(({ personId, roleIds }) => {
-      const letOff = draft.hand.find((change) => change.act === "excuse" && change.personId === personId && covers(change, block.key));
+      const letOff = draft.hand.find(
+        (change) =>
+          change.act === "excuse" && change.personId === personId && covers(change, block.key),
+      );
       return {
         personId,
         roleNames: roleIds.map(roleName),
@@ -129,7 +132,8 @@ export async function planCall(
 
 type HandChange = CallDraft["hand"][number];
 
-const covers = (change: HandChange, key: string): boolean => change.keys.length === 0 || change.keys.includes(key);
+const covers = (change: HandChange, key: string): boolean =>
+  change.keys.length === 0 || change.keys.includes(key);
 
 /** People called extra; someone the score needs anyway stays called by the score. */
 function byHand(draft: CallDraft, key: string, byScore: CalledPerson[]): CalledPerson[] {
@@ -149,11 +153,16 @@ function byHand(draft: CallDraft, key: string, byScore: CalledPerson[]): CalledP
 }
 
 /** Ids from a form are only believed once they are found in this production (or its company, for rooms). */
-async function assertTheirs(scope: ProductionScope, draft: CallDraft, score: ScoreAndCast): Promise<void> {
+async function assertTheirs(
+  scope: ProductionScope,
+  draft: CallDraft,
+  score: ScoreAndCast,
+): Promise<void> {
   const fields: Record<string, string> = {};
   draft.blocks.forEach((block, index) => {
     if (block.kind === "number" && !score.numbers.has(block.numberId ?? "")) {
-      fields[`blocks.${index}.numberId`] = "This number is not in the score any more. Choose another.";
+      fields[`blocks.${index}.numberId`] =
+        "This number is not in the score any more. Choose another.";
     }
   });
   if (draft.roomId !== null) {
@@ -163,14 +172,25 @@ async function assertTheirs(scope: ProductionScope, draft: CallDraft, score: Sco
       .where(and(eq(rooms.id, draft.roomId), eq(rooms.companyId, scope.companyId)));
     if (!room) fields["roomId"] = "This room is not there any more. Choose another.";
   }
-  const asked = [draft.leaderId, draft.pianistId, ...draft.hand.filter(({ act }) => act === "call").map(({ personId }) => personId)];
-  const held = await kindsHeld(scope, asked.filter((id) => id !== null));
+  const asked = [
+    draft.leaderId,
+    draft.pianistId,
+    ...draft.hand.filter(({ act }) => act === "call").map(({ personId }) => personId),
+  ];
+  const held = await kindsHeld(
+    scope,
+    asked.filter((id) => id !== null),
+  );
   const holds = (personId: string | null, kinds?: readonly string[]): boolean =>
-    personId === null || (held.get(personId)?.some((kind) => kinds === undefined || kinds.includes(kind)) ?? false);
-  if (!holds(draft.leaderId)) fields["leaderId"] = "This person has no position in the production. Choose another.";
-  if (!holds(draft.pianistId, AT_THE_PIANO)) fields["pianistId"] = "This person does not play for the production. Choose another.";
+    personId === null ||
+    (held.get(personId)?.some((kind) => kinds === undefined || kinds.includes(kind)) ?? false);
+  if (!holds(draft.leaderId))
+    fields["leaderId"] = "This person has no position in the production. Choose another.";
+  if (!holds(draft.pianistId, AT_THE_PIANO))
+    fields["pianistId"] = "This person does not play for the production. Choose another.";
   if (draft.hand.some((change) => change.act === "call" && !holds(change.personId))) {
-    fields["hand"] = "Somebody called by hand has no position in the production any more. Take them out.";
+    fields["hand"] =
+      "Somebody called by hand has no position in the production any more. Take them out.";
   }
   if (Object.keys(fields).length > 0) throw new AppError("invalid", undefined, { fields });
 }
@@ -178,7 +198,10 @@ async function assertTheirs(scope: ProductionScope, draft: CallDraft, score: Sco
 /** Music directors often play their own calls. */
 export const AT_THE_PIANO = ["accompanist", "music_director", "assistant_md"] as const;
 
-async function kindsHeld(scope: ProductionScope, personIds: string[]): Promise<Map<string, string[]>> {
+async function kindsHeld(
+  scope: ProductionScope,
+  personIds: string[],
+): Promise<Map<string, string[]>> {
   if (personIds.length === 0) return new Map();
   const rows = await db
     .select({ personId: positions.personId, kind: positions.kind })
@@ -191,5 +214,10 @@ async function kindsHeld(scope: ProductionScope, personIds: string[]): Promise<M
         isNull(positions.endedAt),
       ),
     );
-  return new Map([...groupBy(rows, (row) => row.personId)].map(([personId, theirs]) => [personId, theirs.map(({ kind }) => kind)]));
+  return new Map(
+    [...groupBy(rows, (row) => row.personId)].map(([personId, theirs]) => [
+      personId,
+      theirs.map(({ kind }) => kind),
+    ]),
+  );
 }

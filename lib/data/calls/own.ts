@@ -8,7 +8,15 @@ import { groupBy } from "@/lib/group-by";
 import type { Actor } from "@/lib/permissions/types";
 import { blockTimes } from "@/lib/schedule/block-times";
 
-export type OwnBlock = { id: string; from: Date; to: Date; label: string | null; title: string; bars: string | null; detail: string | null };
+export type OwnBlock = {
+  id: string;
+  from: Date;
+  to: Date;
+  label: string | null;
+  title: string;
+  bars: string | null;
+  detail: string | null;
+};
 
 export type OwnCall = {
   callId: string;
@@ -34,7 +42,10 @@ export type OwnCall = {
  * The published calls the actor is called to, leads or plays for, in every production where they hold a position, from
  * `after` (now unless told) on, in order. Only their own blocks; nobody else is named.
  */
-export async function listOwnCalls(actor: Actor, { after = new Date() }: { after?: Date } = {}): Promise<OwnCall[]> {
+export async function listOwnCalls(
+  actor: Actor,
+  { after = new Date() }: { after?: Date } = {},
+): Promise<OwnCall[]> {
   const held = actor.positions.filter((position) => position.productionId !== null);
   const productionIds = [...new Set(held.flatMap((position) => position.productionId ?? []))];
   const mine = [...new Set(held.map((position) => position.personId))];
@@ -63,7 +74,10 @@ export async function listOwnCalls(actor: Actor, { after = new Date() }: { after
       address: venues.address,
     })
     .from(calls)
-    .innerJoin(productions, and(eq(productions.id, calls.productionId), isNull(productions.removedAt)))
+    .innerJoin(
+      productions,
+      and(eq(productions.id, calls.productionId), isNull(productions.removedAt)),
+    )
     .innerJoin(companies, eq(companies.id, productions.companyId))
     .leftJoin(rooms, eq(rooms.id, calls.roomId))
     .leftJoin(venues, eq(venues.id, rooms.venueId))
@@ -72,11 +86,18 @@ export async function listOwnCalls(actor: Actor, { after = new Date() }: { after
         inArray(calls.productionId, productionIds),
         eq(calls.state, "published"),
         gt(calls.endsAt, after),
-        or(inArray(calls.leaderId, mine), inArray(calls.pianistId, mine), inArray(calls.id, calledBlocks)),
+        or(
+          inArray(calls.leaderId, mine),
+          inArray(calls.pianistId, mine),
+          inArray(calls.id, calledBlocks),
+        ),
       ),
     )
     .orderBy(asc(calls.startsAt), asc(calls.id));
-  const own = await ownBlocks(rows.map((row) => row.callId), mine);
+  const own = await ownBlocks(
+    rows.map((row) => row.callId),
+    mine,
+  );
   return rows.flatMap(({ startsAt, endsAt, leaderId, pianistId, ...row }) => {
     const whole = [leaderId, pianistId].some((id) => id !== null && mine.includes(id));
     const timed = blockTimes(startsAt, own.get(row.callId) ?? []);
@@ -90,7 +111,15 @@ export async function listOwnCalls(actor: Actor, { after = new Date() }: { after
         whole,
         from: whole ? startsAt : first.from,
         releasedAt: whole ? endsAt : last.to,
-        blocks: shown.map(({ id, from, to, label, title, bars, detail }) => ({ id, from, to, label, title, bars, detail })),
+        blocks: shown.map(({ id, from, to, label, title, bars, detail }) => ({
+          id,
+          from,
+          to,
+          label,
+          title,
+          bars,
+          detail,
+        })),
       },
     ];
   });
@@ -119,7 +148,13 @@ async function ownBlocks(callIds: string[], mine: string[]) {
       .select({ blockId: called.blockId })
       .from(called)
       .innerJoin(blocks, eq(blocks.id, called.blockId))
-      .where(and(inArray(blocks.callId, callIds), inArray(called.personId, mine), eq(called.excused, false))),
+      .where(
+        and(
+          inArray(blocks.callId, callIds),
+          inArray(called.personId, mine),
+          eq(called.excused, false),
+        ),
+      ),
   ]);
   const ids = new Set(theirs.map((row) => row.blockId));
   return groupBy(

@@ -24,7 +24,10 @@ export type PublishAnswer = { published: true } | { published: false; ask: strin
  * Publishes a draft: takes the room and the pianist, or throws `taken` with by what and when. Clashes of people do not
  * stand in the way, but are asked about once: without `despite` the answer lists them and nothing is written.
  */
-export async function publishCall(actor: Actor, input: z.output<typeof publishCallSchema>): Promise<PublishAnswer> {
+export async function publishCall(
+  actor: Actor,
+  input: z.output<typeof publishCallSchema>,
+): Promise<PublishAnswer> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const call = await callToHold(scope, input.callId);
   if (!input.despite) {
@@ -34,10 +37,15 @@ export async function publishCall(actor: Actor, input: z.output<typeof publishCa
   await orTaken(scope, call, () =>
     inTransaction(async (tx) => {
       const locked = await lockCall(tx, scope.id, input.callId, input.version);
-      if (locked.state === "published") throw new AppError("stale", "This call is published already. Load it again.");
-      if (locked.state === "cancelled") throw new AppError("refused", "This call is cancelled. Restore it first, then publish.");
+      if (locked.state === "published")
+        throw new AppError("stale", "This call is published already. Load it again.");
+      if (locked.state === "cancelled")
+        throw new AppError("refused", "This call is cancelled. Restore it first, then publish.");
       await holdForCall(tx, scope.id, { ...call, ...timesOf(locked) });
-      await tx.update(calls).set({ state: "published", version: sql`${calls.version} + 1` }).where(eq(calls.id, locked.id));
+      await tx
+        .update(calls)
+        .set({ state: "published", version: sql`${calls.version} + 1` })
+        .where(eq(calls.id, locked.id));
       await audit(tx, actor, scope, "call.publish", "Published", locked);
     }),
   );
@@ -52,24 +60,36 @@ export async function cancelCall(
   const scope = await productionFor(actor, input.productionId, "calls:change");
   return inTransaction(async (tx) => {
     const call = await lockCall(tx, scope.id, input.callId, input.version);
-    if (call.state === "cancelled") throw new AppError("stale", "This call is cancelled already. Load it again.");
+    if (call.state === "cancelled")
+      throw new AppError("stale", "This call is cancelled already. Load it again.");
     await freeOfCall(tx, call.id);
-    await tx.update(calls).set({ state: "cancelled", version: sql`${calls.version} + 1` }).where(eq(calls.id, call.id));
+    await tx
+      .update(calls)
+      .set({ state: "cancelled", version: sql`${calls.version} + 1` })
+      .where(eq(calls.id, call.id));
     await audit(tx, actor, scope, "call.cancel", "Cancelled", call);
     return { was: call.state, version: call.version + 1 };
   });
 }
 
 /** Takes a cancelling back: as a draft, or published again while room and pianist are still free (else `taken`). */
-export async function restoreCall(actor: Actor, input: z.output<typeof restoreCallSchema>): Promise<void> {
+export async function restoreCall(
+  actor: Actor,
+  input: z.output<typeof restoreCallSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const call = await callToHold(scope, input.callId);
   await orTaken(scope, call, () =>
     inTransaction(async (tx) => {
       const locked = await lockCall(tx, scope.id, input.callId, input.version);
-      if (locked.state !== "cancelled") throw new AppError("stale", "This call stands again already. Load it again.");
-      if (input.to === "published") await holdForCall(tx, scope.id, { ...call, ...timesOf(locked) });
-      await tx.update(calls).set({ state: input.to, version: sql`${calls.version} + 1` }).where(eq(calls.id, locked.id));
+      if (locked.state !== "cancelled")
+        throw new AppError("stale", "This call stands again already. Load it again.");
+      if (input.to === "published")
+        await holdForCall(tx, scope.id, { ...call, ...timesOf(locked) });
+      await tx
+        .update(calls)
+        .set({ state: input.to, version: sql`${calls.version} + 1` })
+        .where(eq(calls.id, locked.id));
       await audit(tx, actor, scope, "call.restore", "Restored", locked);
     }),
   );
@@ -77,11 +97,22 @@ export async function restoreCall(actor: Actor, input: z.output<typeof restoreCa
 
 type Locked = Awaited<ReturnType<typeof lockCall>>;
 
-const timesOf = ({ roomId, pianistId, startsAt, endsAt }: Locked) => ({ roomId, pianistId, startsAt, endsAt });
+const timesOf = ({ roomId, pianistId, startsAt, endsAt }: Locked) => ({
+  roomId,
+  pianistId,
+  startsAt,
+  endsAt,
+});
 
 async function callToHold(scope: ProductionScope, callId: string) {
   const [call] = await db
-    .select({ callId: calls.id, roomId: calls.roomId, pianistId: calls.pianistId, startsAt: calls.startsAt, endsAt: calls.endsAt })
+    .select({
+      callId: calls.id,
+      roomId: calls.roomId,
+      pianistId: calls.pianistId,
+      startsAt: calls.startsAt,
+      endsAt: calls.endsAt,
+    })
     .from(calls)
     .where(and(eq(calls.id, callId), eq(calls.productionId, scope.id)));
   if (!call) throw new AppError("not-found");
@@ -89,7 +120,11 @@ async function callToHold(scope: ProductionScope, callId: string) {
 }
 
 /** The clashes of people, in words; the room's and the pianist's are refused by the database itself. */
-async function clashesToAsk(actor: Actor, scope: ProductionScope, callId: string): Promise<string[]> {
+async function clashesToAsk(
+  actor: Actor,
+  scope: ProductionScope,
+  callId: string,
+): Promise<string[]> {
   const saved = await savedCalls(scope.id, eq(calls.id, callId));
   const { plans } = await savedPlans(await readScoreAndCast(db, scope.id), saved);
   const plan = plans.get(callId);
@@ -97,7 +132,12 @@ async function clashesToAsk(actor: Actor, scope: ProductionScope, callId: string
   const facts = await readFacts(scope, [plan]);
   const hidden = !seesCast(actor, scope);
   return describeClashes(plan, facts, startsWithin(plan))
-    .filter((clash) => clash.kind !== "room" && clash.kind !== "pianist" && (!hidden || shownWithoutCast(plan, clash)))
+    .filter(
+      (clash) =>
+        clash.kind !== "room" &&
+        clash.kind !== "pianist" &&
+        (!hidden || shownWithoutCast(plan, clash)),
+    )
     .map((clash) => clash.words);
 }
 

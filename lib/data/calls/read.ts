@@ -54,8 +54,15 @@ export type CallRead = SavedCall & {
 };
 
 /** One call with everything its page shows. Drafts and cancelled calls do not exist for those who only read. */
-export async function readCall(actor: Actor, { productionId, callId }: { productionId: string; callId: string }): Promise<CallRead> {
-  const { scope, saved, plan, names, score, mayChange } = await loadCall(actor, productionId, callId);
+export async function readCall(
+  actor: Actor,
+  { productionId, callId }: { productionId: string; callId: string },
+): Promise<CallRead> {
+  const { scope, saved, plan, names, score, mayChange } = await loadCall(
+    actor,
+    productionId,
+    callId,
+  );
   const castHidden = saved.state !== "published" && !seesCast(actor, scope);
   return {
     ...saved,
@@ -79,12 +86,18 @@ export async function readCall(actor: Actor, { productionId, callId }: { product
     mayChange,
     castHidden,
     draft: mayChange ? draftOf(saved, plan) : null,
-    outOfStep: mayChange && !castHidden ? await outOfStep(scope, plan, score) : { needed: [], notNeeded: [] },
+    outOfStep:
+      mayChange && !castHidden
+        ? await outOfStep(scope, plan, score)
+        : { needed: [], notNeeded: [] },
   };
 }
 
 /** A call before it is changed: its form and version. */
-export async function readCallDraft(actor: Actor, { productionId, callId }: { productionId: string; callId: string }): Promise<{ draft: CallDraft; version: number; state: SavedCall["state"] }> {
+export async function readCallDraft(
+  actor: Actor,
+  { productionId, callId }: { productionId: string; callId: string },
+): Promise<{ draft: CallDraft; version: number; state: SavedCall["state"] }> {
   const { saved, plan, mayChange } = await loadCall(actor, productionId, callId);
   if (!mayChange) throw new AppError("not-allowed");
   return { draft: draftOf(saved, plan), version: saved.version, state: saved.state };
@@ -97,20 +110,28 @@ export type CallClashes = {
 };
 
 /** What a saved call clashes with now, for those who plan calls. */
-export async function readCallClashes(actor: Actor, { productionId, callId }: { productionId: string; callId: string }): Promise<CallClashes> {
+export async function readCallClashes(
+  actor: Actor,
+  { productionId, callId }: { productionId: string; callId: string },
+): Promise<CallClashes> {
   const { scope, plan, mayChange } = await loadCall(actor, productionId, callId);
   if (!mayChange) throw new AppError("not-allowed");
   const facts = await readFacts(scope, [plan]);
   const hidden = !seesCast(actor, scope);
   return {
-    clashes: describeClashes(plan, facts, startsWithin(plan)).filter((clash) => !hidden || shownWithoutCast(plan, clash)),
+    clashes: describeClashes(plan, facts, startsWithin(plan)).filter(
+      (clash) => !hidden || shownWithoutCast(plan, clash),
+    ),
     around: hidden ? [] : conflictsAround(plan, facts),
   };
 }
 
 async function loadCall(actor: Actor, productionId: string, callId: string) {
   const scope = await productionFor(actor, productionId, "calls:read");
-  const mayChange = can(actor, "calls:change", { companyId: scope.companyId, productionId: scope.id });
+  const mayChange = can(actor, "calls:change", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+  });
   const [saved] = await savedCalls(scope.id, and(eq(calls.id, callId)));
   if (!saved || (!mayChange && saved.state !== "published")) throw new AppError("not-found");
   const score = await readScoreAndCast(db, scope.id);
@@ -120,7 +141,11 @@ async function loadCall(actor: Actor, productionId: string, callId: string) {
   return { scope, saved, plan, names, score, mayChange };
 }
 
-async function outOfStep(scope: ProductionScope, plan: CallPlan, score: ScoreAndCast): Promise<CallRead["outOfStep"]> {
+async function outOfStep(
+  scope: ProductionScope,
+  plan: CallPlan,
+  score: ScoreAndCast,
+): Promise<CallRead["outOfStep"]> {
   const needs = whoIsNeeded({
     blocks: plan.blocks.map((block) => ({ id: block.key, numberId: block.numberId })),
     lines: score.lines,
@@ -129,16 +154,30 @@ async function outOfStep(scope: ProductionScope, plan: CallPlan, score: ScoreAnd
   const needed = new Set<string>();
   const notNeeded = new Set<string>();
   for (const block of plan.blocks) {
-    const now = new Set(needs.find((need) => need.blockId === block.key)?.people.map((person) => person.personId));
-    for (const personId of now) if (!block.called.some((person) => person.personId === personId)) needed.add(personId);
-    for (const person of block.called) if (person.source === "score" && !now.has(person.personId)) notNeeded.add(person.personId);
+    const now = new Set(
+      needs.find((need) => need.blockId === block.key)?.people.map((person) => person.personId),
+    );
+    for (const personId of now)
+      if (!block.called.some((person) => person.personId === personId)) needed.add(personId);
+    for (const person of block.called)
+      if (person.source === "score" && !now.has(person.personId)) notNeeded.add(person.personId);
   }
   if (needed.size === 0 && notNeeded.size === 0) return { needed: [], notNeeded: [] };
-  const called = [...needed].map((personId) => ({ personId, roleNames: [], source: "score" as const, reason: null, excused: false }));
+  const called = [...needed].map((personId) => ({
+    personId,
+    roleNames: [],
+    source: "score" as const,
+    reason: null,
+    excused: false,
+  }));
   const [block] = plan.blocks;
   // The facts know the names of everyone in a plan: those newly needed are put into one for that.
-  const facts = await readFacts(scope, [plan, ...(block ? [{ ...plan, blocks: [{ ...block, called }] }] : [])]);
-  const named = (ids: Set<string>): string[] => [...ids].map((id) => facts.names.get(id) ?? "").sort();
+  const facts = await readFacts(scope, [
+    plan,
+    ...(block ? [{ ...plan, blocks: [{ ...block, called }] }] : []),
+  ]);
+  const named = (ids: Set<string>): string[] =>
+    [...ids].map((id) => facts.names.get(id) ?? "").sort();
   return { needed: named(needed), notNeeded: named(notNeeded) };
 }
 
@@ -146,7 +185,10 @@ function conflictsAround(plan: CallPlan, facts: CallFacts): string[] {
   const met = new Set(findCallClashes(plan, facts).map((clash) => clash.withId));
   const runs = attendingRuns(plan.blocks);
   return facts.conflicts
-    .filter((conflict) => !met.has(conflict.id) && overlaps(conflict, plan) && runs.has(conflict.personId))
+    .filter(
+      (conflict) =>
+        !met.has(conflict.id) && overlaps(conflict, plan) && runs.has(conflict.personId),
+    )
     .map((conflict) => {
       const name = facts.names.get(conflict.personId) ?? "";
       const theirs = runs.get(conflict.personId) ?? [];

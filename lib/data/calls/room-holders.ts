@@ -1,7 +1,15 @@
 import "server-only";
 import { aliasedTable, and, asc, eq, gt, lt } from "drizzle-orm";
 import { db } from "@/db/client";
-import { auditionDays, auditionRooms, callbackRounds, calls, productions, roomBookings, rooms } from "@/db/schema";
+import {
+  auditionDays,
+  auditionRooms,
+  callbackRounds,
+  calls,
+  productions,
+  roomBookings,
+  rooms,
+} from "@/db/schema";
 import { CALL_PHRASES } from "@/lib/calls/call-kinds";
 import type { HeldRoom } from "@/lib/calls/types";
 import type { Interval } from "@/lib/schedule/types";
@@ -30,11 +38,21 @@ export async function readRoomHolders(companyId: string, window: Interval): Prom
     .leftJoin(ofCall, eq(ofCall.id, calls.productionId))
     .leftJoin(callbackRounds, eq(callbackRounds.id, roomBookings.callbackRoundId))
     .leftJoin(ofRound, eq(ofRound.id, callbackRounds.productionId))
-    .where(and(eq(rooms.companyId, companyId), lt(roomBookings.startsAt, window.to), gt(roomBookings.endsAt, window.from)))
+    .where(
+      and(
+        eq(rooms.companyId, companyId),
+        lt(roomBookings.startsAt, window.to),
+        gt(roomBookings.endsAt, window.from),
+      ),
+    )
     .orderBy(asc(roomBookings.startsAt));
   return rows.map(({ roomId, callId, from, to, auditions, call, callKind, round }) => {
-    if (call !== null && callKind !== null) return { roomId, callId, from, to, label: `${CALL_PHRASES[callKind]} of ${call}` };
-    const label = round === null ? `the auditions of ${auditions ?? "another production"}` : `the callbacks of ${round}`;
+    if (call !== null && callKind !== null)
+      return { roomId, callId, from, to, label: `${CALL_PHRASES[callKind]} of ${call}` };
+    const label =
+      round === null
+        ? `the auditions of ${auditions ?? "another production"}`
+        : `the callbacks of ${round}`;
     return { roomId, callId, from, to, label };
   });
 }

@@ -36,7 +36,10 @@ const leaders = aliasedTable(people, "leaders");
 const players = aliasedTable(people, "players");
 
 /** Calls of one production with their places and names, in order of start. Asks no permission: the caller has. */
-export async function savedCalls(productionId: string, where?: ReturnType<typeof and>): Promise<SavedCall[]> {
+export async function savedCalls(
+  productionId: string,
+  where?: ReturnType<typeof and>,
+): Promise<SavedCall[]> {
   return db
     .select({
       id: calls.id,
@@ -72,7 +75,10 @@ export async function savedCalls(productionId: string, where?: ReturnType<typeof
 export type SavedPlans = { plans: Map<string, CallPlan>; names: Map<string, string> };
 
 /** The blocks of saved calls with their times and who is called, as they were saved. */
-export async function savedPlans(score: ScoreAndCast, saved: readonly SavedCall[]): Promise<SavedPlans> {
+export async function savedPlans(
+  score: ScoreAndCast,
+  saved: readonly SavedCall[],
+): Promise<SavedPlans> {
   const names = new Map<string, string>();
   if (saved.length === 0) return { plans: new Map(), names };
   const [blockRows, calledRows] = await Promise.all([
@@ -91,7 +97,12 @@ export async function savedPlans(score: ScoreAndCast, saved: readonly SavedCall[
       })
       .from(blocks)
       .leftJoin(numbers, eq(numbers.id, blocks.numberId))
-      .where(inArray(blocks.callId, saved.map((call) => call.id)))
+      .where(
+        inArray(
+          blocks.callId,
+          saved.map((call) => call.id),
+        ),
+      )
       .orderBy(asc(blocks.callId), asc(blocks.place)),
     db
       .select({
@@ -105,7 +116,12 @@ export async function savedPlans(score: ScoreAndCast, saved: readonly SavedCall[
       .from(called)
       .innerJoin(blocks, eq(blocks.id, called.blockId))
       .innerJoin(people, eq(people.id, called.personId))
-      .where(inArray(blocks.callId, saved.map((call) => call.id))),
+      .where(
+        inArray(
+          blocks.callId,
+          saved.map((call) => call.id),
+        ),
+      ),
   ]);
   for (const row of calledRows) names.set(row.personId, row.name);
   const needs = whoIsNeeded({ blocks: blockRows, lines: score.lines, cast: score.cast });
@@ -138,7 +154,9 @@ export async function savedPlans(score: ScoreAndCast, saved: readonly SavedCall[
         to: block.to,
         called: (calledOf.get(block.id) ?? [])
           .map((row): CalledPerson => {
-            const need = needOf.get(block.id)?.people.find(({ personId }) => personId === row.personId);
+            const need = needOf
+              .get(block.id)
+              ?.people.find(({ personId }) => personId === row.personId);
             return {
               personId: row.personId,
               roleNames: (need?.roleIds ?? []).map(roleName),
@@ -183,7 +201,10 @@ export function draftOf(saved: SavedCall, plan: CallPlan): CallDraft {
       kind: block.kind,
       minutes: block.minutes,
       numberId: block.numberId,
-      title: block.kind === "number" || block.title === BLOCK_KIND_NAMES[block.kind] ? null : block.title,
+      title:
+        block.kind === "number" || block.title === BLOCK_KIND_NAMES[block.kind]
+          ? null
+          : block.title,
       bars: block.bars,
       detail: block.detail,
     })),

@@ -27,7 +27,9 @@ export async function createCall(actor: Actor, draft: CallDraft): Promise<string
   const { plan } = await planCall(scope, draft, null);
   const callId = newId();
   await inTransaction(async (tx) => {
-    await tx.insert(calls).values({ id: callId, productionId: scope.id, ...columnsOf(draft, plan), zone: scope.zone });
+    await tx
+      .insert(calls)
+      .values({ id: callId, productionId: scope.id, ...columnsOf(draft, plan), zone: scope.zone });
     await writeBlocks(tx, callId, plan);
     await recordAudit(tx, actor, {
       companyId: scope.companyId,
@@ -45,7 +47,10 @@ export async function createCall(actor: Actor, draft: CallDraft): Promise<string
  * Changes a call. A published one takes its new room and pianist in the same transaction: when either is taken nothing
  * is changed, and the error says by what. Throws `stale` when someone else changed it since, `refused` when it is cancelled.
  */
-export async function changeCall(actor: Actor, input: z.output<typeof changeCallSchema>): Promise<void> {
+export async function changeCall(
+  actor: Actor,
+  input: z.output<typeof changeCallSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const [known] = await db
     .select({ id: calls.id, pianistId: calls.pianistId })
@@ -58,7 +63,10 @@ export async function changeCall(actor: Actor, input: z.output<typeof changeCall
 }
 
 /** Makes a call's list again from the score and the casting of today; what was changed by hand stays. */
-export async function refreshCall(actor: Actor, input: { productionId: string; callId: string; version: number }): Promise<void> {
+export async function refreshCall(
+  actor: Actor,
+  input: { productionId: string; callId: string; version: number },
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const [saved] = await savedCalls(scope.id, eq(calls.id, input.callId));
   if (!saved) throw new AppError("not-found");
@@ -67,7 +75,13 @@ export async function refreshCall(actor: Actor, input: { productionId: string; c
   if (!before) throw new AppError("not-found");
   const draft = draftOf(saved, before);
   const { plan } = await planCall(scope, draft, saved.id);
-  await savePlan(actor, scope, { ...draft, callId: saved.id, version: input.version }, plan, "Brought up to date");
+  await savePlan(
+    actor,
+    scope,
+    { ...draft, callId: saved.id, version: input.version },
+    plan,
+    "Brought up to date",
+  );
 }
 
 async function savePlan(
@@ -77,16 +91,26 @@ async function savePlan(
   plan: CallPlan,
   verb: string,
 ): Promise<void> {
-  const holding = { callId: input.callId, roomId: input.roomId, pianistId: input.pianistId, startsAt: plan.from, endsAt: plan.to };
+  const holding = {
+    callId: input.callId,
+    roomId: input.roomId,
+    pianistId: input.pianistId,
+    startsAt: plan.from,
+    endsAt: plan.to,
+  };
   await orTaken(scope, holding, () =>
     inTransaction(async (tx) => {
       const call = await lockCall(tx, scope.id, input.callId, input.version);
-      if (call.state === "cancelled") throw new AppError("refused", "This call is cancelled. Restore it first, then change it.");
+      if (call.state === "cancelled")
+        throw new AppError("refused", "This call is cancelled. Restore it first, then change it.");
       await tx
         .update(calls)
         .set({ ...columnsOf(input, plan), version: sql`${calls.version} + 1` })
         .where(eq(calls.id, call.id));
-      const kept = await tx.select({ id: blocks.id }).from(blocks).where(eq(blocks.callId, call.id));
+      const kept = await tx
+        .select({ id: blocks.id })
+        .from(blocks)
+        .where(eq(blocks.callId, call.id));
       await tx.delete(blocks).where(eq(blocks.callId, call.id));
       await writeBlocks(tx, call.id, plan, new Set(kept.map((block) => block.id)));
       if (call.state === "published") await holdForCall(tx, scope.id, holding);
@@ -103,8 +127,17 @@ async function savePlan(
 }
 
 /** Pianists are assigned by the music team; the stage manager keeps whom they chose. */
-function assertMayChoosePianist(actor: Actor, scope: ProductionScope, wanted: string | null, before: string | null): void {
-  if (wanted === before || can(actor, "pianists:assign", { companyId: scope.companyId, productionId: scope.id })) return;
+function assertMayChoosePianist(
+  actor: Actor,
+  scope: ProductionScope,
+  wanted: string | null,
+  before: string | null,
+): void {
+  if (
+    wanted === before ||
+    can(actor, "pianists:assign", { companyId: scope.companyId, productionId: scope.id })
+  )
+    return;
   const message = "The music director assigns pianists. Leave this as it is, and ask them.";
   throw new AppError("not-allowed", message, { fields: { pianistId: message } });
 }
@@ -124,7 +157,12 @@ function columnsOf(draft: CallDraft, plan: CallPlan) {
 }
 
 /** A block that was there before keeps its id, so that two issues of a call sheet can be compared. */
-async function writeBlocks(tx: Tx, callId: string, plan: CallPlan, kept: ReadonlySet<string> = new Set()): Promise<void> {
+async function writeBlocks(
+  tx: Tx,
+  callId: string,
+  plan: CallPlan,
+  kept: ReadonlySet<string> = new Set(),
+): Promise<void> {
   const rows = plan.blocks.map((block, index) => ({
     row: {
       id: kept.has(block.key) ? block.key : newId(),
@@ -141,13 +179,22 @@ async function writeBlocks(tx: Tx, callId: string, plan: CallPlan, kept: Readonl
   }));
   await tx.insert(blocks).values(rows.map(({ row }) => row));
   const people = rows.flatMap(({ row, people: theirs }) =>
-    theirs.map(({ personId, source, reason, excused }) => ({ blockId: row.id, personId, source, reason, excused })),
+    theirs.map(({ personId, source, reason, excused }) => ({
+      blockId: row.id,
+      personId,
+      source,
+      reason,
+      excused,
+    })),
   );
   if (people.length > 0) await tx.insert(called).values(people);
 }
 
 /** "music call, Tue 6 Apr, 18:30–21:45". */
-export function callInWords(kind: keyof typeof CALL_KIND_NAMES, time: { from: Date; to: Date; zone: string }): string {
+export function callInWords(
+  kind: keyof typeof CALL_KIND_NAMES,
+  time: { from: Date; to: Date; zone: string },
+): string {
   const day = shortDay(localDay(time.from, time.zone));
   return `${CALL_KIND_NAMES[kind].toLowerCase()}, ${day}, ${clock(time.from, time.zone)}–${clock(time.to, time.zone)}`;
 }

@@ -2,8 +2,21 @@ import "server-only";
 import { and, asc, eq, gt, inArray, isNull } from "drizzle-orm";
 import { db } from "@/db/client";
 import {
-  auditionRooms, blocks, called, calls, companies, numbers, people, pianistSessions, positions, productions, rooms, signUps,
-  slotAssignments, slots, venues,
+  auditionRooms,
+  blocks,
+  called,
+  calls,
+  companies,
+  numbers,
+  people,
+  pianistSessions,
+  positions,
+  productions,
+  rooms,
+  signUps,
+  slotAssignments,
+  slots,
+  venues,
 } from "@/db/schema";
 import { BLOCK_KIND_NAMES, CALL_KIND_NAMES } from "@/lib/calls/call-kinds";
 import { groupBy } from "@/lib/group-by";
@@ -46,7 +59,10 @@ export type OwnSession = Interval & {
  * The actor's own sessions as a pianist from `after` (now unless told) on, in order, in every company: where, with whom in
  * which order, what music, and when rests come. No notes, no casting, no contacts but the two who can be rung.
  */
-export async function listOwnSessions(actor: Actor, { after = new Date() }: { after?: Date } = {}): Promise<OwnSession[]> {
+export async function listOwnSessions(
+  actor: Actor,
+  { after = new Date() }: { after?: Date } = {},
+): Promise<OwnSession[]> {
   const held = actor.positions.filter((position) => position.productionId !== null);
   const mine = [...new Set(held.map((position) => position.personId))];
   const productionIds = [...new Set(held.flatMap((position) => position.productionId ?? []))];
@@ -68,11 +84,20 @@ export async function listOwnSessions(actor: Actor, { after = new Date() }: { af
       auditionPlaceId: auditionRooms.roomId,
     })
     .from(pianistSessions)
-    .innerJoin(productions, and(eq(productions.id, pianistSessions.productionId), isNull(productions.removedAt)))
+    .innerJoin(
+      productions,
+      and(eq(productions.id, pianistSessions.productionId), isNull(productions.removedAt)),
+    )
     .innerJoin(companies, eq(companies.id, productions.companyId))
     .leftJoin(calls, eq(calls.id, pianistSessions.callId))
     .leftJoin(auditionRooms, eq(auditionRooms.id, pianistSessions.auditionRoomId))
-    .where(and(inArray(pianistSessions.personId, mine), inArray(pianistSessions.productionId, productionIds), gt(pianistSessions.endsAt, after)))
+    .where(
+      and(
+        inArray(pianistSessions.personId, mine),
+        inArray(pianistSessions.productionId, productionIds),
+        gt(pianistSessions.endsAt, after),
+      ),
+    )
     .orderBy(asc(pianistSessions.startsAt), asc(pianistSessions.id));
   if (rows.length === 0) return [];
   const [places, contacts, sung, played] = await Promise.all([
@@ -83,7 +108,8 @@ export async function listOwnSessions(actor: Actor, { after = new Date() }: { af
   ]);
   return rows.map(({ auditionRoomId, callId, callKind, callRoomId, auditionPlaceId, ...row }) => {
     const place = places.get(callRoomId ?? auditionPlaceId ?? "");
-    const all = (auditionRoomId === null ? played.get(callId ?? "") : sung.get(auditionRoomId)) ?? [];
+    const all =
+      (auditionRoomId === null ? played.get(callId ?? "") : sung.get(auditionRoomId)) ?? [];
     const inside = all.filter((item) => item.from >= row.from && item.from < row.to);
     return {
       ...row,
@@ -93,7 +119,11 @@ export async function listOwnSessions(actor: Actor, { after = new Date() }: { af
       address: place?.address ?? null,
       music: inside.filter((item) => !item.rest).map(({ rest: _rest, ...music }) => music),
       rests: inside.filter((item) => item.rest).map(({ from, to }) => ({ from, to })),
-      contacts: (contacts.get(row.productionId) ?? []).map(({ name, kind, phone }) => ({ name, position: POSITION_NAMES[kind], phone })),
+      contacts: (contacts.get(row.productionId) ?? []).map(({ name, kind, phone }) => ({
+        name,
+        position: POSITION_NAMES[kind],
+        phone,
+      })),
     };
   });
 }
@@ -112,10 +142,21 @@ async function placesOf(roomIds: string[]) {
 
 async function contactsOf(productionIds: string[]) {
   const rows = await db
-    .select({ productionId: positions.productionId, name: people.name, kind: positions.kind, phone: people.phone })
+    .select({
+      productionId: positions.productionId,
+      name: people.name,
+      kind: positions.kind,
+      phone: people.phone,
+    })
     .from(positions)
     .innerJoin(people, and(eq(people.id, positions.personId), isNull(people.removedAt)))
-    .where(and(inArray(positions.productionId, productionIds), inArray(positions.kind, ["music_director", "stage_manager"]), isNull(positions.endedAt)))
+    .where(
+      and(
+        inArray(positions.productionId, productionIds),
+        inArray(positions.kind, ["music_director", "stage_manager"]),
+        isNull(positions.endedAt),
+      ),
+    )
     .orderBy(asc(positions.kind), asc(people.name));
   return groupBy(rows, (row) => row.productionId ?? "");
 }
@@ -139,7 +180,9 @@ async function auditionsIn(roomIds: string[]): Promise<Map<string, Item[]>> {
     .leftJoin(people, eq(people.id, signUps.personId))
     .where(inArray(slots.auditionRoomId, roomIds))
     .orderBy(asc(slots.startsAt));
-  const shown = rows.filter((row) => row.name !== null || row.kind === "rest" || row.kind === "lunch");
+  const shown = rows.filter(
+    (row) => row.name !== null || row.kind === "rest" || row.kind === "lunch",
+  );
   const byRoom = groupBy(shown, (row) => row.roomId);
   return new Map(
     [...byRoom].map(([roomId, theirs]) => [

@@ -25,7 +25,10 @@ export type ComposedSheet = {
 };
 
 /** The call sheet of a local day as it would go out now, from the published calls of the day. Asks no permission: the caller has. */
-export async function composeSheet(scope: ProductionScope, localDate: string): Promise<ComposedSheet> {
+export async function composeSheet(
+  scope: ProductionScope,
+  localDate: string,
+): Promise<ComposedSheet> {
   const [saved, score] = await Promise.all([
     savedCalls(scope.id, and(eq(calls.localDate, localDate), eq(calls.state, "published"))),
     readScoreAndCast(db, scope.id),
@@ -48,8 +51,13 @@ export async function composeSheet(scope: ProductionScope, localDate: string): P
       companyName: scope.companyName,
       localDate,
       zone: scope.zone,
-      blocks: planned.flatMap(({ call, plan }) => plan.blocks.map((block) => sheetBlock(call, block, nameOf))),
-      released: releasesOf(planned.map(({ plan }) => plan)).map(({ personId, release }) => ({ who: nameOf(personId), at: clock(release, scope.zone) })),
+      blocks: planned.flatMap(({ call, plan }) =>
+        plan.blocks.map((block) => sheetBlock(call, block, nameOf)),
+      ),
+      released: releasesOf(planned.map(({ plan }) => plan)).map(({ personId, release }) => ({
+        who: nameOf(personId),
+        at: clock(release, scope.zone),
+      })),
       music: planned.flatMap(({ call, plan }) => musicLines(call, plan, planned.length > 1)),
       tomorrow: tomorrow.map((call) => nextLine(call, scope)),
       away,
@@ -62,8 +70,17 @@ export async function composeSheet(scope: ProductionScope, localDate: string): P
 
 type Planned = { call: SavedCall; plan: CallPlan }[];
 
-function sheetBlock(call: SavedCall, block: CallPlan["blocks"][number], nameOf: (id: string) => string): CallSheetBlock {
-  const detail = [call.kind === "music" ? "" : CALL_KIND_NAMES[call.kind].toLowerCase(), block.detail ?? ""].filter((part) => part !== "").join(", ");
+function sheetBlock(
+  call: SavedCall,
+  block: CallPlan["blocks"][number],
+  nameOf: (id: string) => string,
+): CallSheetBlock {
+  const detail = [
+    call.kind === "music" ? "" : CALL_KIND_NAMES[call.kind].toLowerCase(),
+    block.detail ?? "",
+  ]
+    .filter((part) => part !== "")
+    .join(", ");
   return {
     id: block.key,
     from: clock(block.from, call.zone),
@@ -80,13 +97,25 @@ function sheetBlock(call: SavedCall, block: CallPlan["blocks"][number], nameOf: 
 }
 
 function releasesOf(plans: CallPlan[]) {
-  return releaseTimes(plans.flatMap((plan) => plan.blocks.map((block) => ({ from: block.from, to: block.to, people: calledTo(block) }))));
+  return releaseTimes(
+    plans.flatMap((plan) =>
+      plan.blocks.map((block) => ({ from: block.from, to: block.to, people: calledTo(block) })),
+    ),
+  );
 }
 
 /** Who it concerns: everyone called, and whoever leads or plays, who are there for the whole of their calls. */
 function partsOf(planned: Planned, nameOf: (id: string) => string): Record<string, OwnPart> {
-  const parts = new Map<string, { name: string; blocks: CallPlan["blocks"]; from: Date; to: Date }>();
-  const add = (personId: string, name: string, blocks: CallPlan["blocks"], time: { from: Date; to: Date }): void => {
+  const parts = new Map<
+    string,
+    { name: string; blocks: CallPlan["blocks"]; from: Date; to: Date }
+  >();
+  const add = (
+    personId: string,
+    name: string,
+    blocks: CallPlan["blocks"],
+    time: { from: Date; to: Date },
+  ): void => {
     const seen = parts.get(personId);
     parts.set(personId, {
       name,
@@ -100,31 +129,49 @@ function partsOf(planned: Planned, nameOf: (id: string) => string): Record<strin
       [call.leaderId, call.leader],
       [call.pianistId, call.pianist],
     ]);
-    for (const [personId, name] of whole) if (personId !== null) add(personId, name ?? "", plan.blocks, plan);
+    for (const [personId, name] of whole)
+      if (personId !== null) add(personId, name ?? "", plan.blocks, plan);
     for (const block of plan.blocks) {
-      for (const personId of calledTo(block)) if (!whole.has(personId)) add(personId, nameOf(personId), [block], block);
+      for (const personId of calledTo(block))
+        if (!whole.has(personId)) add(personId, nameOf(personId), [block], block);
     }
   }
   const zone = planned[0]?.call.zone ?? "UTC";
   return Object.fromEntries(
     [...parts].map(([personId, part]) => [
       personId,
-      { name: part.name, blockIds: part.blocks.map((block) => block.key), from: clock(part.from, zone), releasedAt: clock(part.to, zone) },
+      {
+        name: part.name,
+        blockIds: part.blocks.map((block) => block.key),
+        from: clock(part.from, zone),
+        releasedAt: clock(part.to, zone),
+      },
     ]),
   );
 }
 
 function musicLines(call: SavedCall, plan: CallPlan, several: boolean): string[] {
-  const breaks = plan.blocks.filter((block) => block.kind === "break").map((block) => clockSpan(block.from, block.to, call.zone));
+  const breaks = plan.blocks
+    .filter((block) => block.kind === "break")
+    .map((block) => clockSpan(block.from, block.to, call.zone));
   const when = several ? ` from ${clock(plan.from, call.zone)}` : "";
   return [
     ...(call.leader === null ? [] : [`${call.leader} leads${when}`]),
-    ...(call.pianist === null ? [] : [`${call.pianist} at the piano${when}${breaks.length === 0 ? "" : `, rests ${breaks.join(" and ")}`}`]),
+    ...(call.pianist === null
+      ? []
+      : [
+          `${call.pianist} at the piano${when}${breaks.length === 0 ? "" : `, rests ${breaks.join(" and ")}`}`,
+        ]),
   ];
 }
 
 function nextLine(call: SavedCall, scope: ProductionScope): string {
-  return [shortDay(call.localDate, scope.locale), clock(call.startsAt, call.zone), CALL_KIND_NAMES[call.kind].toLowerCase(), call.room]
+  return [
+    shortDay(call.localDate, scope.locale),
+    clock(call.startsAt, call.zone),
+    CALL_KIND_NAMES[call.kind].toLowerCase(),
+    call.room,
+  ]
     .filter((part) => part !== null)
     .join(", ");
 }
@@ -133,11 +180,30 @@ function nextLine(call: SavedCall, scope: ProductionScope): string {
 async function awayOn(scope: ProductionScope, localDate: string): Promise<string[]> {
   const day = localDateRange(localDate, scope.zone);
   const rows = await db
-    .selectDistinct({ id: conflicts.id, name: people.name, from: conflicts.startsAt, to: conflicts.endsAt })
+    .selectDistinct({
+      id: conflicts.id,
+      name: people.name,
+      from: conflicts.startsAt,
+      to: conflicts.endsAt,
+    })
     .from(conflicts)
     .innerJoin(people, eq(people.id, conflicts.personId))
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), isNull(positions.endedAt)))
-    .where(and(eq(conflicts.state, "agreed"), isNull(conflicts.removedAt), lt(conflicts.startsAt, day.to), gt(conflicts.endsAt, day.from)))
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        isNull(positions.endedAt),
+      ),
+    )
+    .where(
+      and(
+        eq(conflicts.state, "agreed"),
+        isNull(conflicts.removedAt),
+        lt(conflicts.startsAt, day.to),
+        gt(conflicts.endsAt, day.from),
+      ),
+    )
     .orderBy(asc(people.name));
   return rows.map(({ name, from, to }) => {
     if (from <= day.from && to >= day.to) return `${name} (agreed)`;
@@ -152,15 +218,26 @@ async function stageManager(scope: ProductionScope): Promise<string | null> {
     .select({ name: people.name, phone: people.phone })
     .from(positions)
     .innerJoin(people, eq(people.id, positions.personId))
-    .where(and(eq(positions.productionId, scope.id), eq(positions.kind, "stage_manager"), isNull(positions.endedAt), isNull(people.removedAt)))
+    .where(
+      and(
+        eq(positions.productionId, scope.id),
+        eq(positions.kind, "stage_manager"),
+        isNull(positions.endedAt),
+        isNull(people.removedAt),
+      ),
+    )
     .orderBy(asc(people.name))
     .limit(1);
   if (!row) return null;
-  return row.phone === null ? `Late? Tell ${row.name}, stage manager` : `Late? ${row.name}, stage manager, ${row.phone}`;
+  return row.phone === null
+    ? `Late? Tell ${row.name}, stage manager`
+    : `Late? ${row.name}, stage manager, ${row.phone}`;
 }
 
 /** "Room 2, Lantern Street, 4 Quay Lane", once for each room of the day. */
 function placesOf(saved: SavedCall[]): string[] {
-  const lines = saved.map((call) => [call.room, call.venue, call.address].filter((part) => part !== null && part !== "").join(", "));
+  const lines = saved.map((call) =>
+    [call.room, call.venue, call.address].filter((part) => part !== null && part !== "").join(", "),
+  );
   return [...new Set(lines)].filter((line) => line !== "");
 }

@@ -26,10 +26,19 @@ import type { ComposedSheet, OwnPart } from "./compose";
 /** What is kept of an issue: the sheet as it went out, and each person's part of it by id. */
 export type IssueSnapshot = { sheet: CallSheet; people: Record<string, OwnPart> };
 
-export type LastIssue = { id: string; number: number; issuedAt: Date; concerns: string[]; snapshot: IssueSnapshot };
+export type LastIssue = {
+  id: string;
+  number: number;
+  issuedAt: Date;
+  concerns: string[];
+  snapshot: IssueSnapshot;
+};
 
 /** The newest issue of a day, or null. Asks no permission: the caller has. */
-export async function lastIssue(productionId: string, localDate: string): Promise<LastIssue | null> {
+export async function lastIssue(
+  productionId: string,
+  localDate: string,
+): Promise<LastIssue | null> {
   const [row] = await db
     .select({
       id: callSheetIssues.id,
@@ -39,7 +48,9 @@ export async function lastIssue(productionId: string, localDate: string): Promis
       snapshot: callSheetIssues.snapshot,
     })
     .from(callSheetIssues)
-    .where(and(eq(callSheetIssues.productionId, productionId), eq(callSheetIssues.localDate, localDate)))
+    .where(
+      and(eq(callSheetIssues.productionId, productionId), eq(callSheetIssues.localDate, localDate)),
+    )
     .orderBy(desc(callSheetIssues.number))
     .limit(1);
   return row ? { ...row, snapshot: row.snapshot as IssueSnapshot } : null;
@@ -58,9 +69,15 @@ export type SheetDay = {
 };
 
 /** The sheet of a local day as it would go out now, with what changed since the last issue. */
-export async function readSheetDay(actor: Actor, { productionId, localDate }: { productionId: string; localDate: string }): Promise<SheetDay> {
+export async function readSheetDay(
+  actor: Actor,
+  { productionId, localDate }: { productionId: string; localDate: string },
+): Promise<SheetDay> {
   const scope = await productionFor(actor, productionId, "sheets:read");
-  const [composed, last] = await Promise.all([composeSheet(scope, localDate), lastIssue(scope.id, localDate)]);
+  const [composed, last] = await Promise.all([
+    composeSheet(scope, localDate),
+    lastIssue(scope.id, localDate),
+  ]);
   const sheet = finishSheet(composed, last, new Date(), scope);
   return {
     sheet,
@@ -78,17 +95,35 @@ export async function readSheetDay(actor: Actor, { productionId, localDate }: { 
  * people the issue before called and this one does not). Throws `stale` when a call or another issue came in between,
  * `refused` when there is nothing to send.
  */
-export async function issueSheet(actor: Actor, input: z.output<typeof issueSheetSchema>): Promise<{ issueId: string; number: number; told: number }> {
+export async function issueSheet(
+  actor: Actor,
+  input: z.output<typeof issueSheetSchema>,
+): Promise<{ issueId: string; number: number; told: number }> {
   const scope = await productionFor(actor, input.productionId, "sheets:issue");
   const before = await standingCalls(db, scope.id, input.localDate);
-  const [bare, last] = await Promise.all([composeSheet(scope, input.localDate), lastIssue(scope.id, input.localDate)]);
+  const [bare, last] = await Promise.all([
+    composeSheet(scope, input.localDate),
+    lastIssue(scope.id, input.localDate),
+  ]);
   if (digest(bare, last) !== input.seen) throw new AppError("stale", CHANGED);
-  if (bare.sheet.blocks.length === 0 && last === null) throw new AppError("refused", "Nothing is called on this day. Publish a call first.");
-  if (last !== null && !isFresh(bare, last, input.notes)) throw new AppError("refused", `Nothing changed since issue ${last.number}. Everyone has this already.`);
-  const composed = { ...bare, sheet: { ...bare.sheet, notes: [...bare.sheet.notes, ...input.notes] } };
+  if (bare.sheet.blocks.length === 0 && last === null)
+    throw new AppError("refused", "Nothing is called on this day. Publish a call first.");
+  if (last !== null && !isFresh(bare, last, input.notes))
+    throw new AppError(
+      "refused",
+      `Nothing changed since issue ${last.number}. Everyone has this already.`,
+    );
+  const composed = {
+    ...bare,
+    sheet: { ...bare.sheet, notes: [...bare.sheet.notes, ...input.notes] },
+  };
   return inTransaction(async (tx) => {
     // One issue at a time: the production's row is the queue. What was composed must still be how things stand.
-    await tx.select({ id: productions.id }).from(productions).where(eq(productions.id, scope.id)).for("update");
+    await tx
+      .select({ id: productions.id })
+      .from(productions)
+      .where(eq(productions.id, scope.id))
+      .for("update");
     const number = await lastNumber(tx, scope.id, input.localDate);
     const standing = await standingCalls(tx, scope.id, input.localDate);
     if (number !== (last?.number ?? 0) || standing !== before) throw new AppError("stale", CHANGED);
@@ -119,14 +154,25 @@ export async function issueSheet(actor: Actor, input: z.output<typeof issueSheet
   });
 }
 
-const CHANGED = "The calls of this day changed while you were looking. Look at the sheet again, then issue it.";
+const CHANGED =
+  "The calls of this day changed while you were looking. Look at the sheet again, then issue it.";
 
 /** Names how the published calls of a day stand: two equal texts are the same calls in the same versions. */
-async function standingCalls(tx: Db | Tx, productionId: string, localDate: string): Promise<string> {
+async function standingCalls(
+  tx: Db | Tx,
+  productionId: string,
+  localDate: string,
+): Promise<string> {
   const rows = await tx
     .select({ id: calls.id, version: calls.version })
     .from(calls)
-    .where(and(eq(calls.productionId, productionId), eq(calls.localDate, localDate), eq(calls.state, "published")))
+    .where(
+      and(
+        eq(calls.productionId, productionId),
+        eq(calls.localDate, localDate),
+        eq(calls.state, "published"),
+      ),
+    )
     .orderBy(asc(calls.id));
   return JSON.stringify(rows);
 }
@@ -135,28 +181,55 @@ async function lastNumber(tx: Tx, productionId: string, localDate: string): Prom
   const [row] = await tx
     .select({ number: max(callSheetIssues.number) })
     .from(callSheetIssues)
-    .where(and(eq(callSheetIssues.productionId, productionId), eq(callSheetIssues.localDate, localDate)));
+    .where(
+      and(eq(callSheetIssues.productionId, productionId), eq(callSheetIssues.localDate, localDate)),
+    );
   return row?.number ?? 0;
 }
 
-function finishSheet(composed: ComposedSheet, last: LastIssue | null, issuedAt: Date, scope: ProductionScope): CallSheet {
-  const bare: CallSheet = { ...composed.sheet, issueNumber: (last?.number ?? 0) + 1, issuedAt: issuedAt.toISOString(), changed: [] };
+function finishSheet(
+  composed: ComposedSheet,
+  last: LastIssue | null,
+  issuedAt: Date,
+  scope: ProductionScope,
+): CallSheet {
+  const bare: CallSheet = {
+    ...composed.sheet,
+    issueNumber: (last?.number ?? 0) + 1,
+    issuedAt: issuedAt.toISOString(),
+    changed: [],
+  };
   if (last === null) return bare;
-  return { ...bare, replaces: `the one of ${sentAt(last.issuedAt, scope)}`, changed: callSheetChanges(last.snapshot.sheet, bare) };
+  return {
+    ...bare,
+    replaces: `the one of ${sentAt(last.issuedAt, scope)}`,
+    changed: callSheetChanges(last.snapshot.sheet, bare),
+  };
 }
 
 /** "12:05" today, "Mon 5 Apr, 12:05" on another day. */
 function sentAt(at: Date, scope: ProductionScope): string {
   const day = localDay(at, scope.zone);
-  return day === localDay(new Date(), scope.zone) ? clock(at, scope.zone) : `${shortDay(day, scope.locale)}, ${clock(at, scope.zone)}`;
+  return day === localDay(new Date(), scope.zone)
+    ? clock(at, scope.zone)
+    : `${shortDay(day, scope.locale)}, ${clock(at, scope.zone)}`;
 }
 
 function digest(composed: ComposedSheet, last: LastIssue | null): string {
-  return createHash("sha256").update(JSON.stringify([composed.sheet, composed.people, last?.number ?? 0])).digest("hex");
+  return createHash("sha256")
+    .update(JSON.stringify([composed.sheet, composed.people, last?.number ?? 0]))
+    .digest("hex");
 }
 
 function isFresh(composed: ComposedSheet, last: LastIssue, notes: string[]): boolean {
-  const printed = ({ blocks, released, music, tomorrow, away, contact }: ComposedSheet["sheet"]): string =>
+  const printed = ({
+    blocks,
+    released,
+    music,
+    tomorrow,
+    away,
+    contact,
+  }: ComposedSheet["sheet"]): string =>
     JSON.stringify([blocks, released, music, tomorrow, away, contact]);
   // The notes of the last issue were typed for it: an empty box repeats nothing and takes nothing back.
   const said = notes.some((note) => !last.snapshot.sheet.notes.includes(note));
@@ -164,11 +237,17 @@ function isFresh(composed: ComposedSheet, last: LastIssue, notes: string[]): boo
 }
 
 function concernedBy(composed: ComposedSheet, last: LastIssue | null): string[] {
-  return [...new Set([...Object.keys(composed.people), ...Object.keys(last?.snapshot.people ?? {})])];
+  return [
+    ...new Set([...Object.keys(composed.people), ...Object.keys(last?.snapshot.people ?? {})]),
+  ];
 }
 
 /** What changed for one person only: the changes between the two sheets cut down to their blocks and their name. */
-export function ownChanges(personId: string, before: IssueSnapshot, after: IssueSnapshot): string[] {
+export function ownChanges(
+  personId: string,
+  before: IssueSnapshot,
+  after: IssueSnapshot,
+): string[] {
   return callSheetChanges(ownSheet(personId, before), ownSheet(personId, after));
 }
 
@@ -181,7 +260,10 @@ export function ownSheet(personId: string, { sheet, people: parts }: IssueSnapsh
     changed: [],
     blocks: sheet.blocks
       .filter((block) => block.id !== undefined && mine.has(block.id))
-      .map((block) => ({ ...block, who: part && block.who.includes(part.name) ? [part.name] : [] })),
+      .map((block) => ({
+        ...block,
+        who: part && block.who.includes(part.name) ? [part.name] : [],
+      })),
     released: part ? [{ who: part.name, at: part.releasedAt }] : [],
     away: [],
   };
@@ -191,13 +273,32 @@ async function mailSheet(
   tx: Tx,
   actor: Actor,
   scope: ProductionScope,
-  issue: { issueId: string; sheet: CallSheet; composed: ComposedSheet; last: LastIssue | null; concerns: string[] },
+  issue: {
+    issueId: string;
+    sheet: CallSheet;
+    composed: ComposedSheet;
+    last: LastIssue | null;
+    concerns: string[];
+  },
 ): Promise<number> {
   if (issue.concerns.length === 0) return 0;
   const rows = await tx
-    .select({ id: people.id, name: people.name, email: people.email, userId: people.userId, positionId: sql<string>`min(${positions.id})`.mapWith(positions.id) })
+    .select({
+      id: people.id,
+      name: people.name,
+      email: people.email,
+      userId: people.userId,
+      positionId: sql<string>`min(${positions.id})`.mapWith(positions.id),
+    })
     .from(people)
-    .innerJoin(positions, and(eq(positions.personId, people.id), eq(positions.productionId, scope.id), isNull(positions.endedAt)))
+    .innerJoin(
+      positions,
+      and(
+        eq(positions.personId, people.id),
+        eq(positions.productionId, scope.id),
+        isNull(positions.endedAt),
+      ),
+    )
     .where(and(inArray(people.id, issue.concerns), isNull(people.removedAt)))
     .groupBy(people.id)
     .orderBy(asc(people.name));
@@ -208,7 +309,11 @@ async function mailSheet(
     const to = `/me/call-sheets/${issue.issueId}`;
     const link =
       person.userId === null
-        ? await makeInvitationLink(tx, actor, { positionId: person.positionId, email: person.email, to })
+        ? await makeInvitationLink(tx, actor, {
+            positionId: person.positionId,
+            email: person.email,
+            to,
+          })
         : new URL(to, env().AUTH_URL).toString();
     await queueMail(tx, {
       companyId: scope.companyId,

@@ -38,18 +38,28 @@ type Mine = { personId: string; productionId: string };
 
 /** In which production the actor is which record; a position that has ended gives nothing. */
 function mine(actor: Actor): Mine[] {
-  return actor.positions.flatMap(({ personId, productionId }) => (productionId === null ? [] : [{ personId, productionId }]));
+  return actor.positions.flatMap(({ personId, productionId }) =>
+    productionId === null ? [] : [{ personId, productionId }],
+  );
 }
 
 /** The newest issue of each day, from `since` (a local day; all unless told) on, that concerns the actor. */
-export async function listOwnSheets(actor: Actor, { since }: { since?: string } = {}): Promise<OwnSheetListed[]> {
-  const rows = await ownIssues(actor, since === undefined ? undefined : sql`${callSheetIssues.localDate} >= ${since}`);
+export async function listOwnSheets(
+  actor: Actor,
+  { since }: { since?: string } = {},
+): Promise<OwnSheetListed[]> {
+  const rows = await ownIssues(
+    actor,
+    since === undefined ? undefined : sql`${callSheetIssues.localDate} >= ${since}`,
+  );
   const newest = new Map<string, (typeof rows)[number]>();
   for (const row of rows) {
     const day = `${row.listed.productionId} ${row.listed.localDate}`;
     if (!newest.has(day)) newest.set(day, row);
   }
-  return [...newest.values()].map((row) => row.listed).sort((a, b) => (a.localDate < b.localDate ? -1 : a.localDate > b.localDate ? 1 : 0));
+  return [...newest.values()]
+    .map((row) => row.listed)
+    .sort((a, b) => (a.localDate < b.localDate ? -1 : a.localDate > b.localDate ? 1 : 0));
 }
 
 /** One issue cut down to what is the actor's own. Throws `not-found` when it does not concern them. */
@@ -57,7 +67,13 @@ export async function readOwnSheet(actor: Actor, issueId: string): Promise<OwnSh
   const [row] = await ownIssues(actor, eq(callSheetIssues.id, issueId));
   if (!row) throw new AppError("not-found");
   const { listed, personId, snapshot } = row;
-  const ofDay = await ownIssues(actor, and(eq(callSheetIssues.productionId, listed.productionId), eq(callSheetIssues.localDate, listed.localDate)));
+  const ofDay = await ownIssues(
+    actor,
+    and(
+      eq(callSheetIssues.productionId, listed.productionId),
+      eq(callSheetIssues.localDate, listed.localDate),
+    ),
+  );
   const newer = ofDay.find((other) => other.listed.number > listed.number);
   const before = ofDay.find((other) => other.listed.number < listed.number);
   const sheet = ownSheet(personId, snapshot);
@@ -87,7 +103,10 @@ async function ownIssues(actor: Actor, where: ReturnType<typeof and>) {
   if (own.length === 0) return [];
   const concernsMe = or(
     ...own.map(({ personId, productionId }) =>
-      and(eq(callSheetIssues.productionId, productionId), sql`json_contains(${callSheetIssues.concerns}, json_quote(${personId}))`),
+      and(
+        eq(callSheetIssues.productionId, productionId),
+        sql`json_contains(${callSheetIssues.concerns}, json_quote(${personId}))`,
+      ),
     ),
   );
   const rows = await db
@@ -104,24 +123,48 @@ async function ownIssues(actor: Actor, where: ReturnType<typeof and>) {
       snapshot: callSheetIssues.snapshot,
     })
     .from(callSheetIssues)
-    .innerJoin(productions, and(eq(productions.id, callSheetIssues.productionId), isNull(productions.removedAt)))
+    .innerJoin(
+      productions,
+      and(eq(productions.id, callSheetIssues.productionId), isNull(productions.removedAt)),
+    )
     .innerJoin(companies, eq(companies.id, productions.companyId))
     .where(and(concernsMe, where))
     .orderBy(desc(callSheetIssues.number));
-  const read = rows.length === 0 ? [] : await db
-    .select({ issueId: acknowledgements.issueId, personId: acknowledgements.personId, at: acknowledgements.at })
-    .from(acknowledgements)
-    .where(and(inArray(acknowledgements.issueId, rows.map((row) => row.issueId)), inArray(acknowledgements.personId, own.map(({ personId }) => personId))));
+  const read =
+    rows.length === 0
+      ? []
+      : await db
+          .select({
+            issueId: acknowledgements.issueId,
+            personId: acknowledgements.personId,
+            at: acknowledgements.at,
+          })
+          .from(acknowledgements)
+          .where(
+            and(
+              inArray(
+                acknowledgements.issueId,
+                rows.map((row) => row.issueId),
+              ),
+              inArray(
+                acknowledgements.personId,
+                own.map(({ personId }) => personId),
+              ),
+            ),
+          );
   return rows.flatMap(({ concerns, snapshot: kept, ...row }) => {
     const snapshot = kept as IssueSnapshot;
-    const personId = own.find((me) => me.productionId === row.productionId && concerns.includes(me.personId))?.personId;
+    const personId = own.find(
+      (me) => me.productionId === row.productionId && concerns.includes(me.personId),
+    )?.personId;
     if (personId === undefined) return [];
     const part = snapshot.people[personId];
     const listed: OwnSheetListed = {
       ...row,
       from: part?.from ?? null,
       releasedAt: part?.releasedAt ?? null,
-      acknowledgedAt: read.find((ack) => ack.issueId === row.issueId && ack.personId === personId)?.at ?? null,
+      acknowledgedAt:
+        read.find((ack) => ack.issueId === row.issueId && ack.personId === personId)?.at ?? null,
     };
     return [{ personId, snapshot, listed }];
   });

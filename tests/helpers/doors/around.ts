@@ -13,7 +13,7 @@ export const AROUND: Doors = {
   "app/(public)/actions.ts#acceptInvitation": { may: "anyone", input: (w) => ({ token: w.invitationSecret }) },
   "app/api/auth/[...nextauth]/route.ts#GET": {
     may: "anyone",
-    request: () => ({ request: () => new NextRequest(`${ORIGIN}/api/auth/session`), params: {} }),
+    request: () => ({ request: () => new NextRequest(`${ORIGIN}/api/auth/callback/nodemailer?token=x&email=someone%40people.example`), params: {} }),
   },
   "app/api/health/route.ts#GET": reads("anyone", "/api/health"),
   "app/api/ready/route.ts#GET": reads("anyone", "/api/ready"),

@@ -58,8 +58,11 @@ export const restoreCall = defineAction({ input: restoreCallSchema }, async (inp
   refresh(input);
 });
 
-export const decideConflict = defineAction({ input: decideConflictSchema }, async (input, actor) => {
-  const decided = await conflictData.decideConflict(actor, input);
-  refresh(input);
-  return decided;
-});
+export const decideConflict = defineAction(
+  { input: decideConflictSchema },
+  async (input, actor) => {
+    const decided = await conflictData.decideConflict(actor, input);
+    refresh(input);
+    return decided;
+  },
+);

@@ -57,7 +57,10 @@ export default async function RehearsalsPage({
             </Link>
           </nav>
           {week.calls.length === 0 && (
-            <EmptyState title="Nothing is called in this week" {...(week.mayChange && { action: newCall })}>
+            <EmptyState
+              title="Nothing is called in this week"
+              {...(week.mayChange && { action: newCall })}
+            >
               {week.mayChange ? "Make a call, or look at another week." : "Look at another week."}
             </EmptyState>
           )}
@@ -79,8 +82,8 @@ export default async function RehearsalsPage({
         </>
       ) : (
         <EmptyState title="No call yet" {...(week.mayChange && { action: newCall })}>
-          A call is a time and a room with blocks in it: numbers from the score, scenes, a warm-up, a
-          break. Who is needed follows from the casting, and clashes show while you make it.
+          A call is a time and a room with blocks in it: numbers from the score, scenes, a warm-up,
+          a break. Who is needed follows from the casting, and clashes show while you make it.
         </EmptyState>
       )}
     </>

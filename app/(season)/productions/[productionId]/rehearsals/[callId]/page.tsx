@@ -31,25 +31,43 @@ export default async function CallPage({
   const { productionId, callId } = address.data;
   const actor = await pageActor(`/productions/${productionId}/rehearsals/${callId}`);
   const call = await orNotFound(readCall(actor, address.data));
-  const clashes = call.mayChange && call.state !== "cancelled" ? await readCallClashes(actor, address.data) : null;
+  const clashes =
+    call.mayChange && call.state !== "cancelled"
+      ? await readCallClashes(actor, address.data)
+      : null;
   const title = `${call.title ?? CALL_KIND_NAMES[call.kind]}, ${call.day}`;
   const seen = { productionId, callId, version: call.version };
   return (
     <>
       <PageTitle
         title={title}
-        sub={[call.span, call.room ?? "no room yet", call.pianist === null ? "no pianist" : `${call.pianist} at the piano`, countOf(call)].join(" · ")}
-        chips={call.state === "published" ? null : <Chip tone={call.state === "draft" ? "info" : "clash"}>{call.state === "draft" ? "Draft" : "Cancelled"}</Chip>}
+        sub={[
+          call.span,
+          call.room ?? "no room yet",
+          call.pianist === null ? "no pianist" : `${call.pianist} at the piano`,
+          countOf(call),
+        ].join(" · ")}
+        chips={
+          call.state === "published" ? null : (
+            <Chip tone={call.state === "draft" ? "info" : "clash"}>
+              {call.state === "draft" ? "Draft" : "Cancelled"}
+            </Chip>
+          )
+        }
         actions={
           <>
             {call.state === "published" && (
               <Button asChild>
-                <Link href={`/productions/${productionId}/call-sheets/${call.localDate}`}>Call sheet</Link>
+                <Link href={`/productions/${productionId}/call-sheets/${call.localDate}`}>
+                  Call sheet
+                </Link>
               </Button>
             )}
             {call.mayChange && call.state !== "cancelled" && (
               <Button asChild>
-                <Link href={`/productions/${productionId}/rehearsals/${callId}/change`}>Change</Link>
+                <Link href={`/productions/${productionId}/rehearsals/${callId}/change`}>
+                  Change
+                </Link>
               </Button>
             )}
             {call.mayChange && <CallButtons {...seen} state={call.state} />}
@@ -82,11 +100,18 @@ export default async function CallPage({
 
 function countOf(call: CallRead): string {
   const numbers = call.blocks.filter((block) => block.kind === "number").length;
-  if (numbers === 0) return `${String(call.blocks.length)} ${call.blocks.length === 1 ? "block" : "blocks"}`;
+  if (numbers === 0)
+    return `${String(call.blocks.length)} ${call.blocks.length === 1 ? "block" : "blocks"}`;
   return numbers === 1 ? "one number" : `${String(numbers)} numbers`;
 }
 
-function OutOfStep({ call, seen }: { call: CallRead; seen: { productionId: string; callId: string; version: number } }) {
+function OutOfStep({
+  call,
+  seen,
+}: {
+  call: CallRead;
+  seen: { productionId: string; callId: string; version: number };
+}) {
   const { needed, notNeeded } = call.outOfStep;
   if (call.state === "cancelled" || needed.length + notNeeded.length === 0) return null;
   const parts = [
@@ -94,7 +119,12 @@ function OutOfStep({ call, seen }: { call: CallRead; seen: { productionId: strin
     notNeeded.length > 0 ? `Called and not needed any more: ${notNeeded.join(", ")}.` : "",
   ];
   return (
-    <Notice tone="caution" className="mb-6" title="The score or the casting has changed since." actions={<BringUpToDate {...seen} />}>
+    <Notice
+      tone="caution"
+      className="mb-6"
+      title="The score or the casting has changed since."
+      actions={<BringUpToDate {...seen} />}
+    >
       {parts.filter(Boolean).join(" ")}
     </Notice>
   );
@@ -102,7 +132,11 @@ function OutOfStep({ call, seen }: { call: CallRead; seen: { productionId: strin
 
 function Ladder({ call, label }: { call: CallRead; label: string }) {
   if (call.castHidden) {
-    return <Notice title="The cast list is not out yet.">Who is needed shows here when the music director publishes it.</Notice>;
+    return (
+      <Notice title="The cast list is not out yet.">
+        Who is needed shows here when the music director publishes it.
+      </Notice>
+    );
   }
   const [hours = 0, minutes = 0] = call.localTime.split(":").map(Number);
   const start = hours * 60 + minutes;
@@ -128,14 +162,19 @@ function Ladder({ call, label }: { call: CallRead; label: string }) {
       />
       <p className="mt-6 text-sm text-ink-2">
         {leads}
-        {[call.room, call.venue, call.address].filter((part) => part !== null && part !== "").join(", ")}
+        {[call.room, call.venue, call.address]
+          .filter((part) => part !== null && part !== "")
+          .join(", ")}
       </p>
       <ul className="mt-2 text-sm text-ink-2">
         {call.blocks
           .filter((block) => block.bars !== null || block.detail !== null)
           .map((block) => (
             <li key={block.key}>
-              {block.title}: {[block.bars === null ? "" : `bars ${block.bars}`, block.detail ?? ""].filter(Boolean).join(", ")}
+              {block.title}:{" "}
+              {[block.bars === null ? "" : `bars ${block.bars}`, block.detail ?? ""]
+                .filter(Boolean)
+                .join(", ")}
             </li>
           ))}
       </ul>

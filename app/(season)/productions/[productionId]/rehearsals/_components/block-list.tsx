@@ -111,7 +111,9 @@ export function BlockList({ choices, check }: { choices: CallChoices; check: Cal
         <Button onClick={() => add("break")}>Add a break</Button>
       </div>
       {choices.numbers.length === 0 && (
-        <p className="mt-2 text-sm text-ink-2">The score has no numbers yet: add them there first.</p>
+        <p className="mt-2 text-sm text-ink-2">
+          The score has no numbers yet: add them there first.
+        </p>
       )}
     </section>
   );

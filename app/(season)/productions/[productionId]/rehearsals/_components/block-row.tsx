@@ -52,12 +52,22 @@ export function BlockRow({ index, count, block, number, check, onMove, onRemove 
             </Field>
           )}
           {block.kind !== "break" && (
-            <Field label="What of it" optional error={errors?.detail?.message} className="min-w-40 flex-1">
-              <Input placeholder="such as parts, then together" {...register(`blocks.${index}.detail`)} />
+            <Field
+              label="What of it"
+              optional
+              error={errors?.detail?.message}
+              className="min-w-40 flex-1"
+            >
+              <Input
+                placeholder="such as parts, then together"
+                {...register(`blocks.${index}.detail`)}
+              />
             </Field>
           )}
         </div>
-        {errors?.numberId && <p className="text-sm font-bold text-vermilion">{errors.numberId.message}</p>}
+        {errors?.numberId && (
+          <p className="text-sm font-bold text-vermilion">{errors.numberId.message}</p>
+        )}
         {check && block.kind !== "break" && <Called check={check} />}
       </div>
       <div className="flex items-start gap-1">

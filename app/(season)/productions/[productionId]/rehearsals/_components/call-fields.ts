@@ -11,7 +11,12 @@ export type BlockFields = {
   detail: string;
 };
 
-export type HandFields = { personId: string; act: "call" | "excuse"; reason: string; keys: string[] };
+export type HandFields = {
+  personId: string;
+  act: "call" | "excuse";
+  reason: string;
+  keys: string[];
+};
 
 /** What the form of a call holds: text as typed. */
 export type CallFields = {
@@ -52,10 +57,19 @@ export function fieldsOf(draft: CallDraft): CallFields {
 }
 
 /** Minutes a new block begins with; the music director writes their own. */
-const USUAL_MINUTES: Record<BlockKind, string> = { number: "30", scene: "30", warm_up: "10", break: "15" };
+const USUAL_MINUTES: Record<BlockKind, string> = {
+  number: "30",
+  scene: "30",
+  warm_up: "10",
+  break: "15",
+};
 
 /** An empty block with a key no other block of the call has. */
-export function newBlock(blocks: readonly BlockFields[], kind: BlockKind, numberId = ""): BlockFields {
+export function newBlock(
+  blocks: readonly BlockFields[],
+  kind: BlockKind,
+  numberId = "",
+): BlockFields {
   let n = blocks.length + 1;
   while (blocks.some((block) => block.key === `new-${String(n)}`)) n += 1;
   return {

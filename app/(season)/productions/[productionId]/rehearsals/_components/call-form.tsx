@@ -27,7 +27,8 @@ export function NewCallForm({ choices, initial }: { choices: CallChoices; initia
     schema: createCallSchema,
     action: createCall,
     defaultValues: initial,
-    onDone: ({ callId }) => router.push(`/productions/${initial.productionId}/rehearsals/${callId}`),
+    onDone: ({ callId }) =>
+      router.push(`/productions/${initial.productionId}/rehearsals/${callId}`),
   });
   return (
     <ActionForm state={state} submitLabel="Save the draft" className="max-w-none">
@@ -79,16 +80,20 @@ function CallFieldset({ choices, callId }: { choices: CallChoices; callId: strin
 
   function take(remedy: Remedy) {
     const next = applyRemedy<CallFields["blocks"][number], CallFields>(getValues(), remedy);
-    for (const name of ["localDate", "localTime", "roomId", "pianistId", "blocks", "hand"] as const) {
+    for (const name of [
+      "localDate",
+      "localTime",
+      "roomId",
+      "pianistId",
+      "blocks",
+      "hand",
+    ] as const) {
       setValue(name, next[name], { shouldDirty: true });
     }
   }
 
   return (
-    <SideColumn
-      sideLabel="What follows from it"
-      side={<CheckPanel state={check} onTake={take} />}
-    >
+    <SideColumn sideLabel="What follows from it" side={<CheckPanel state={check} onTake={take} />}>
       <div className="flex flex-col gap-8">
         <div className="grid gap-4 sm:grid-cols-2 xl:grid-cols-3">
           <Field label="Kind" error={errors.kind?.message}>

@@ -20,7 +20,11 @@ export function CallRow({ productionId, call }: { productionId: string; call: Ca
           </Link>
           <span className="text-ink-2">
             {" "}
-            {[call.room ?? "no room yet", call.leader === null ? "" : `${call.leader} leads`, call.pianist === null ? "no pianist" : `${call.pianist} at the piano`]
+            {[
+              call.room ?? "no room yet",
+              call.leader === null ? "" : `${call.leader} leads`,
+              call.pianist === null ? "no pianist" : `${call.pianist} at the piano`,
+            ]
               .filter(Boolean)
               .join(" · ")}
           </span>

@@ -10,12 +10,19 @@ import { ClashList } from "./clash-list";
 import { lastOf, type CheckState } from "./use-call-check";
 
 /** What follows from the call as it stands in the form: times, clashes, waiting. Nothing of it is saved. */
-export function CheckPanel({ state, onTake }: { state: CheckState; onTake: (remedy: Remedy) => void }) {
+export function CheckPanel({
+  state,
+  onTake,
+}: {
+  state: CheckState;
+  onTake: (remedy: Remedy) => void;
+}) {
   const check = lastOf(state);
   return (
     <div className="flex flex-col gap-6 lg:sticky lg:top-4">
       <div role="status" className="text-sm text-ink-2">
-        {state.at === "incomplete" && "Choose a day, a time and at least one block: clashes are looked for as you go."}
+        {state.at === "incomplete" &&
+          "Choose a day, a time and at least one block: clashes are looked for as you go."}
         {state.at === "checking" && "Looking for clashes."}
         {state.at === "checked" && summaryOf(state.check)}
       </div>
@@ -27,7 +34,9 @@ export function CheckPanel({ state, onTake }: { state: CheckState; onTake: (reme
             <p>
               {check.from}–{check.to}, {formatDuration(check.minutes)}
             </p>
-            {check.clockNote !== null && <Notice tone="caution" className="mt-2" title={check.clockNote} />}
+            {check.clockNote !== null && (
+              <Notice tone="caution" className="mt-2" title={check.clockNote} />
+            )}
           </section>
           <section aria-labelledby="check-clashes">
             <SectionTitle id="check-clashes">Clashes</SectionTitle>
@@ -41,16 +50,19 @@ export function CheckPanel({ state, onTake }: { state: CheckState; onTake: (reme
           </section>
           {check.castHidden ? (
             <Notice title="The cast list is not out yet.">
-              Who the score needs is called when the music director publishes it; it is left out here.
+              Who the score needs is called when the music director publishes it; it is left out
+              here.
             </Notice>
           ) : (
             <section aria-labelledby="check-waiting">
               <SectionTitle id="check-waiting">Waiting</SectionTitle>
               <p className="font-serif text-3xl">
-                {formatDuration(check.waiting)} <span className="text-lg text-ink-2">singer-time</span>
+                {formatDuration(check.waiting)}{" "}
+                <span className="text-lg text-ink-2">singer-time</span>
               </p>
               <p className="text-sm text-ink-2">
-                Minutes between people’s first and last block in which they are not needed, added up.
+                Minutes between people’s first and last block in which they are not needed, added
+                up.
               </p>
             </section>
           )}

@@ -24,7 +24,10 @@ export function ClashList({ clashes, onTake, more }: Props) {
   return (
     <ul>
       {clashes.map((clash) => (
-        <li key={clash.id} className="flex flex-col gap-2 border-b border-rule py-3 text-sm first:border-t">
+        <li
+          key={clash.id}
+          className="flex flex-col gap-2 border-b border-rule py-3 text-sm first:border-t"
+        >
           <p>
             <Chip tone="clash">{NAMES[clash.kind]}</Chip> {clash.words}.{" "}
             {clash.advice !== "" && <span className="text-ink-2">{clash.advice}</span>}

@@ -25,10 +25,16 @@ export function HandChanges({ choices, check }: { choices: CallChoices; check: C
   const [missing, setMissing] = useState(false);
 
   const needed = new Map(
-    (check?.blocks ?? []).flatMap((block) => block.called.map((person) => [person.personId, person.name])),
+    (check?.blocks ?? []).flatMap((block) =>
+      block.called.map((person) => [person.personId, person.name]),
+    ),
   );
-  const offered = act === "call" ? choices.people.filter(({ id }) => !needed.has(id)) : [...needed].map(([id, name]) => ({ id, name }));
-  const nameOf = (id: string) => choices.people.find((person) => person.id === id)?.name ?? needed.get(id) ?? "Somebody";
+  const offered =
+    act === "call"
+      ? choices.people.filter(({ id }) => !needed.has(id))
+      : [...needed].map(([id, name]) => ({ id, name }));
+  const nameOf = (id: string) =>
+    choices.people.find((person) => person.id === id)?.name ?? needed.get(id) ?? "Somebody";
   const blockName = (blockKey: string) => {
     const block = blocks.find((one) => one.key === blockKey);
     if (!block) return "";
@@ -45,7 +51,10 @@ export function HandChanges({ choices, check }: { choices: CallChoices; check: C
       setMissing(true);
       return;
     }
-    write([...getValues("hand"), { personId, act, reason: reason.trim(), keys: key === "" ? [] : [key] }]);
+    write([
+      ...getValues("hand"),
+      { personId, act, reason: reason.trim(), keys: key === "" ? [] : [key] },
+    ]);
     setPersonId("");
     setReason("");
     setMissing(false);
@@ -63,12 +72,22 @@ export function HandChanges({ choices, check }: { choices: CallChoices; check: C
       ) : (
         <ul>
           {hand.map((change, index) => (
-            <li key={`${change.act} ${change.personId} ${String(index)}`} className="flex items-start justify-between gap-3 border-b border-rule py-2 text-sm">
+            <li
+              key={`${change.act} ${change.personId} ${String(index)}`}
+              className="flex items-start justify-between gap-3 border-b border-rule py-2 text-sm"
+            >
               <span className="min-w-0 pt-1">
-                <strong>{nameOf(change.personId)}</strong> is {change.act === "call" ? "called" : "excused"}
-                {change.keys.length === 0 ? "" : ` for ${change.keys.map(blockName).filter(Boolean).join(", ")}`}: {change.reason}
+                <strong>{nameOf(change.personId)}</strong> is{" "}
+                {change.act === "call" ? "called" : "excused"}
+                {change.keys.length === 0
+                  ? ""
+                  : ` for ${change.keys.map(blockName).filter(Boolean).join(", ")}`}
+                : {change.reason}
               </span>
-              <IconButton label={`Take back: ${nameOf(change.personId)}`} onClick={() => write(hand.filter((_, place) => place !== index))}>
+              <IconButton
+                label={`Take back: ${nameOf(change.personId)}`}
+                onClick={() => write(hand.filter((_, place) => place !== index))}
+              >
                 <CloseIcon />
               </IconButton>
             </li>
@@ -87,7 +106,17 @@ export function HandChanges({ choices, check }: { choices: CallChoices; check: C
             <Button
               key={`${cover.personId} ${cover.role}`}
               size="small"
-              onClick={() => write([...getValues("hand"), { personId: cover.personId, act: "call", reason: `Cover of ${cover.role}`, keys: cover.keys }])}
+              onClick={() =>
+                write([
+                  ...getValues("hand"),
+                  {
+                    personId: cover.personId,
+                    act: "call",
+                    reason: `Cover of ${cover.role}`,
+                    keys: cover.keys,
+                  },
+                ])
+              }
             >
               Call {cover.name} for {cover.role}
             </Button>
@@ -129,8 +158,15 @@ export function HandChanges({ choices, check }: { choices: CallChoices; check: C
               ))}
           </Select>
         </Field>
-        <Field label="Reason" error={missing && reason.trim() === "" ? "Write a reason." : undefined}>
-          <Input value={reason} maxLength={200} onChange={(event) => setReason(event.currentTarget.value)} />
+        <Field
+          label="Reason"
+          error={missing && reason.trim() === "" ? "Write a reason." : undefined}
+        >
+          <Input
+            value={reason}
+            maxLength={200}
+            onChange={(event) => setReason(event.currentTarget.value)}
+          />
         </Field>
         <Button onClick={add}>Add the change</Button>
       </div>

@@ -35,7 +35,9 @@ export function useCallCheck(fields: CallFields, callId: string | null): CheckSt
           if (mine !== asked.current) return;
           if (result?.ok) setState({ at: "checked", check: result.data });
           else {
-            const message = result?.error.message ?? "The server did not answer, so clashes are not known. Check the connection.";
+            const message =
+              result?.error.message ??
+              "The server did not answer, so clashes are not known. Check the connection.";
             setState((before) => ({ at: "failed", message, last: lastOf(before) }));
           }
         });

@@ -1,6 +1,6 @@
 "use client";
 
-import type { FieldErrors, UseFormRegister } from "react-hook-form";
+import type { UseFormRegister } from "react-hook-form";
 import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Dialog } from "@/components/ui/dialog";

@@ -19,7 +19,10 @@ export const GET = defineRoute<{ productionId: string; issueId: string }>(
     const issue = await readIssue(actor, address.data);
     const asked = sheetFileSchema.safeParse(Object.fromEntries(new URL(request.url).searchParams));
     if (!asked.success) {
-      throw new AppError("invalid", "Ask for the format xlsx or csv, and for the paper A4 or Letter.");
+      throw new AppError(
+        "invalid",
+        "Ask for the format xlsx or csv, and for the paper A4 or Letter.",
+      );
     }
     const { format, paper } = asked.data;
     const body =

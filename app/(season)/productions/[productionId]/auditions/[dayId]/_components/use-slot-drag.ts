@@ -62,6 +62,10 @@ export function useSlotDrag(onDrop: (signUpId: string, slotId: string) => void):
         const from = start.current;
         const over = dragged.current ? slotUnder(event) : null;
         end();
+        // The click of this drag comes before any timer; a key pressed later means what it says.
+        setTimeout(() => {
+          dragged.current = false;
+        });
         if (from && over !== null) onDrop(from.signUpId, over);
       },
       onPointerCancel: end,

@@ -49,7 +49,10 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
     run(async () => {
       const { was, version: now } = await orRefuse(cancelCall(seen));
       showToast({
-        title: was === "published" ? "Cancelled: the room and the pianist are free." : "The draft is cancelled.",
+        title:
+          was === "published"
+            ? "Cancelled: the room and the pianist are free."
+            : "The draft is cancelled.",
         undo: async () => {
           await run(async () => {
             await orRefuse(restoreCall({ ...seen, version: now, to: was }));
@@ -92,7 +95,12 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
           <PendingButton kind="quiet" pending={pending} onClick={() => void cancel()}>
             Cancel the draft
           </PendingButton>
-          <PendingButton kind="primary" pending={pending} pendingLabel="Publishing" onClick={() => void publish(false)}>
+          <PendingButton
+            kind="primary"
+            pending={pending}
+            pendingLabel="Publishing"
+            onClick={() => void publish(false)}
+          >
             Publish the call
           </PendingButton>
         </>
@@ -131,7 +139,11 @@ export function BringUpToDate({ productionId, callId, version }: Omit<Props, "st
     setPending(true);
     const result = await refreshCall({ productionId, callId, version }).catch(() => null);
     setPending(false);
-    if (!result?.ok) showToast({ tone: "error", title: result?.error.message ?? "The server did not answer. Try again." });
+    if (!result?.ok)
+      showToast({
+        tone: "error",
+        title: result?.error.message ?? "The server did not answer. Try again.",
+      });
     router.refresh();
   }
   return (

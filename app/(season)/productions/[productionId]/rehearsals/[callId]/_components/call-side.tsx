@@ -28,8 +28,11 @@ export function WaitingAndChanges({ call }: { call: CallRead }) {
         <section aria-labelledby="uncast">
           <SectionTitle id="uncast">Not cast yet</SectionTitle>
           <p className="text-sm">
-            <Chip tone="stretch">{uncast.length === 1 ? "One role" : `${String(uncast.length)} roles`}</Chip>{" "}
-            {uncast.join(", ")} {uncast.length === 1 ? "sings" : "sing"} here and nobody is called for it.
+            <Chip tone="stretch">
+              {uncast.length === 1 ? "One role" : `${String(uncast.length)} roles`}
+            </Chip>{" "}
+            {uncast.join(", ")} {uncast.length === 1 ? "sings" : "sing"} here and nobody is called
+            for it.
           </p>
         </section>
       )}
@@ -38,8 +41,12 @@ export function WaitingAndChanges({ call }: { call: CallRead }) {
           <SectionTitle id="changes">Changed by hand</SectionTitle>
           <ul className="text-sm">
             {changes.map((change) => (
-              <li key={`${change.personId} ${change.block}`} className="border-b border-rule py-2 first:border-t">
-                <strong>{change.name}</strong> is {change.excused ? "excused from" : "called for"} {change.block}
+              <li
+                key={`${change.personId} ${change.block}`}
+                className="border-b border-rule py-2 first:border-t"
+              >
+                <strong>{change.name}</strong> is {change.excused ? "excused from" : "called for"}{" "}
+                {change.block}
                 {change.reason === null ? "" : `: ${change.reason}`}
               </li>
             ))}

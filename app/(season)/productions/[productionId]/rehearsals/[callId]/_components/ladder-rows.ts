@@ -4,7 +4,13 @@ import type { CallBlockRead } from "@/lib/data/calls/read";
 /** Above so many people with the same roles and the same blocks, one row stands for all of them. */
 const ROWS_EACH = 3;
 
-type Person = { personId: string; name: string; roles: string; blockIds: string[]; reason: string | null };
+type Person = {
+  personId: string;
+  name: string;
+  roles: string;
+  blockIds: string[];
+  reason: string | null;
+};
 
 /**
  * The rows of a call's ladder: a role and who sings it, in the order they come; a crowd that is needed in
@@ -38,7 +44,14 @@ export function ladderRows(blocks: readonly CallBlockRead[]): LadderRow[] {
     const [first] = group;
     if (!first) return [];
     if (group.length > ROWS_EACH && first.roles !== "") {
-      return [{ id: first.personId, name: first.roles, sub: `${String(group.length)} singers`, blockIds: first.blockIds }];
+      return [
+        {
+          id: first.personId,
+          name: first.roles,
+          sub: `${String(group.length)} singers`,
+          blockIds: first.blockIds,
+        },
+      ];
     }
     return group.map((person) => ({
       id: person.personId,

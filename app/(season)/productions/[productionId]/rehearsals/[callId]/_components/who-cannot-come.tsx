@@ -40,7 +40,10 @@ export function WhoCannotCome({ productionId, callId, version, fields, initial }
     try {
       await work();
     } catch (refused) {
-      showToast({ tone: "error", title: refused instanceof Error ? refused.message : String(refused) });
+      showToast({
+        tone: "error",
+        title: refused instanceof Error ? refused.message : String(refused),
+      });
     } finally {
       setBusy(false);
       await client.invalidateQueries({ queryKey: query.queryKey });
@@ -71,10 +74,18 @@ export function WhoCannotCome({ productionId, callId, version, fields, initial }
   const decisions = ({ conflict, words }: ClashInWords) =>
     conflict?.state === "asked" ? (
       <>
-        <Button size="small" aria-label={`Agree to the conflict: ${words}`} onClick={() => decide(conflict.id, "agreed")}>
+        <Button
+          size="small"
+          aria-label={`Agree to the conflict: ${words}`}
+          onClick={() => decide(conflict.id, "agreed")}
+        >
           Agree
         </Button>
-        <Button size="small" aria-label={`Decline the conflict: ${words}`} onClick={() => decide(conflict.id, "declined")}>
+        <Button
+          size="small"
+          aria-label={`Decline the conflict: ${words}`}
+          onClick={() => decide(conflict.id, "declined")}
+        >
           Decline
         </Button>
       </>

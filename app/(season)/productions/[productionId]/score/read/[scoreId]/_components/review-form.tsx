@@ -2,7 +2,7 @@
 
 import Link from "next/link";
 import { useRouter } from "next/navigation";
-import type { FieldErrors, UseFormRegister, UseFormReturn } from "react-hook-form";
+import type { UseFormReturn } from "react-hook-form";
 import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { SectionTitle } from "@/components/layout/page-title";
