@@ -5,7 +5,6 @@
 export function contentDisposition(name: string): string {
   const safe =
     name
-      // eslint-disable-next-line no-control-regex -- control characters are what must not get into a header
       .replace(/[\u0000-\u001f\u007f"\\/:*?<>|]+/g, " ")
       .replace(/\s+/g, " ")
       .trim() || "file";

@@ -27,7 +27,7 @@ const blockSchema = z
   })
   .refine((block) => block.kind !== "number" || block.numberId !== null, {
     path: ["numberId"],
-    message: "Choose a number from the score.",
+    error: "Choose a number from the score.",
   });
 
 const handSchema = z.object({

@@ -9,7 +9,6 @@ import {
 import { db } from "@/db/client";
 import { newId } from "@/db/columns";
 import * as t from "@/db/schema";
-
 import { as } from "../helpers/as";
 import { addConflict, callForm, makeRehearsalWorld } from "../helpers/rehearsal-world";
 import type { RehearsalWorld } from "../helpers/rehearsal-world";

@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { eq } from "drizzle-orm";
 import { beforeAll, beforeEach, describe, expect, test } from "vitest";
 import {
   cancelCall,
@@ -8,11 +8,8 @@ import {
   restoreCall,
 } from "@/app/(season)/productions/[productionId]/rehearsals/actions";
 import { db } from "@/db/client";
-
 import * as t from "@/db/schema";
-
 import { listCallsOfWeek } from "@/lib/data/calls/list";
-
 import { as } from "../helpers/as";
 import { actorOf, addConflict, callForm, makeRehearsalWorld } from "../helpers/rehearsal-world";
 import type { RehearsalWorld } from "../helpers/rehearsal-world";

@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { eq } from "drizzle-orm";
 import { beforeAll, beforeEach, describe, expect, test } from "vitest";
 import {
   cancelCall,
@@ -14,7 +14,6 @@ import { db } from "@/db/client";
 import { newId } from "@/db/columns";
 import * as t from "@/db/schema";
 import { listOwnCalls } from "@/lib/data/calls/own";
-
 import { readCall } from "@/lib/data/calls/read";
 import { as } from "../helpers/as";
 import { actorOf, addConflict, callForm, makeRehearsalWorld } from "../helpers/rehearsal-world";

@@ -41,7 +41,7 @@ export function PositionGroups({ people, mayManage, into, ...acts }: PositionGro
               {held.map((person) => (
                 <li
                   key={person.positionId}
-                  className="grid grid-cols-1 gap-x-6 gap-y-1 border-b border-rule py-3 md:grid-cols-[minmax(0,16rem)_minmax(0,1fr)_minmax(0,13rem)_auto] md:items-center"
+                  className="grid grid-cols-1 gap-x-6 gap-y-1 border-b border-rule py-3 md:grid-cols-[minmax(0,15rem)_minmax(0,1fr)_minmax(0,12rem)_10.5rem] md:items-center"
                 >
                   <p className="min-w-0 font-bold">
                     {person.name}

@@ -7,9 +7,12 @@ import { SessionCard } from "./_components/session-card";
 
 export const metadata: Metadata = { title: "My sessions" };
 
-export default async function SessionsPage() {
+export default async function SessionsPage({ searchParams }: PageProps<"/me/sessions">) {
   const actor = await pageActor("/me/sessions");
+  const { open } = await searchParams;
   const sessions = await listOwnSessions(actor);
+  // The music of the next session lies open; of the others when asked for.
+  const opened = sessions.find((session) => session.sessionId === open) ?? sessions[0];
   return (
     <>
       <PageTitle title="My sessions" sub="Where you play next, for whom, and what." />
@@ -22,7 +25,7 @@ export default async function SessionsPage() {
         <ol className="flex flex-col gap-10">
           {sessions.map((session) => (
             <li key={session.sessionId} id={session.sessionId}>
-              <SessionCard session={session} />
+              <SessionCard session={session} open={session === opened} />
             </li>
           ))}
         </ol>

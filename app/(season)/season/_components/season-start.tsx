@@ -18,7 +18,7 @@ export function SeasonStart({
     <>
       <PageTitle title="Your season" />
       <EmptyState
-        title="No production yet"
+        title="No production to look after yet"
         action={
           <>
             {canCreate ? (
@@ -43,11 +43,9 @@ export function SeasonStart({
           week, with what clashes circled.
         </p>
         <p className="mt-3">
-          {hasOwnPage
-            ? "What you sing or play in is on your own page. "
-            : "Do you work for a company that is here already? "}
-          Ask for an invitation: its music director or admin sends it to <strong>{email}</strong>,
-          and its productions appear here.
+          {hasOwnPage && "What you sing or play in is on your own page. "}
+          To look after a production here, ask its music director or its company’s admin to invite{" "}
+          <strong>{email}</strong>: it then appears on this page.
         </p>
       </EmptyState>
     </>

@@ -89,7 +89,10 @@ export function fromSession(session: OwnSession): Upcoming {
     where: place(session.room, session.venue),
     detail: null,
     state: null,
-    link: { href: `/me/sessions#${session.sessionId}`, label: "The music" },
+    link: {
+      href: `/me/sessions?open=${session.sessionId}#${session.sessionId}`,
+      label: "The music",
+    },
   };
 }
 

@@ -6,7 +6,7 @@ import type { Interval } from "@/lib/schedule/types";
 type Row = { at: Interval; music: OwnMusic | null };
 
 /** One session at the piano: when and where, then everything to be played in order, with the rests in their places. */
-export function SessionCard({ session }: { session: OwnSession }) {
+export function SessionCard({ session, open }: { session: OwnSession; open: boolean }) {
   const { zone, music, rests } = session;
   const rows: Row[] = [
     ...music.map((item) => ({ at: item, music: item })),
@@ -35,21 +35,30 @@ export function SessionCard({ session }: { session: OwnSession }) {
       {rows.length === 0 ? (
         <p className="mt-3 text-ink-2">The music follows.</p>
       ) : (
-        <ol className="mt-3 border-t border-rule">
-          {rows.map(({ at, music: item }) =>
-            item === null ? (
-              <li
-                key={at.from.toISOString()}
-                className="flex gap-4 border-b border-rule hatched px-1 py-2"
-              >
-                <span className="w-14 shrink-0 font-bold">{clock(at.from, zone)}</span>
-                <span className="bg-paper px-1.5">Rest until {clock(at.to, zone)}</span>
-              </li>
-            ) : (
-              <MusicRow key={item.id} item={item} zone={zone} />
-            ),
-          )}
-        </ol>
+        <details open={open} className="mt-2">
+          <summary className="flex min-h-11 items-center font-bold text-smalt">
+            {music.length === 0
+              ? "Rests only so far"
+              : music.length === 1
+                ? "1 piece"
+                : `${music.length} pieces`}
+          </summary>
+          <ol className="border-t border-rule">
+            {rows.map(({ at, music: item }) =>
+              item === null ? (
+                <li
+                  key={at.from.toISOString()}
+                  className="flex gap-4 border-b border-rule hatched px-1 py-2"
+                >
+                  <span className="w-14 shrink-0 font-bold">{clock(at.from, zone)}</span>
+                  <span className="bg-paper px-1.5">Rest until {clock(at.to, zone)}</span>
+                </li>
+              ) : (
+                <MusicRow key={item.id} item={item} zone={zone} />
+              ),
+            )}
+          </ol>
+        </details>
       )}
       <Contacts contacts={session.contacts} />
     </article>

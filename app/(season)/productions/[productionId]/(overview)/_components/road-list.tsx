@@ -9,7 +9,7 @@ import { roadSteps } from "./road-steps";
 function Step({ mark, children }: { mark: string; children: ReactNode }) {
   return (
     <li className="grid grid-cols-[2.25rem_minmax(0,1fr)] gap-x-3 border-b border-rule py-4">
-      <RehearsalMark className="mt-0.5">{mark}</RehearsalMark>
+      <RehearsalMark className="mt-1 justify-self-start">{mark}</RehearsalMark>
       <div className="min-w-0">{children}</div>
     </li>
   );

@@ -26,7 +26,9 @@ export function roadSteps(road: Road): RoadStep[] {
     add(
       "auditions",
       "Auditions",
-      `${count(auditions.days, "day")}, ${String(auditions.placed)} of ${String(auditions.signUps)} with a slot`,
+      auditions.days + auditions.signUps === 0
+        ? "nobody signed up"
+        : `${count(auditions.days, "day")}, ${String(auditions.placed)} of ${String(auditions.signUps)} with a slot`,
       auditions.days === 0
         ? "No audition day yet."
         : auditions.nextDay === null

@@ -19,7 +19,8 @@ export function BlockList({ choices, check }: { choices: CallChoices; check: Cal
   const [chosen, setChosen] = useState("");
   const [said, setSaid] = useState("");
   const list = useRef<HTMLOListElement>(null);
-  const error = formState.errors.blocks;
+  const { blocks: errors } = formState.errors;
+  const error = errors?.message ?? errors?.root?.message;
 
   function write(next: BlockFields[], message: string) {
     setValue("blocks", next, { shouldDirty: true, shouldValidate: formState.isSubmitted });
@@ -80,9 +81,9 @@ export function BlockList({ choices, check }: { choices: CallChoices; check: Cal
       <p role="status" className="sr-only">
         {said}
       </p>
-      {(error?.message ?? error?.root?.message) && (
+      {error !== undefined && (
         <p role="alert" className="mt-2 text-sm font-bold text-vermilion">
-          {error?.message ?? error?.root?.message}
+          {error}
         </p>
       )}
       <div className="mt-4 flex flex-wrap items-end gap-3">
