@@ -23,7 +23,7 @@ export const invitePersonSchema = z
       productionId === null
         ? COMPANY_POSITIONS.some((known) => known === kind)
         : PRODUCTION_POSITIONS.some((known) => known === kind),
-    { path: ["kind"], message: "Choose a position from the list." },
+    { path: ["kind"], error: "Choose a position from the list." },
   );
 
 export const endPositionSchema = z.object({ positionId: idField });

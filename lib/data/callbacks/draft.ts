@@ -6,12 +6,13 @@ import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
 import { callbackMarks, callbackRounds, people, roles, rooms, signUps } from "@/db/schema";
 import { recordAudit } from "@/lib/data/audit";
-import { fitWords, linesOf, wholeLines } from "@/lib/data/casting/lines";
-import type { FitWords } from "@/lib/data/casting/lines";
+import { fitWords } from "@/lib/data/casting/fit-words";
+import type { FitWords } from "@/lib/data/casting/fit-words";
 import { productionFor } from "@/lib/data/guard";
 import type { ProductionScope } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
 import type { RangeOnFile } from "@/lib/data/ranges";
+import { roleVoicesIn } from "@/lib/data/score/voices";
 import { inTransaction } from "@/lib/data/transaction";
 import { AppError } from "@/lib/errors";
 import { groupBy } from "@/lib/group-by";
@@ -58,14 +59,9 @@ export type CallbackDraft = {
 export async function readCallbacks(actor: Actor, productionId: string): Promise<CallbackDraft> {
   const scope = await productionFor(actor, productionId, "callbacks:read");
   const subject = { companyId: scope.companyId, productionId: scope.id };
-  const [round, roleRows, lines, signedUp] = await Promise.all([
+  const [round, voices, signedUp] = await Promise.all([
     latestRound(scope.id),
-    db
-      .select({ id: roles.id, name: roles.name })
-      .from(roles)
-      .where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt)))
-      .orderBy(asc(roles.place)),
-    linesOf(scope.id),
+    roleVoicesIn(db, scope.id),
     db
       .select({
         personId: people.id,
@@ -94,7 +90,6 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
     round ? standingInvitations(db, round.id) : [],
     round ? wantedSnapshots(db, scope.id, round) : new Map<string, never>(),
   ]);
-  const whole = wholeLines(lines);
   const changes = compareWithSent(wanted, standing);
   const marksOf = groupBy(marks, (mark) => mark.personId);
   const may = {
@@ -103,10 +98,11 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
   };
   return {
     round,
-    roles: roleRows.map((role) => {
-      const line = whole.get(role.id);
-      return { ...role, line: line ? { low: line.low, high: line.high } : null };
-    }),
+    roles: voices.map(({ id, name, line }) => ({
+      id,
+      name,
+      line: line && { low: line.low, high: line.high },
+    })),
     singers: signedUp
       .filter(
         (row) =>
@@ -125,7 +121,7 @@ export async function readCallbacks(actor: Actor, productionId: string): Promise
             comfortableHigh: best.comfortableHigh,
             kind: best.kind,
           },
-          fits: roleRows.map((role) => fitWords(best, whole.get(role.id))),
+          fits: voices.map((role) => fitWords(best, role.line)),
           marks: (marksOf.get(row.personId) ?? []).map((m) => m.roleId),
           sent: sent ? { answer: sent.answer } : null,
           unsent: changes.get(row.personId) ?? "none",

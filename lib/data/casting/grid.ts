@@ -8,22 +8,21 @@ import {
   callbackRounds,
   choices,
   people,
-  roles,
 } from "@/db/schema";
 import { productionFor } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
 import type { PersonRanges, RangeOnFile } from "@/lib/data/ranges";
 import { AppError } from "@/lib/errors";
 import { fitInWords } from "@/lib/music/fit-in-words";
-import { mergeLines } from "@/lib/music/merge-lines";
 import { rangeFit } from "@/lib/music/range-fit";
 import { tessitura } from "@/lib/music/tessitura";
 import type { PitchSpan, RangeFit } from "@/lib/music/types";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import type { fitSchema } from "@/lib/schemas/casting";
-import { fitWords, linesOf, toSingerRange, wholeLines } from "./lines";
-import type { FitWords } from "./lines";
+import { roleVoicesIn } from "../score/voices";
+import { fitWords, toSingerRange } from "./fit-words";
+import type { FitWords } from "./fit-words";
 
 export type CastingRole = {
   id: string;
@@ -69,13 +68,8 @@ export type CastingGrid = {
  */
 export async function readCastingGrid(actor: Actor, productionId: string): Promise<CastingGrid> {
   const scope = await productionFor(actor, productionId, "casting:see");
-  const [roleRows, lines, marked, chosen] = await Promise.all([
-    db
-      .select({ id: roles.id, name: roles.name, kind: roles.kind, needed: roles.needed })
-      .from(roles)
-      .where(and(eq(roles.productionId, scope.id), isNull(roles.removedAt)))
-      .orderBy(asc(roles.place)),
-    linesOf(scope.id),
+  const [voices, marked, chosen] = await Promise.all([
+    roleVoicesIn(db, scope.id),
     db
       .select({
         personId: callbackMarks.personId,
@@ -116,20 +110,19 @@ export async function readCastingGrid(actor: Actor, productionId: string): Promi
       // The newest round speaks first.
       .orderBy(desc(callbackInvitations.publishedAt)),
   ]);
-  const whole = wholeLines(lines);
-  const grid = roleRows.map((role): CastingRole => {
-    const line = whole.get(role.id);
-    return {
-      ...role,
-      line: line
-        ? {
-            low: line.low,
-            high: line.high,
-            tessitura: line.histogram ? tessitura(line.histogram) : null,
-          }
-        : null,
-    };
-  });
+  const grid = voices.map(
+    ({ id, name, kind, needed, line }): CastingRole => ({
+      id,
+      name,
+      kind,
+      needed,
+      line: line && {
+        low: line.low,
+        high: line.high,
+        tessitura: line.histogram ? tessitura(line.histogram) : null,
+      },
+    }),
+  );
   return {
     roles: grid,
     singers: singerRows.map((row) => {
@@ -148,12 +141,12 @@ export async function readCastingGrid(actor: Actor, productionId: string): Promi
         ],
         answer: answers.find((a) => a.personId === row.personId)?.answer ?? null,
         cells: Object.fromEntries(
-          roleRows.map((role) => {
+          voices.map((role) => {
             const choice = chosen.find((c) => c.personId === row.personId && c.roleId === role.id);
             return [
               role.id,
               {
-                ...fitWords(best, whole.get(role.id)),
+                ...fitWords(best, role.line),
                 choice: choice
                   ? { state: choice.state, kind: choice.kind, version: choice.version }
                   : null,
@@ -190,13 +183,8 @@ export async function computeFit(
   input: z.output<typeof fitSchema>,
 ): Promise<FitDetail> {
   const scope = await productionFor(actor, input.productionId, "casting:see");
-  const [[role], [person], lines, ranges] = await Promise.all([
-    db
-      .select({ id: roles.id, name: roles.name })
-      .from(roles)
-      .where(
-        and(eq(roles.id, input.roleId), eq(roles.productionId, scope.id), isNull(roles.removedAt)),
-      ),
+  const [voices, [person], ranges] = await Promise.all([
+    roleVoicesIn(db, scope.id),
     db
       .select({ name: people.name, minor: people.minor })
       .from(people)
@@ -207,12 +195,11 @@ export async function computeFit(
           isNull(people.removedAt),
         ),
       ),
-    linesOf(scope.id),
     rangesOf(db, [input.personId]),
   ]);
+  const role = voices.find((voice) => voice.id === input.roleId);
   if (!role || !person) throw new AppError("not-found");
-  const own = lines.filter((line) => line.roleId === role.id);
-  const line = mergeLines(own);
+  const { line } = role;
   const onFile = ranges.get(input.personId) ?? { claimed: null, heard: null, best: null };
   if (!line)
     throw new AppError(
@@ -230,13 +217,13 @@ export async function computeFit(
     singer: { ...person, ranges: onFile },
     role: { name: role.name },
     whole: { ...whole, words: fitInWords(whole) },
-    numbers: own.map((each) => {
-      const fit = rangeFit(singer, each);
+    numbers: role.perNumber.map((each) => {
+      const fit = rangeFit(singer, each.line);
       return {
         numberId: each.numberId,
         label: each.label,
         title: each.title,
-        line: { low: each.low, high: each.high },
+        line: { low: each.line.low, high: each.line.high },
         fit,
         words: fitInWords(fit),
       };

@@ -68,7 +68,7 @@ export async function readClashes(
 
   const stretches = held.map((stretch, index) => ({
     id: String(index),
-    eventId: stretch.eventId as string | null,
+    eventId: stretch.eventId,
     from: stretch.from,
     to: stretch.to,
     people: stretch.personId === null ? [] : [login.get(stretch.personId) ?? stretch.personId],

@@ -88,7 +88,7 @@ function OwnBlocks({ sheet }: { sheet: OwnSheet }) {
               </p>
               <p className="text-sm text-ink-2">
                 {[
-                  block.kind,
+                  block.numberLabel === undefined ? block.kind : undefined,
                   block.bars === undefined ? undefined : `bars ${block.bars}`,
                   block.detail,
                   block.where,

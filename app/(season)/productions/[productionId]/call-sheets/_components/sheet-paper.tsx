@@ -2,6 +2,7 @@ import type { ReactNode } from "react";
 import { RehearsalMark } from "@/components/layout/rehearsal-mark";
 import type { CallSheet, CallSheetBlock } from "@/lib/call-sheets/types";
 import { dayAndClock, longDay } from "@/lib/format-dates";
+import { groupBy } from "@/lib/group-by";
 import "./sheet-paper.css";
 
 type Props = {
@@ -54,7 +55,7 @@ export function SheetPaper({ sheet, paper, locale, preview = false }: Props) {
         <SheetTable sheet={sheet} />
       )}
       <div className="mt-6 grid gap-x-8 gap-y-4 border-t border-ink pt-3 text-sm sm:grid-cols-3 print:grid-cols-3">
-        <Part title="Released" lines={sheet.released.map(({ who, at }) => `${who} ${at}`)} />
+        <Released released={sheet.released} />
         <Part title="Music" lines={sheet.music} />
         <div className="flex flex-col gap-4">
           <Part title="Next" lines={sheet.tomorrow} />
@@ -139,6 +140,22 @@ function What({ block }: { block: CallSheetBlock }) {
       </span>
       {detail !== "" && <span className="block">{detail}</span>}
     </>
+  );
+}
+
+/** Who may go when: people who go together share a line. */
+function Released({ released }: { released: CallSheet["released"] }) {
+  const byTime = [...groupBy(released, ({ at }) => at)];
+  if (byTime.length === 0) return null;
+  return (
+    <div>
+      <h3 className="font-sans text-sm font-bold">Released</h3>
+      {byTime.map(([at, people]) => (
+        <p key={at}>
+          <strong>{at}</strong> {people.map(({ who }) => who).join(", ")}
+        </p>
+      ))}
+    </div>
   );
 }
 

@@ -141,6 +141,7 @@ function Ladder({ call, label }: { call: CallRead; label: string }) {
   const [hours = 0, minutes = 0] = call.localTime.split(":").map(Number);
   const start = hours * 60 + minutes;
   const at = (offset: number) => start + offset;
+  const rows = ladderRows(call.blocks);
   const leads = call.leader === null ? "" : `${call.leader} leads. `;
   return (
     <>
@@ -155,7 +156,7 @@ function Ladder({ call, label }: { call: CallRead; label: string }) {
             minutes: block.minutes,
             ...(block.label !== null && { number: block.label }),
           }))}
-        rows={ladderRows(call.blocks)}
+        rows={rows}
         breaks={call.blocks
           .filter((block) => block.kind === "break")
           .map((block) => ({ start: at(block.offset), minutes: block.minutes }))}
@@ -167,6 +168,14 @@ function Ladder({ call, label }: { call: CallRead; label: string }) {
           .join(", ")}
       </p>
       <ul className="mt-2 text-sm text-ink-2">
+        {rows.map(
+          (row) =>
+            row.crowd && (
+              <li key={row.id}>
+                {row.name}: {row.crowd.join(", ")}
+              </li>
+            ),
+        )}
         {call.blocks
           .filter((block) => block.bars !== null || block.detail !== null)
           .map((block) => (

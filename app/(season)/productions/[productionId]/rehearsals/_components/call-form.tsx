@@ -31,7 +31,7 @@ export function NewCallForm({ choices, initial }: { choices: CallChoices; initia
       router.push(`/productions/${initial.productionId}/rehearsals/${callId}`),
   });
   return (
-    <ActionForm state={state} submitLabel="Save the draft" className="max-w-none">
+    <ActionForm state={state} submitLabel="Save the draft" className="max-w-none!">
       <FormProvider {...state.form}>
         <CallFieldset choices={choices} callId={null} />
       </FormProvider>
@@ -63,7 +63,7 @@ export function ChangeCallForm({
     <ActionForm
       state={state}
       submitLabel={published ? "Save the published call" : "Save the draft"}
-      className="max-w-none"
+      className="max-w-none!"
     >
       <FormProvider {...state.form}>
         <CallFieldset choices={choices} callId={initial.callId} />

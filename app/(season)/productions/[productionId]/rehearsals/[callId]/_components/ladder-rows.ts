@@ -4,6 +4,9 @@ import type { CallBlockRead } from "@/lib/data/calls/read";
 /** Above so many people with the same roles and the same blocks, one row stands for all of them. */
 const ROWS_EACH = 3;
 
+/** A row of the ladder; one that stands for many people names them too. */
+export type CrowdRow = LadderRow & { crowd?: string[] };
+
 type Person = {
   personId: string;
   name: string;
@@ -16,7 +19,7 @@ type Person = {
  * The rows of a call's ladder: a role and who sings it, in the order they come; a crowd that is needed in
  * the same blocks under the same role is one row with its number.
  */
-export function ladderRows(blocks: readonly CallBlockRead[]): LadderRow[] {
+export function ladderRows(blocks: readonly CallBlockRead[]): CrowdRow[] {
   const people = new Map<string, Person & { roleSet: Set<string> }>();
   for (const block of blocks) {
     for (const called of block.called) {
@@ -40,7 +43,7 @@ export function ladderRows(blocks: readonly CallBlockRead[]): LadderRow[] {
     const name = `${roles} ${person.blockIds.join(" ")}`;
     groups.set(name, [...(groups.get(name) ?? []), { ...person, roles }]);
   }
-  return [...groups.values()].flatMap((group): LadderRow[] => {
+  return [...groups.values()].flatMap((group): CrowdRow[] => {
     const [first] = group;
     if (!first) return [];
     if (group.length > ROWS_EACH && first.roles !== "") {
@@ -50,6 +53,7 @@ export function ladderRows(blocks: readonly CallBlockRead[]): LadderRow[] {
           name: first.roles,
           sub: `${String(group.length)} singers`,
           blockIds: first.blockIds,
+          crowd: group.map((person) => person.name),
         },
       ];
     }
