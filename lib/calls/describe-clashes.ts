@@ -5,13 +5,21 @@ import { findRemedies } from "./find-remedies";
 import { nearestFreeStart } from "./nearest-free-start";
 import type { CallFacts, CallPlan, ClashInWords } from "./types";
 
-/** Every clash of a call in words, with what to do; the whole call may be moved inside `within`. */
+/** A room or a pianist that is taken stops the whole call, so it is said before what stops one person. */
+const FIRST: Partial<Record<ClashInWords["kind"], number>> = { room: -2, pianist: -1 };
+
+/**
+ * Every clash of a call in words, with what to do; the whole call may be moved inside `within`. First the
+ * room and the pianist, then people in order of time.
+ */
 export function describeClashes(
   plan: CallPlan,
   facts: CallFacts,
   within: Interval,
 ): ClashInWords[] {
-  const clashes = findCallClashes(plan, facts);
+  const clashes = findCallClashes(plan, facts).sort(
+    (a, b) => (FIRST[a.kind] ?? 0) - (FIRST[b.kind] ?? 0),
+  );
   if (clashes.length === 0) return [];
   const freeStart = nearestFreeStart(plan, facts, within);
   return clashes.map((clash) =>

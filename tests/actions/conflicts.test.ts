@@ -28,15 +28,13 @@ beforeAll(async () => {
     .update(companies)
     .set({ zone: "America/New_York" })
     .where(eq(companies.id, world.otherCompanyId));
-  await db
-    .insert(people)
-    .values({
-      id: secondRecord,
-      companyId: world.otherCompanyId,
-      userId: world.people.actor.userId,
-      name: "Wren Tallis",
-      email: world.people.actor.email,
-    });
+  await db.insert(people).values({
+    id: secondRecord,
+    companyId: world.otherCompanyId,
+    userId: world.people.actor.userId,
+    name: "Wren Tallis",
+    email: world.people.actor.email,
+  });
 });
 beforeEach(async () => {
   await db.delete(conflicts);
@@ -46,7 +44,10 @@ beforeEach(async () => {
 
 const mine = async () => listOwnConflicts(await actorOf(world.people.actor.userId));
 async function added(
-  input: Partial<typeof DAY> & { personIds?: string[]; span?: "day" | "days" | "part" } = {},
+  input: Partial<Omit<typeof DAY, "span">> & {
+    personIds?: string[];
+    span?: "day" | "days" | "part";
+  } = {},
 ): Promise<string[]> {
   const result = await addConflict({ ...DAY, personIds: [world.people.actor.personId], ...input });
   if (!result.ok) throw new Error(result.error.message);

@@ -36,7 +36,8 @@ export const AROUND: Doors = {
   "app/(me)/account/actions.ts#revokeToken": { may: [], input: (w) => ({ tokenId: w.roleId }) },
   "app/(me)/actions.ts#answerSlot": { may: ["actor"], input: (w) => ({ signUpId: w.signUpId, slotId: w.slotId, answer: "confirm" }) },
   "app/(me)/actions.ts#answerCallback": { may: ["actor"], input: (w) => ({ invitationId: w.invitationId, answer: "yes" }) },
-  "app/(me)/actions.ts#claimRange": { may: ["actor"], input: (w) => ({ personIds: [w.people.actor.personId], low: 55, high: 79, comfortableLow: null, comfortableHigh: null }) },
+  "app/(me)/actions.ts#acknowledgeSheet": { may: ["actor"], input: (w) => ({ issueId: w.issueId }) },
+  "app/(me)/actions.ts#claimRange": { may: ["actor"], input: (w) => ({ personIds: [w.people.actor.personId], range: { low: 55, high: 79 }, comfortable: { low: null, high: null } }) },
   // There is no open invitation to the address of anyone here.
   "app/(me)/actions.ts#joinCompany": { may: [], input: (w) => ({ invitationId: w.accountInvitationId }) },
   "app/(me)/actions.ts#addConflict": { may: ["actor"], input: (w) => ({ personIds: [w.people.actor.personId], span: "day", from: "2027-04-02", to: "", timeFrom: "", timeTo: "", reason: "" }) },

@@ -19,7 +19,7 @@ export function CheckPanel({
 }) {
   const check = lastOf(state);
   return (
-    <div className="flex flex-col gap-6 lg:sticky lg:top-4">
+    <div className="flex flex-col gap-6 lg:sticky lg:top-4 lg:max-h-[calc(100dvh-2rem)] lg:overflow-y-auto">
       <div role="status" className="text-sm text-ink-2">
         {state.at === "incomplete" &&
           "Choose a day, a time and at least one block: clashes are looked for as you go."}
