@@ -1,5 +1,6 @@
 import "server-only";
 import type { z } from "zod";
+import { readBody } from "@/lib/formats/multipart/read-body";
 import { ApiError } from "./define-api-route";
 
 const MAX_JSON_BYTES = 1_000_000;
@@ -9,12 +10,11 @@ export async function readJson<S extends z.ZodType>(
   request: Request,
   schema: S,
 ): Promise<z.output<S>> {
-  const text = await request.text();
-  if (text.length > MAX_JSON_BYTES)
-    throw new ApiError(413, "request.too-large", "Send at most 1 MB of JSON.");
+  const chunks = await readBody(request, MAX_JSON_BYTES);
+  if (chunks === null) throw new ApiError(413, "request.too-large", "Send at most 1 MB of JSON.");
   let value: unknown;
   try {
-    value = JSON.parse(text);
+    value = JSON.parse(await new Blob(chunks).text());
   } catch {
     throw new ApiError(400, "request.not-json", "The body is not JSON.");
   }
@@ -34,35 +34,33 @@ export async function readFileField(
   request: Request,
   maxBytes: number,
 ): Promise<{ name: string; bytes: Uint8Array }> {
-  if (!(request.headers.get("content-type") ?? "").startsWith("multipart/form-data")) {
+  const contentType = request.headers.get("content-type") ?? "";
+  if (!contentType.startsWith("multipart/form-data")) {
     throw new ApiError(
       415,
       "request.not-multipart",
       "Send the file as multipart/form-data, in the field `file`.",
     );
   }
-  // The length is told before the body is read; a body that lies about it is counted below.
-  if (Number(request.headers.get("content-length") ?? 0) > maxBytes + 10_000) {
-    throw new ApiError(
+  const tooLarge = (): ApiError =>
+    new ApiError(
       413,
       "request.too-large",
       `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`,
     );
-  }
+  const chunks = await readBody(request, maxBytes + 10_000);
+  if (chunks === null) throw tooLarge();
   let form: FormData;
   try {
-    form = await request.formData();
+    form = await new Response(new Blob(chunks), {
+      headers: { "content-type": contentType },
+    }).formData();
   } catch {
     throw new ApiError(400, "request.broken-upload", "The upload broke off. Send it again.");
   }
   const file = form.get("file");
   if (!(file instanceof File))
     throw new ApiError(400, "request.no-file", "There is no file in the field `file`.", "file");
-  if (file.size > maxBytes)
-    throw new ApiError(
-      413,
-      "request.too-large",
-      `Send at most ${String(Math.floor(maxBytes / 1_048_576))} MB.`,
-    );
+  if (file.size > maxBytes) throw tooLarge();
   return { name: file.name, bytes: new Uint8Array(await file.arrayBuffer()) };
 }

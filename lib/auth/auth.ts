@@ -39,7 +39,8 @@ const nextAuth = NextAuth({
   session: {
     strategy: "database",
     maxAge: SESSION_DAYS * 86_400,
-    updateAge: 86_400,
+    // Never moved on: a session that somebody else came by ends with its thirty days, however often it is used.
+    updateAge: SESSION_DAYS * 86_400,
     generateSessionToken: newSecret,
   },
   secret: env().AUTH_SECRET,

@@ -4,6 +4,7 @@ import type { z } from "zod";
 import { AppError, asAppError } from "@/lib/errors";
 import type { ActionError, ActionResult } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
+import { faultOf } from "@/lib/services/fault";
 import { log } from "@/lib/services/log";
 import { requireActor } from "./get-actor";
 
@@ -61,15 +62,7 @@ export function describeError(error: unknown): ActionError {
       ...(known.fields ? { fields: known.fields } : {}),
     };
   }
-  log.error(
-    {
-      err:
-        error instanceof Error
-          ? { type: error.name, message: error.message, stack: error.stack }
-          : "unknown",
-    },
-    "fault",
-  );
+  log.error({ err: faultOf(error) }, "fault");
   return {
     code: "fault",
     message: "Something went wrong on our side. Nothing you typed is lost: try again in a moment.",

@@ -3,6 +3,7 @@ import { countTry, RATES } from "@/lib/data/rate-limit";
 import { userOfToken } from "@/lib/data/tokens";
 import { asAppError } from "@/lib/errors";
 import type { ErrorCode } from "@/lib/errors";
+import { faultOf } from "@/lib/services/fault";
 import { log } from "@/lib/services/log";
 import { currentUserId } from "./current-user";
 import { assertOwnOrigin } from "./own-origin";
@@ -90,15 +91,7 @@ function refuse(error: unknown): Response {
       response.headers.set("retry-after", String(known.retryAfter));
     return response;
   }
-  log.error(
-    {
-      err:
-        error instanceof Error
-          ? { type: error.name, message: error.message, stack: error.stack }
-          : "unknown",
-    },
-    "fault",
-  );
+  log.error({ err: faultOf(error) }, "fault");
   return answer(500, "server.fault", "Something went wrong on our side. Try again in a moment.");
 }
 

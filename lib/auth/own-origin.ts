@@ -12,7 +12,8 @@ export function assertOwnOrigin(request: Request): void {
   if (origin === null) return;
   const host = request.headers.get("host");
   const own = [new URL(env().AUTH_URL).host, host];
-  if (!own.includes(hostOf(origin)))
+  const from = hostOf(origin);
+  if (from === null || !own.includes(from))
     throw new AppError("not-allowed", "Send this from Cembalo's own pages.");
 }
 

@@ -2,6 +2,7 @@ import "server-only";
 import { and, asc, eq, isNull, lte, sql } from "drizzle-orm";
 import { db } from "@/db/client";
 import { outbox } from "@/db/schema";
+import { codeOf } from "@/lib/services/fault";
 import { log } from "@/lib/services/log";
 import { sendMail } from "@/lib/services/mail/send-mail";
 import { writeMessage } from "@/lib/services/mail/templates";
@@ -41,7 +42,7 @@ async function deliverOne(): Promise<"sent" | "failed" | "nothing due"> {
     } catch (error) {
       const tries = mail.tries + 1;
       const wait = Math.min(3600, 5 * 2 ** tries);
-      log.warn({ mail: mail.id, tries, reason: error instanceof Error ? error.message.slice(0, 120) : "unknown" }, "mail not sent");
+      log.warn({ mail: mail.id, tries, reason: codeOf(error) ?? "unknown" }, "mail not sent");
       await tx
         .update(outbox)
         .set({

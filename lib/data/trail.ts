@@ -15,6 +15,8 @@ const PAGE = 50;
 const KEPT_FROM_OTHERS: { action: string; needs: Action }[] = [
   { action: "casting.choose", needs: "casting:see" },
   { action: "range.hear", needs: "auditions:read" },
+  // Whoever answers was called back.
+  { action: "callbacks.answer", needs: "callbacks:read" },
 ];
 
 export type TrailEvent = {

@@ -1,4 +1,5 @@
 import "server-only";
+import { faultOf } from "@/lib/services/fault";
 import { log } from "@/lib/services/log";
 import { deliverOutbox } from "./deliver-outbox";
 import { sweepRateCounters } from "./rate-limit";
@@ -19,7 +20,7 @@ export function startWorker(): void {
     const work = rounds % SWEEP_EVERY === 0 ? sweepRateCounters().then(() => deliverOutbox()) : deliverOutbox();
     work
       .catch((error: unknown) => {
-        log.error({ reason: error instanceof Error ? error.message.slice(0, 200) : "unknown" }, "worker round failed");
+        log.error({ err: faultOf(error) }, "worker round failed");
       })
       .finally(() => {
         busy = false;

@@ -1,10 +1,18 @@
 import "server-only";
-import { and, asc, eq, isNull, sql } from "drizzle-orm";
+import { and, asc, desc, eq, isNull, sql } from "drizzle-orm";
 import type { z } from "zod";
 import { db } from "@/db/client";
 import type { Tx } from "@/db/client";
 import { newId } from "@/db/columns";
-import { callbackMarks, callbackRounds, people, roles, rooms, signUps } from "@/db/schema";
+import {
+  callbackMarks,
+  callbackRounds,
+  people,
+  productions,
+  roles,
+  rooms,
+  signUps,
+} from "@/db/schema";
 import { recordAudit } from "@/lib/data/audit";
 import { fitWords } from "@/lib/data/casting/fit-words";
 import type { FitWords } from "@/lib/data/casting/fit-words";
@@ -139,14 +147,26 @@ export async function startRound(
   input: z.output<typeof startRoundSchema>,
 ): Promise<string> {
   const scope = await productionFor(actor, input.productionId, "callbacks:publish");
-  const last = await latestRound(scope.id);
-  if (last && last.issue === 0)
-    throw new AppError(
-      "refused",
-      "There is a round that has not been published yet. Finish that one first.",
-    );
   const id = newId();
   await inTransaction(async (tx) => {
+    // Two who begin at once come through here one after the other.
+    await tx
+      .select({ id: productions.id })
+      .from(productions)
+      .where(eq(productions.id, scope.id))
+      .for("update");
+    const [last] = await tx
+      .select({ issue: callbackRounds.issue })
+      .from(callbackRounds)
+      .where(eq(callbackRounds.productionId, scope.id))
+      .orderBy(desc(callbackRounds.id))
+      .limit(1)
+      .for("update");
+    if (last?.issue === 0)
+      throw new AppError(
+        "refused",
+        "There is a round that has not been published yet. Finish that one first.",
+      );
     await tx
       .insert(callbackRounds)
       .values({ id, productionId: scope.id, title: input.title, zone: scope.zone });

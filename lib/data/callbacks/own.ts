@@ -23,10 +23,28 @@ export type OwnCallback = {
   publishedAt: Date;
 };
 
+/** The invitations that are the actor's own, in productions where they still are an actor. */
+function ownInvitations(actor: Actor) {
+  const own = actor.positions.filter((p) => p.kind === "actor" && p.productionId !== null);
+  return own.length === 0
+    ? null
+    : and(
+        inArray(
+          callbackInvitations.personId,
+          own.map((p) => p.personId),
+        ),
+        inArray(
+          callbackRounds.productionId,
+          own.flatMap((p) => p.productionId ?? []),
+        ),
+        isNull(productions.removedAt),
+      );
+}
+
 /** What was published to the actor, the newest issue only; nothing of a draft, nothing of anyone else. */
 export async function listOwnCallbacks(actor: Actor): Promise<OwnCallback[]> {
-  const ids = actor.people.map((p) => p.id);
-  if (ids.length === 0) return [];
+  const own = ownInvitations(actor);
+  if (!own) return [];
   const rows = await db
     .select({
       invitationId: callbackInvitations.id,
@@ -39,13 +57,7 @@ export async function listOwnCallbacks(actor: Actor): Promise<OwnCallback[]> {
     .from(callbackInvitations)
     .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
     .innerJoin(productions, eq(productions.id, callbackRounds.productionId))
-    .where(
-      and(
-        inArray(callbackInvitations.personId, ids),
-        isNull(callbackInvitations.supersededAt),
-        isNull(productions.removedAt),
-      ),
-    )
+    .where(and(own, isNull(callbackInvitations.supersededAt)))
     .orderBy(desc(callbackInvitations.publishedAt));
   return rows.map(({ snapshot, ...row }) => ({
     ...row,
@@ -63,28 +75,30 @@ export async function answerCallback(
   actor: Actor,
   input: z.output<typeof answerCallbackSchema>,
 ): Promise<void> {
+  const own = ownInvitations(actor);
+  if (!own) throw new AppError("not-found");
   const [row] = await db
-    .select({
-      personId: callbackInvitations.personId,
-      supersededAt: callbackInvitations.supersededAt,
-      companyId: productions.companyId,
-      productionId: productions.id,
-    })
+    .select({ companyId: productions.companyId, productionId: productions.id })
     .from(callbackInvitations)
     .innerJoin(callbackRounds, eq(callbackRounds.id, callbackInvitations.roundId))
     .innerJoin(productions, eq(productions.id, callbackRounds.productionId))
-    .where(eq(callbackInvitations.id, input.invitationId));
-  if (!row || !actor.people.some((p) => p.id === row.personId)) throw new AppError("not-found");
-  if (row.supersededAt !== null)
-    throw new AppError(
-      "stale",
-      "The list has changed since. Load the page again to see what it says now.",
-    );
+    .where(and(eq(callbackInvitations.id, input.invitationId), own));
+  if (!row) throw new AppError("not-found");
   await inTransaction(async (tx) => {
-    await tx
+    const [answered] = await tx
       .update(callbackInvitations)
       .set({ answer: input.answer, answeredAt: new Date() })
-      .where(eq(callbackInvitations.id, input.invitationId));
+      .where(
+        and(
+          eq(callbackInvitations.id, input.invitationId),
+          isNull(callbackInvitations.supersededAt),
+        ),
+      );
+    if (answered.affectedRows === 0)
+      throw new AppError(
+        "stale",
+        "The list has changed since. Load the page again to see what it says now.",
+      );
     await recordAudit(tx, actor, {
       companyId: row.companyId,
       productionId: row.productionId,

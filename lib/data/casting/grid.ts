@@ -8,6 +8,7 @@ import {
   callbackRounds,
   choices,
   people,
+  positions,
 } from "@/db/schema";
 import { productionFor } from "@/lib/data/guard";
 import { rangesOf } from "@/lib/data/ranges";
@@ -110,19 +111,17 @@ export async function readCastingGrid(actor: Actor, productionId: string): Promi
       // The newest round speaks first.
       .orderBy(desc(callbackInvitations.publishedAt)),
   ]);
-  const grid = voices.map(
-    ({ id, name, kind, needed, line }): CastingRole => ({
-      id,
-      name,
-      kind,
-      needed,
-      line: line && {
-        low: line.low,
-        high: line.high,
-        tessitura: line.histogram ? tessitura(line.histogram) : null,
-      },
-    }),
-  );
+  const grid = voices.map(({ id, name, kind, needed, line }): CastingRole => ({
+    id,
+    name,
+    kind,
+    needed,
+    line: line && {
+      low: line.low,
+      high: line.high,
+      tessitura: line.histogram ? tessitura(line.histogram) : null,
+    },
+  }));
   return {
     roles: grid,
     singers: singerRows.map((row) => {
@@ -188,6 +187,15 @@ export async function computeFit(
     db
       .select({ name: people.name, minor: people.minor })
       .from(people)
+      // A singer of this production: whom another one of the company hears is not this one's business.
+      .innerJoin(
+        positions,
+        and(
+          eq(positions.personId, people.id),
+          eq(positions.productionId, scope.id),
+          eq(positions.kind, "actor"),
+        ),
+      )
       .where(
         and(
           eq(people.id, input.personId),

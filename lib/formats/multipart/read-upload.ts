@@ -1,4 +1,5 @@
 import { AppError } from "@/lib/errors";
+import { readBody } from "./read-body";
 
 /** What a form wraps around the file: boundaries, headings, the file's name, small fields. */
 const WRAPPING = 8 * 1024;
@@ -23,8 +24,9 @@ export type Upload = {
  * length. Throws `too-large`, or `invalid` when there is no file.
  */
 export async function readUpload(request: Request, rules: UploadRules): Promise<Upload> {
-  const body = new Blob(await chunksOf(request, rules));
-  const form = await formOf(body, request.headers.get("content-type") ?? "");
+  const chunks = await readBody(request, rules.maxBytes + WRAPPING);
+  if (chunks === null) throw new AppError("too-large", rules.tooLarge);
+  const form = await formOf(new Blob(chunks), request.headers.get("content-type") ?? "");
   const file = form?.get("file");
   if (!(file instanceof File)) throw new AppError("invalid", rules.missing);
   if (file.size > rules.maxBytes) throw new AppError("too-large", rules.tooLarge);
@@ -36,26 +38,6 @@ export async function readUpload(request: Request, rules: UploadRules): Promise<
       return typeof value === "string" && value !== "" ? value : null;
     },
   };
-}
-
-async function chunksOf(request: Request, rules: UploadRules): Promise<Uint8Array<ArrayBuffer>[]> {
-  const most = rules.maxBytes + WRAPPING;
-  if (Number(request.headers.get("content-length") ?? 0) > most)
-    throw new AppError("too-large", rules.tooLarge);
-  const chunks: Uint8Array<ArrayBuffer>[] = [];
-  const reader = request.body?.getReader();
-  let total = 0;
-  while (reader) {
-    const { done, value } = await reader.read();
-    if (done) break;
-    total += value.byteLength;
-    if (total > most) {
-      await reader.cancel();
-      throw new AppError("too-large", rules.tooLarge);
-    }
-    chunks.push(value);
-  }
-  return chunks;
 }
 
 /** The form, or null for a body that is none: the same answer as one without a file. */

@@ -1,19 +1,18 @@
 "use client";
 
+import { PageTitle } from "@/components/layout/page-title";
 import { Button } from "@/components/ui/button";
-import { EmptyState } from "@/components/ui/empty-state";
 
 export default function PianistsError({ retry }: { error: unknown; retry: () => void }) {
   return (
-    <EmptyState
+    <PageTitle
       title="The pianists could not be shown"
-      action={
+      sub="Something went wrong on our side. Nothing that was saved is lost."
+      actions={
         <Button kind="primary" onClick={() => retry()}>
           Try again
         </Button>
       }
-    >
-      Something went wrong on our side. Nothing that was saved is lost.
-    </EmptyState>
+    />
   );
 }

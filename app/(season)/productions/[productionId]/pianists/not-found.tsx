@@ -1,18 +1,17 @@
 import Link from "next/link";
+import { PageTitle } from "@/components/layout/page-title";
 import { Button } from "@/components/ui/button";
-import { EmptyState } from "@/components/ui/empty-state";
 
 export default function PianistsNotFound() {
   return (
-    <EmptyState
+    <PageTitle
       title="This is not here"
-      action={
+      sub="It may have been removed, or it is not for your position in the production."
+      actions={
         <Button asChild>
           <Link href="/season">Back to your season</Link>
         </Button>
       }
-    >
-      It may have been removed, or it is not for your position in the production.
-    </EmptyState>
+    />
   );
 }
