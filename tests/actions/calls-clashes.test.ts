@@ -50,6 +50,51 @@ async function checked(change: Record<string, unknown> = {}) {
 }
 
 describe("clashes while a call is being made", () => {
+  test("a music director who leads it and hears callbacks elsewhere then; another company's are not named", async () => {
+    const round = {
+      title: "Callbacks",
+      zone: "Europe/London",
+      startsAt: new Date("2027-04-06T17:00:00Z"),
+      endsAt: new Date("2027-04-06T18:00:00Z"),
+    };
+    await db.insert(t.callbackRounds).values({ ...round, productionId: world.siblingProductionId });
+    // Runa Oake directs the music of the sibling production, too.
+    await db.insert(t.positions).values({
+      companyId: world.companyId,
+      personId: world.people.md.personId,
+      productionId: world.siblingProductionId,
+      kind: "music_director",
+    });
+    const { clashes } = await checked({ leaderId: world.people.md.personId });
+    expect(clashes.map((clash) => clash.words)).toEqual([
+      "Runa Oake hears the callbacks of Marrow Street, 18:00–19:00: 30 min of this call",
+    ]);
+    await db.delete(t.callbackRounds);
+    const there = newId();
+    await db
+      .insert(t.people)
+      .values({
+        id: there,
+        companyId: world.otherCompanyId,
+        userId: world.people.md.userId,
+        name: "Runa Oake",
+      });
+    await db
+      .insert(t.positions)
+      .values({
+        companyId: world.otherCompanyId,
+        personId: there,
+        productionId: world.otherProductionId,
+        kind: "music_director",
+      });
+    await db.insert(t.callbackRounds).values({ ...round, productionId: world.otherProductionId });
+    const abroad = await checked({ leaderId: world.people.md.personId });
+    expect(abroad.clashes.map((clash) => clash.words)).toEqual([
+      "Runa Oake is engaged, 18:00–19:00: 30 min of this call",
+    ]);
+    await db.delete(t.callbackRounds);
+  });
+
   test("a conflict: who, what, by how many minutes, and the blocks that could move", async () => {
     // 17:30Z is 18:30 in London in April (British Summer Time).
     const id = await addConflict(

@@ -1,9 +1,7 @@
 import { eq } from "drizzle-orm";
 import { beforeAll, beforeEach, describe, expect, test } from "vitest";
-import {
-  acknowledgeSheet,
-  issueSheet,
-} from "@/app/(season)/productions/[productionId]/call-sheets/actions";
+import { acknowledgeSheet } from "@/app/(me)/actions";
+import { issueSheet } from "@/app/(season)/productions/[productionId]/call-sheets/actions";
 import {
   changeCall,
   createCall,

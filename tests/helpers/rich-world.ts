@@ -80,9 +80,12 @@ export async function makeRichWorld() {
   await db.insert(t.callSheetIssues).values({
     id: ids.issueId, productionId, localDate: "2027-03-24", number: 1, issuedAt: new Date(), concerns: [people.actor.personId],
     snapshot: {
-      productionTitle: "The Tidewatcher", companyName: "Lantern Street Theatre", localDate: "2027-03-24", zone: "Europe/London", issueNumber: 1, issuedAt: new Date().toISOString(),
-      changed: [], blocks: [{ from: "20:00", to: "21:00", kind: "number", numberLabel: "1", title: "The Ness Light", who: ["Wren Tallis"], where: "Room 1" }],
-      released: [{ who: "Wren Tallis", at: "21:00" }], music: ["Runa Oake leads"], tomorrow: [], away: [], notes: [],
+      sheet: {
+        productionTitle: "The Tidewatcher", companyName: "Lantern Street Theatre", localDate: "2027-03-24", zone: "Europe/London", issueNumber: 1, issuedAt: new Date().toISOString(),
+        changed: [], blocks: [{ from: "20:00", to: "21:00", kind: "number", numberLabel: "1", title: "The Ness Light", who: ["Wren Tallis"], where: "Room 1" }],
+        released: [{ who: "Wren Tallis", at: "21:00" }], music: ["Runa Oake leads"], tomorrow: [], away: [], notes: [],
+      },
+      people: { [people.actor.personId]: { name: "Wren Tallis", blockIds: [], from: "20:00", releasedAt: "21:00" } },
     },
   });
   // Someone invited as choreographer who has not accepted yet.

@@ -22,12 +22,13 @@ import type { Engagement } from "@/lib/calls/types";
 import type { ProductionScope } from "@/lib/data/guard";
 import { groupBy } from "@/lib/group-by";
 import type { Interval } from "@/lib/schedule/types";
+import { hearingElsewhere } from "./hearing";
 
 type Who = { people: Map<string, string>; companyId: string; productionId: string };
 
 /**
  * What these people do elsewhere in a time, in every company that has a record of them: calls they are called to, lead or
- * play for, audition rooms they play in, and auditions and callbacks they sing in. Of their own production drafts count
+ * play for, audition rooms they play in, auditions and callbacks they sing in, and those they hear as music directors. Of their own production drafts count
  * too. What another company does is no more than "is engaged"; so is singing for another production.
  */
 export async function readEngagements(
@@ -43,6 +44,7 @@ export async function readEngagements(
     leadingElsewhere(who, window),
     playingElsewhere(who, window),
     singingElsewhere(who, window),
+    hearingElsewhere(ids, scope.companyId, window),
   ]);
   return found.flat().map((engagement, index) => ({ ...engagement, id: `e${index}` }));
 }

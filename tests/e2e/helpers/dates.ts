@@ -14,7 +14,8 @@ export function dayOfDemo(days: number): string {
 }
 
 /** Whether a date is a Saturday. */
-export const isSaturday = (date: string): boolean => new Date(`${date}T12:00:00Z`).getUTCDay() === 6;
+export const isSaturday = (date: string): boolean =>
+  new Date(`${date}T12:00:00Z`).getUTCDay() === 6;
 
 /** A date as people say it: "Saturday 20 March". */
 export function spoken(date: string): string {

@@ -161,14 +161,16 @@ export class DayPage {
   async assignPianist(name: string, room: string, from: string, to: string): Promise<void> {
     await this.askForPianist(name, room, from, to);
     await this.dialog.waitFor({ state: "hidden" });
-    await this.page.getByRole("button", { name: `Take ${name} out of ${room}, ${from}–${to}` }).waitFor();
+    await this.page
+      .getByRole("button", { name: `Take ${name} out of ${room}, ${from}–${to}` })
+      .waitFor();
   }
 
-  /** The reason for which the form in front was refused. */
-  async refusal(): Promise<string> {
-    const alert = this.dialog.getByRole("alert");
-    await alert.waitFor();
-    return alert.innerText();
+  /** Waits until the form in front says why it was refused. */
+  async refused(reason: RegExp): Promise<string> {
+    const words = this.dialog.getByText(reason).first();
+    await words.waitFor();
+    return words.innerText();
   }
 
   /** Invites everyone who stands on the day. Returns what the first of them will read. */

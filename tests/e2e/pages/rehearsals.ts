@@ -1,5 +1,5 @@
 import type { Locator, Page } from "playwright-core";
-import { visit } from "./visit";
+import { told, visit } from "./visit";
 
 export type CallAsked = {
   date: string;
@@ -93,7 +93,6 @@ export class CallPage {
 
   async publish(): Promise<void> {
     await this.page.getByRole("button", { name: "Publish the call" }).click();
-    await this.page.getByRole("button", { name: "Publish the call" }).waitFor({ state: "hidden" });
-    await this.page.getByText("Published", { exact: true }).first().waitFor();
+    await told(this.page, "Published: the room and the pianist are taken.");
   }
 }

@@ -93,10 +93,7 @@ export class ReadingPage {
   }
 
   becomes(name: string): Promise<string> {
-    return this.part(name)
-      .getByLabel(`${name} becomes`)
-      .locator("option:checked")
-      .innerText();
+    return this.part(name).getByLabel(`${name} becomes`).locator("option:checked").innerText();
   }
 
   /** Whether the page points out that a part looks an octave high. */

@@ -8,7 +8,8 @@ export async function sessionsOf(page: Page): Promise<string[]> {
   const cards = page.getByRole("article");
   for (const card of await cards.all()) {
     const music = card.getByText(/^\d+ pieces?$/);
-    if ((await music.count()) > 0 && !(await card.getByRole("list").isVisible())) await music.click();
+    if ((await music.count()) > 0 && !(await card.getByRole("list").isVisible()))
+      await music.click();
   }
   return (await cards.allInnerTexts()).map((text) => text.replaceAll(/\s+/g, " "));
 }

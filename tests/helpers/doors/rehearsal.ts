@@ -29,14 +29,13 @@ export const REHEARSAL: Doors = {
   [`${CALLS}cancelCall`]: planned((w) => ({ callId: w.publishedCallId, version: 1 })),
   [`${CALLS}restoreCall`]: planned((w) => ({ callId: w.publishedCallId, version: 1, to: "published" })),
   [`${CALLS}decideConflict`]: planned((w) => ({ conflictId: w.conflictId, state: "agreed" })),
-  "app/api/productions/[productionId]/calls/[callId]/clashes/route.ts#GET": reads(READS, "/clashes", call),
+  "app/api/productions/[productionId]/calls/[callId]/clashes/route.ts#GET": reads(PLANNERS, "/clashes", call),
   "app/(season)/productions/[productionId]/pianists/actions.ts#assignCallPianist": {
     may: MUSIC,
     input: (w) => ({ productionId: w.productionId, callId: w.callId, version: 1, personId: w.people.accompanist.personId }),
   },
   // What was seen is compared with what is there: for those who may, this answers that the sheet has changed.
   [`${SHEETS}issueSheet`]: planned(() => ({ localDate: "2027-03-24", seen: "0".repeat(64), notes: "" })),
-  [`${SHEETS}acknowledgeSheet`]: { may: ["actor"], input: (w) => ({ issueId: w.issueId }) },
   // An actor the sheet concerns downloads their own copy; a production's sheet is for its music team, the table and the admin.
   "app/api/productions/[productionId]/call-sheets/[issueId]/route.ts#GET": reads(READS, "/call-sheets/x?format=xlsx", sheet),
   "app/api/productions/[productionId]/call-sheets/[issueId]/acknowledgements/route.ts#GET": reads(PLANNERS, "/acknowledgements", sheet),

@@ -3,19 +3,10 @@
 import { revalidatePath } from "next/cache";
 import { defineAction } from "@/lib/auth/define-action";
 import * as issueData from "@/lib/data/sheets/issues";
-import * as ownData from "@/lib/data/sheets/own";
-import { acknowledgeSheetSchema, issueSheetSchema } from "@/lib/schemas/sheets";
+import { issueSheetSchema } from "@/lib/schemas/sheets";
 
 export const issueSheet = defineAction({ input: issueSheetSchema }, async (input, actor) => {
   const issued = await issueData.issueSheet(actor, input);
   revalidatePath(`/productions/${input.productionId}/call-sheets`, "layout");
   return issued;
 });
-
-export const acknowledgeSheet = defineAction(
-  { input: acknowledgeSheetSchema },
-  async (input, actor) => {
-    await ownData.acknowledgeSheet(actor, input.issueId);
-    revalidatePath("/me", "layout");
-  },
-);

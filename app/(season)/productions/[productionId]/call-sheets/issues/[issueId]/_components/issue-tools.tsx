@@ -5,7 +5,7 @@ import { useState } from "react";
 import { Button } from "@/components/ui/button";
 import { PendingButton } from "@/components/ui/pending-button";
 import { showToast } from "@/components/ui/toast-store";
-import { acknowledgeSheet } from "../../../actions";
+import { acknowledgeSheet } from "@/app/(me)/actions";
 
 /** Opens the browser's own print dialog. */
 export function PrintButton() {

@@ -1,0 +1,125 @@
+import type { Page } from "playwright-core";
+
+/** Everyone who asks for the addresses of the production, the owner among them as the control. */
+export const ASKERS = [
+  "music director",
+  "stage manager",
+  "director at the table",
+  "accompanist",
+  "singer",
+  "music director elsewhere",
+  "nobody",
+] as const;
+export type Asker = (typeof ASKERS)[number];
+
+export type Address = {
+  path: string;
+  /** Who gets it; all others are told that there is no such page, or to sign in. */
+  may: readonly Asker[];
+  /** An answer for programs, or a file: read without a page around it. */
+  file?: true;
+};
+
+const MUSIC: Asker[] = ["music director"];
+const PLANNERS: Asker[] = [...MUSIC, "stage manager"];
+const TABLE: Asker[] = [...MUSIC, "director at the table"];
+const TEAM: Asker[] = [...PLANNERS, "director at the table"];
+
+/** The addresses that one run through the main job leaves behind. */
+export type Made = {
+  production: string;
+  reading: string;
+  day: string;
+  call: string;
+  /** "2027-03-20" */
+  callDate: string;
+  issue: string;
+};
+
+/**
+ * Every page and download of the main job, with who gets it. Positions as "Who uses it, and what each must be able to do"
+ * has them: the stage manager runs days and calls and sees no casting before it is out; the table hears, marks and sees the
+ * grid; accompanists and actors have pages of their own and none of these.
+ */
+export function addressesOf(made: Made): Address[] {
+  const { production, day, call, issue } = made;
+  const api = `/api${production}`;
+  const id = (address: string): string => address.split("/").at(-1) ?? "";
+  const page = (path: string, may: Asker[]): Address => ({ path, may });
+  const file = (path: string, may: Asker[]): Address => ({ path, may, file: true });
+  return [
+    page(`${production}/score`, TEAM),
+    page(made.reading, MUSIC),
+    page(`${production}/auditions`, TEAM),
+    page(`${production}/auditions/new`, PLANNERS),
+    page(`${production}/auditions/import`, PLANNERS),
+    page(day, TEAM),
+    page(`${day}/change`, PLANNERS),
+    page(`${day}/running-order`, TEAM),
+    page(`${production}/callbacks`, TEAM),
+    page(`${production}/casting`, TABLE),
+    page(`${production}/rehearsals`, TEAM),
+    page(`${production}/rehearsals/new`, PLANNERS),
+    page(call, TEAM),
+    page(`${call}/change`, PLANNERS),
+    page(`${production}/pianists`, PLANNERS),
+    page(`${production}/call-sheets`, TEAM),
+    page(`${production}/call-sheets/${made.callDate}`, TEAM),
+    page(issue, TEAM),
+    page(`${production}/people`, TEAM),
+    file(`${api}/auditions/template`, PLANNERS),
+    file(`${api}/auditions/${id(day)}`, TEAM),
+    file(`${api}/callbacks`, TEAM),
+    file(`${api}/casting`, TABLE),
+    file(`${api}/calls/${id(call)}/clashes`, PLANNERS),
+    file(`${api}/call-sheets/${id(issue)}?format=xlsx`, TEAM),
+    file(`${api}/call-sheets/${id(issue)}?format=csv`, TEAM),
+    file(`${api}/call-sheets/${id(issue)}/acknowledgements`, PLANNERS),
+  ];
+}
+
+type Answer = { status: number; words: string; signIn: boolean };
+
+async function ask(page: Page, { path, file }: Address): Promise<Answer> {
+  if (file) {
+    const response = await page.request.get(path, { maxRedirects: 0 });
+    const { status } = { status: response.status() };
+    return { status, words: status === 200 ? "" : await response.text(), signIn: status === 401 };
+  }
+  const response = await page.goto(path, { waitUntil: "load" });
+  const heading = page.getByRole("heading", { level: 1 });
+  await heading.first().waitFor();
+  return {
+    status: response?.status() ?? 0,
+    words: await page.locator("body").innerText(),
+    signIn: new URL(page.url()).pathname === "/sign-in",
+  };
+}
+
+/**
+ * Asks for every address as one person, and returns in words whatever is not as it should be: refused to those who may,
+ * open to those who may not, or refused in words that still give something of the production away (`secrets`).
+ */
+export async function wrongAnswers(
+  page: Page,
+  asker: Asker,
+  addresses: Address[],
+  secrets: string[],
+): Promise<string[]> {
+  const wrong: string[] = [];
+  for (const address of addresses) {
+    const { status, words, signIn } = await ask(page, address);
+    const what = `${address.path} as ${asker}: ${String(status)}`;
+    if (address.may.includes(asker)) {
+      if (status !== 200 || signIn) wrong.push(`refused ${what}`);
+      continue;
+    }
+    const refused = asker === "nobody" ? signIn : status === 404;
+    if (!refused) wrong.push(`not refused as it should be ${what}`);
+    if (!address.file && asker !== "nobody" && !words.includes("There is no such page"))
+      wrong.push(`no plain refusal ${what}`);
+    const given = secrets.filter((secret) => words.includes(secret));
+    if (given.length > 0) wrong.push(`gives away ${given.join(", ")}: ${what}`);
+  }
+  return wrong;
+}
