@@ -36,13 +36,20 @@ export const signInWithPassword = definePublicAction(
   },
 );
 
-/** The link came to the address it is for, as a sign-in link would: accepting signs its owner in. */
+/**
+ * Accepts an invitation. The link came to the address it is for, so it signs in the login it makes; a login that was
+ * there before signs in its own way, because invitations live for weeks and get forwarded.
+ */
 export const acceptInvitation = definePublicAction(
   { input: acceptInvitationSchema },
   async ({ token, to }) => {
     await countTry(RATES.linkFromSource, sourceOf(await headers()));
-    const userId = await accept(token);
-    if ((await currentUserId()) !== userId) await signInAs(userId);
-    redirect(ownPath(to, AFTER_SIGN_IN));
+    const { userId, newLogin } = await accept(token);
+    const next = ownPath(to, AFTER_SIGN_IN);
+    if (newLogin) await signInAs(userId);
+    else if ((await currentUserId()) !== userId) {
+      redirect(`/sign-in?to=${encodeURIComponent(next)}`);
+    }
+    redirect(next);
   },
 );

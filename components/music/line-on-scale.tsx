@@ -6,6 +6,8 @@ export type LineOnScaleProps = PitchSpan & {
   tessitura?: PitchSpan | null;
   /** The pitches at the left and right end; share one over a column, so that lines compare. */
   scale: PitchSpan;
+  /** Fifths of the number's key, so that pitches are spelled as its score spells them. */
+  fifths?: number;
   className?: string;
 };
 
@@ -13,13 +15,21 @@ const HEIGHT = 12;
 const MIDDLE = HEIGHT / 2;
 
 /** One vocal line on a pitch scale that runs from left (low) to right (high). */
-export function LineOnScale({ low, high, tessitura, scale, className }: LineOnScaleProps) {
+export function LineOnScale({
+  low,
+  high,
+  tessitura,
+  scale,
+  fifths = 0,
+  className,
+}: LineOnScaleProps) {
   const unit = 4;
   const width = Math.max(1, scale.high - scale.low + 1) * unit;
   const left = (midi: number) => (midi - scale.low) * unit;
   const right = (midi: number) => (midi - scale.low + 1) * unit;
-  const words = `${pitchName(low)} to ${pitchName(high)}${
-    tessitura ? `, mostly ${pitchName(tessitura.low)} to ${pitchName(tessitura.high)}` : ""
+  const name = (midi: number) => pitchName(midi, { prefer: fifths });
+  const words = `${name(low)} to ${name(high)}${
+    tessitura ? `, mostly ${name(tessitura.low)} to ${name(tessitura.high)}` : ""
   }`;
   return (
     <svg

@@ -7,17 +7,6 @@ export function formatDuration(minutes: number): string {
   return rest === 0 ? `${String(hours)} h` : `${String(hours)} h ${String(rest).padStart(2, "0")}`;
 }
 
-const count = (n: number, word: string) => `${String(n)} ${word}${n === 1 ? "" : "s"}`;
-
-/** The same in full words: 125 → "2 hours 5 minutes". */
-export function spokenDuration(minutes: number): string {
-  const whole = Math.round(minutes);
-  const hours = Math.floor(whole / 60);
-  const rest = whole % 60;
-  if (hours === 0) return count(rest, "minute");
-  return rest === 0 ? count(hours, "hour") : `${count(hours, "hour")} ${count(rest, "minute")}`;
-}
-
 /** Minutes of a day as a clock shows them: 1110 → "18:30"; past midnight goes on from 00:00. */
 export function clock(minutesOfDay: number): string {
   const whole = ((Math.round(minutesOfDay) % 1440) + 1440) % 1440;

@@ -1,5 +1,3 @@
-import { formatDuration, spokenDuration } from "./format-duration";
-
 export type TimeTextProps = {
   /** The instant, as a Date or ISO text. */
   at: Date | string;
@@ -34,15 +32,5 @@ export function TimeText({
     <time dateTime={date.toISOString()} {...(className !== undefined && { className })}>
       {show === "both" ? `${write("day")}, ${write("time")}` : write(show)}
     </time>
-  );
-}
-
-/** Minutes as "1 h 05" or "45 min"; spoken in full words to screen readers. */
-export function DurationText({ minutes, className }: { minutes: number; className?: string }) {
-  return (
-    <span {...(className !== undefined && { className })}>
-      <span aria-hidden="true">{formatDuration(minutes)}</span>
-      <span className="sr-only">{spokenDuration(minutes)}</span>
-    </span>
   );
 }

@@ -48,7 +48,8 @@ async function deliverOne(): Promise<"sent" | "failed" | "nothing due"> {
         .set({
           tries,
           nextTryAt: sql`date_add(utc_timestamp(3), interval ${wait} second)`,
-          gaveUpAt: tries >= MAX_TRIES ? new Date() : null,
+          // A link that will not be sent any more does not stay behind either.
+          ...(tries >= MAX_TRIES ? { gaveUpAt: new Date(), data: {} } : {}),
           lastError: error instanceof Error ? error.message.slice(0, 500) : "unknown",
         })
         .where(eq(outbox.id, mail.id));

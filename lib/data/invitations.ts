@@ -1,5 +1,5 @@
 import "server-only";
-import { and, asc, desc, eq, gt, isNull } from "drizzle-orm";
+import { and, asc, desc, eq, gt, inArray, isNull } from "drizzle-orm";
 import type { SQL } from "drizzle-orm";
 import { db } from "@/db/client";
 import type { Db, Tx } from "@/db/client";
@@ -147,11 +147,17 @@ export async function showInvitation(secret: string): Promise<InvitationShown> {
   };
 }
 
+export type Accepted = {
+  userId: string;
+  /** Whether the address had no login before. Only then may the link itself sign its owner in. */
+  newLogin: boolean;
+};
+
 /**
- * Accepts an invitation, once: makes or finds the login of the address it was sent to, links the company's record to it
- * and returns the login's id. Throws when it was used, ran out, or the record belongs to another login.
+ * Accepts an invitation, once: makes or finds the login of the address it was sent to and links the company's record to
+ * it. Throws when it was used, ran out, or the record belongs to another login.
  */
-export async function acceptInvitation(secret: string): Promise<string> {
+export async function acceptInvitation(secret: string): Promise<Accepted> {
   return accept(await openInvitation(eq(invitations.tokenHash, hashToken(secret))));
 }
 
@@ -205,7 +211,7 @@ async function hasProvedAddress(actor: Actor): Promise<boolean> {
   return user?.emailVerified != null;
 }
 
-async function accept(row: OpenInvitation): Promise<string> {
+async function accept(row: OpenInvitation): Promise<Accepted> {
   try {
     return await inTransaction(async (tx) => {
       const [taken] = await tx
@@ -213,7 +219,8 @@ async function accept(row: OpenInvitation): Promise<string> {
         .set({ acceptedAt: new Date() })
         .where(and(eq(invitations.id, row.id), isNull(invitations.acceptedAt)));
       if (taken.affectedRows === 0) throw new AppError("refused", USED);
-      const userId = await loginOf(tx, row.email, row.personName);
+      const login = await loginOf(tx, row.email, row.personName);
+      const { userId } = login;
       if (row.personUserId !== null && row.personUserId !== userId) {
         throw new AppError(
           "refused",
@@ -226,7 +233,8 @@ async function accept(row: OpenInvitation): Promise<string> {
         .update(pianistSessions)
         .set({ bookeeId: userId })
         .where(eq(pianistSessions.personId, row.personId));
-      return userId;
+      await closeOtherInvitations(tx, row.personId);
+      return login;
     });
   } catch (error) {
     throw acceptError(error) ?? error;
@@ -234,7 +242,7 @@ async function accept(row: OpenInvitation): Promise<string> {
 }
 
 /** The login of an address that its owner has just proved, made if there is none. */
-async function loginOf(tx: Tx, email: string, name: string): Promise<string> {
+async function loginOf(tx: Tx, email: string, name: string): Promise<Accepted> {
   const [user] = await tx
     .select({ id: users.id, name: users.name })
     .from(users)
@@ -245,11 +253,23 @@ async function loginOf(tx: Tx, email: string, name: string): Promise<string> {
       .update(users)
       .set({ emailVerified: new Date(), name: user.name ?? name })
       .where(eq(users.id, user.id));
-    return user.id;
+    return { userId: user.id, newLogin: false };
   }
   const id = newId();
   await tx.insert(users).values({ id, email, name, emailVerified: new Date() });
-  return id;
+  return { userId: id, newLogin: true };
+}
+
+/** Every mail to someone who had not joined carried a link of its own: once one is used, the others are over. */
+async function closeOtherInvitations(tx: Tx, personId: string): Promise<void> {
+  const theirs = tx
+    .select({ id: positions.id })
+    .from(positions)
+    .where(eq(positions.personId, personId));
+  await tx
+    .update(invitations)
+    .set({ acceptedAt: new Date() })
+    .where(and(inArray(invitations.positionId, theirs), isNull(invitations.acceptedAt)));
 }
 
 function acceptError(error: unknown): AppError | null {

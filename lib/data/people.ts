@@ -13,6 +13,7 @@ import type { endPositionSchema, invitePersonSchema } from "@/lib/schemas/people
 import { recordAudit } from "./audit";
 import { companyFor, productionFor } from "./guard";
 import { sendInvitation } from "./invitations";
+import { countTry, RATES } from "./rate-limit";
 import { duplicateKey, inTransaction } from "./transaction";
 
 export type NewPerson = {
@@ -94,6 +95,7 @@ export async function invitePerson(
   const companyId = "companyId" in scope ? scope.companyId : scope.id;
   const companyName = "companyName" in scope ? scope.companyName : scope.name;
   if (companyId !== input.companyId) throw new AppError("not-found");
+  await countTry(RATES.invitesOfUser, actor.userId);
   try {
     return await inTransaction(async (tx) => {
       const person = await findOrCreatePerson(tx, companyId, input);

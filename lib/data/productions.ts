@@ -10,10 +10,12 @@ import type { Actor, PositionKind } from "@/lib/permissions/types";
 import type { changeProductionSchema, createCompanySchema, createProductionSchema } from "@/lib/schemas/productions";
 import { recordAudit } from "./audit";
 import { companyFor, personIn, productionFor } from "./guard";
+import { countTry, RATES } from "./rate-limit";
 import { inTransaction } from "./transaction";
 
 /** A new company, with the actor as its admin and as a music director in it. Returns its id. */
 export async function createCompany(actor: Actor, input: z.output<typeof createCompanySchema>): Promise<string> {
+  await countTry(RATES.companiesOfUser, actor.userId);
   return inTransaction(async (tx) => {
     const companyId = newId();
     const personId = newId();

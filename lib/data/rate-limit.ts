@@ -14,6 +14,10 @@ export const RATES = {
   passwordOfAccount: { name: "password-of", limit: 8, windowSeconds: 900 },
   passwordFromSource: { name: "password-from", limit: 40, windowSeconds: 900 },
   apiOfToken: { name: "api", limit: 600, windowSeconds: 60 },
+  /** Mail to addresses that a person types in: nobody sends from our domain to strangers without end. */
+  invitesOfUser: { name: "invites-of", limit: 120, windowSeconds: 3600 },
+  bulkInvitesOfUser: { name: "bulk-invites-of", limit: 30, windowSeconds: 3600 },
+  companiesOfUser: { name: "companies-of", limit: 10, windowSeconds: 86_400 },
   linkFromSource: { name: "link-from", limit: 120, windowSeconds: 600 },
 } as const satisfies Record<string, RateRule>;
 

@@ -222,6 +222,8 @@ export const inviteSingersSchema = z.object({
 
 export const DOOR_ACTS = ["here", "not-here", "in", "out"] as const;
 
+export type DoorAct = (typeof DOOR_ACTS)[number];
+
 export const doorActSchema = z.object({
   token: z.string().min(1).max(200),
   signUpId: idField,

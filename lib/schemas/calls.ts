@@ -79,7 +79,6 @@ export const checkCallSchema = z.object({
 });
 
 export type CallDraft = z.output<typeof createCallSchema>;
-export type CallForm = z.input<typeof createCallSchema>;
 
 const seenCall = { productionId: idField, callId: idField, version: z.coerce.number().int() };
 

@@ -5,6 +5,7 @@ import { joinCompany } from "@/app/(me)/actions";
 import { db } from "@/db/client";
 import { newId } from "@/db/columns";
 import { invitations, people, positions, sessions, users } from "@/db/schema";
+import { hashToken, newSecret } from "@/lib/auth/hash-token";
 import { sessionCookieName } from "@/lib/auth/session-cookie";
 import { listOwnInvitations, makeInvitationLink, showInvitation } from "@/lib/data/invitations";
 import type { PositionKind } from "@/lib/permissions/types";
@@ -147,6 +148,39 @@ describe("an invitation", () => {
     const [user] = await db.select({ id: users.id }).from(users).where(eq(users.email, email));
     expect(await loginOfCookie()).toBe(user?.id);
     expect((await actorOf(md.userId)).positions.map((p) => p.kind)).toEqual(["music_director"]);
+  });
+
+  test("a forwarded link signs nobody in as a login that was there before: it joins, and asks to sign in", async () => {
+    const { otherActor } = world.people;
+    const { token } = await invite("Dele Fashanu", {
+      email: otherActor.email,
+      companyId: world.otherCompanyId,
+      productionId: world.otherProductionId,
+    });
+    expect(await redirectOf(acceptInvitation({ token, to: "/me/range" }))).toBe(
+      `/sign-in?to=${encodeURIComponent("/me/range")}`,
+    );
+    expect(cookieJar().size).toBe(0);
+    expect(await db.$count(sessions)).toBe(0);
+    expect((await actorOf(otherActor.userId)).people).toHaveLength(2);
+  });
+
+  test("closes the person's other open links", async () => {
+    const first = await invite("Sunniva Aal");
+    const secret = newSecret();
+    await db.insert(invitations).values({
+      positionId: first.positionId,
+      email: first.email,
+      tokenHash: hashToken(secret),
+      expiresAt: new Date(Date.now() + 86_400_000),
+    });
+    await redirectOf(acceptInvitation({ token: first.token, to: "" }));
+    cookieJar().clear();
+    expect(await acceptInvitation({ token: secret, to: "" })).toMatchObject({
+      ok: false,
+      error: { code: "refused" },
+    });
+    expect(cookieJar().size).toBe(0);
   });
 
   test("accepted by its own login that is signed in keeps the session it has", async () => {

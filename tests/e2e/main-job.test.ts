@@ -83,7 +83,7 @@ describe("one production, from the score to the call sheet", () => {
     }
     await reading.takeDown(parts[0]!.name);
     expect(await reading.range(parts[0]!.name)).toContain("G♯3 to B4");
-    expect(await reading.changes()).toContain("Adds 4 lines read from the score.");
+    expect((await reading.changes()).join()).toContain("Adds 4 lines read from the score.");
     await reading.putIn();
     expect(await score.roles()).toEqual(parts.map(({ name }) => name));
     for (const [index, { name, low, high }] of parts.entries()) {
@@ -413,7 +413,7 @@ describe("one production, from the score to the call sheet", () => {
     "8 the accompanist sees only their own sessions, in order, with room, people and music",
     async () => {
       const desk = await stage.desk("Osric Dlamini");
-      await acceptInvitation(desk, await mailbox.link(PEOPLE.osric, new RegExp(TITLE)));
+      await acceptInvitation(desk, await mailbox.link(PEOPLE.osric, new RegExp(TITLE)), PEOPLE.osric);
       const sessions = await sessionsOf(desk);
       const days = sessions.map((words) => /^\w+ \d+ \w+ \d\d:\d\d/.exec(words)?.[0] ?? "");
       expect(days).toEqual(days.toSorted((a, b) => whenOf(a) - whenOf(b)));

@@ -5,11 +5,11 @@ import { SeasonStaves } from "@/components/schedule/season-staves";
 import { Button } from "@/components/ui/button";
 import { Chip } from "@/components/ui/chip";
 import { pageActor } from "@/lib/auth/get-actor";
-import { listCompaniesToCreateIn } from "@/lib/data/productions";
+import { listCompanies, listCompaniesToCreateIn } from "@/lib/data/productions";
 import { readSeason } from "@/lib/data/season";
-import { listCompanies } from "@/lib/data/productions";
-import { localDay } from "@/lib/format-dates";
+import { dayAndClock, localDay } from "@/lib/format-dates";
 import { CastSoFar } from "./_components/cast-so-far";
+import { asText, clashInWords } from "./_components/clash-words";
 import { count, findNeeds } from "./_components/needs";
 import { NeedsYou } from "./_components/needs-you";
 import { PrintButton } from "./_components/print-button";
@@ -48,7 +48,7 @@ export default async function SeasonPage({ searchParams }: PageProps<"/season">)
   const staves = toStaves(ahead, now);
   const groups = new Set(season.productions.map((p) => p.companyId)).size;
   return (
-    <>
+    <div className="print:[page:wide]">
       <PageTitle
         title="Your season"
         sub={`${count(season.productions.length, "production")}, ${groups === 1 ? "one company" : `${String(groups)} companies`}. Each stave is a production, each bar a week; the five lines run from morning (top) to late evening.`}
@@ -94,6 +94,14 @@ export default async function SeasonPage({ searchParams }: PageProps<"/season">)
             today={today}
             label="Your season"
           />
+          {/* On paper a circle has to say by itself what clashes. */}
+          <ul className="mt-4 hidden text-sm print:block">
+            {ahead.clashes.map((clash) => (
+              <li key={clash.id}>
+                {dayAndClock(clash.from, clash.zone)}: {asText(clashInWords(clash, ahead))}
+              </li>
+            ))}
+          </ul>
         </div>
         <div className="grid gap-x-10 gap-y-10 md:grid-cols-2 xl:grid-cols-[1.25fr_1fr_1fr] print:hidden">
           <NeedsYou needs={findNeeds(season, now)} />
@@ -101,6 +109,6 @@ export default async function SeasonPage({ searchParams }: PageProps<"/season">)
           <CastSoFar season={season} />
         </div>
       </div>
-    </>
+    </div>
   );
 }

@@ -12,6 +12,7 @@ import { writeMessage } from "@/lib/services/mail/templates";
 import { recordAudit } from "../audit";
 import { productionFor } from "../guard";
 import { queueMail } from "../outbox";
+import { countTry, RATES } from "../rate-limit";
 import { inTransaction } from "../transaction";
 import { answerLink, lockSignUps } from "./place";
 import { dayOf, lockDay, placeInWords, slotInWords } from "./scope";
@@ -98,6 +99,7 @@ export async function inviteSingers(
   now = new Date(),
 ): Promise<number> {
   const scope = await productionFor(actor, input.productionId, "auditions:plan");
+  await countTry(RATES.bulkInvitesOfUser, actor.userId);
   return inTransaction(async (tx) => {
     // The day is locked while its slots are read, so that nobody is told a time they were just moved from, and two people
     // who invite at once send one message.

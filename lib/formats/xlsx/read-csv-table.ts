@@ -1,7 +1,7 @@
 import { Readable } from "node:stream";
 import ExcelJS from "exceljs";
 import { unguardCell } from "./guard-cell";
-import type { TableLine, TablesResult } from "./read-table";
+import type { TableLine, TablesResult } from "./table-types";
 
 /** Well above what is taken in, so that empty lines between rows do no harm. */
 const MAX_LINES = 10_000;

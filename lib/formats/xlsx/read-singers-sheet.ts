@@ -1,6 +1,7 @@
 import { readSingerRow } from "./read-singer-row";
-import { readTables, type TableLine } from "./read-table";
+import { readTables } from "./read-table";
 import { meaningOfHeading, type ColumnMeaning } from "./singer-headings";
+import type { TableLine } from "./table-types";
 import type { SheetProblem, SingerRow, SingersSheet } from "./types";
 
 const MAX_ROWS = 2000;

@@ -1,15 +1,7 @@
 import { readCsvTable } from "./read-csv-table";
 import { readXlsxTables } from "./read-xlsx-tables";
+import type { TablesResult } from "./table-types";
 import type { SheetProblem } from "./types";
-
-/** A row of text cells; `line` is the row number that a spreadsheet shows, from 1. */
-export interface TableLine {
-  line: number;
-  cells: string[];
-}
-
-export type TablesResult =
-  { ok: true; tables: TableLine[][] } | { ok: false; problem: SheetProblem };
 
 const MAX_BYTES = 2 * 1024 * 1024;
 const TEXT_NAMES = /\.(csv|tsv|tab|txt)$/i;

@@ -1,6 +1,6 @@
 import ExcelJS from "exceljs";
 import { strFromU8, strToU8, unzipSync, zipSync, type Unzipped } from "fflate";
-import type { TableLine, TablesResult } from "./read-table";
+import type { TableLine, TablesResult } from "./table-types";
 import type { SheetProblem } from "./types";
 
 const MAX_UNPACKED_BYTES = 8 * 1024 * 1024;

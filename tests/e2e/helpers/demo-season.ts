@@ -57,7 +57,7 @@ export type Sessions = Record<Viewer, string | null>;
 type Row = Record<string, unknown>;
 
 const asUuid = (hex: string): string =>
-  hex.replace(/^(.{8})(.{4})(.{4})(.{4})(.{12})$/, "$1-$2-$3-$4-$5");
+  hex.toLowerCase().replace(/^(.{8})(.{4})(.{4})(.{4})(.{12})$/, "$1-$2-$3-$4-$5");
 const asBytes = (id: string): Buffer => Buffer.from(id.replaceAll("-", ""), "hex");
 const newSecret = (): string => randomBytes(32).toString("base64url");
 

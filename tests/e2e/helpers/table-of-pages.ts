@@ -223,7 +223,7 @@ export const PAGES: readonly PageRow[] = [
     eyes: "stageManager",
   },
   {
-    file: `${PRODUCTION}/auditions/[dayId]`,
+    file: `${PRODUCTION}/auditions/[dayId]/(day)`,
     path: ({ tidewatcher, auditionDay }) => `/productions/${tidewatcher}/auditions/${auditionDay}`,
     may: TABLE_OF_TIDEWATCHER,
     eyes: "md",

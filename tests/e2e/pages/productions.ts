@@ -40,6 +40,6 @@ export async function invite(
   await told(page, `The invitation to ${name} is on its way.`);
   await page
     .getByRole("region", { name: new RegExp(`^${position}`) })
-    .getByText(name)
+    .getByText(name, { exact: true })
     .waitFor();
 }

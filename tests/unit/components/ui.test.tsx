@@ -6,7 +6,7 @@ import { keyInUse } from "@/components/layout/keys-nav";
 import { readMode } from "@/components/layout/mode";
 import { Button } from "@/components/ui/button";
 import { Field, FieldGroup } from "@/components/ui/field";
-import { clock, formatDuration, spokenDuration } from "@/components/ui/format-duration";
+import { clock, formatDuration } from "@/components/ui/format-duration";
 import { Input } from "@/components/ui/input";
 import { RadioGroup } from "@/components/ui/radio-group";
 import { TimeText } from "@/components/ui/time-text";
@@ -125,14 +125,13 @@ describe("an action's messages", () => {
 
 describe("times and lengths", () => {
   test.each([
-    [45, "45 min", "45 minutes"],
-    [60, "1 h", "1 hour"],
-    [125, "2 h 05", "2 hours 5 minutes"],
-    [0, "0 min", "0 minutes"],
-    [61, "1 h 01", "1 hour 1 minute"],
-  ])("%i minutes", (minutes, written, spoken) => {
+    [45, "45 min"],
+    [60, "1 h"],
+    [125, "2 h 05"],
+    [0, "0 min"],
+    [61, "1 h 01"],
+  ])("%i minutes", (minutes, written) => {
     expect(formatDuration(minutes)).toBe(written);
-    expect(spokenDuration(minutes)).toBe(spoken);
   });
 
   test("a clock past midnight goes on from 00:00", () => {

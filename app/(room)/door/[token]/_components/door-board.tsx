@@ -7,12 +7,10 @@ import { showToast } from "@/components/ui/toast-store";
 import type { DoorItem, DoorView } from "@/lib/auditions/door-view";
 import { doorQuery } from "@/lib/client/auditions";
 import { clock } from "@/lib/format-dates";
-import type { DOOR_ACTS } from "@/lib/schemas/auditions";
+import type { DoorAct } from "@/lib/schemas/auditions";
 import { actAtDoor } from "../actions";
 import { DoorFrame } from "./door-frame";
 import { DoorRoom } from "./door-room";
-
-export type DoorAct = (typeof DOOR_ACTS)[number];
 
 const NEXT_STATE: Record<DoorAct, DoorItem["state"]> = {
   here: "here",

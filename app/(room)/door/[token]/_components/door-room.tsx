@@ -3,7 +3,7 @@ import { Chip } from "@/components/ui/chip";
 import type { DoorItem, DoorView } from "@/lib/auditions/door-view";
 import { formatDuration } from "@/components/ui/format-duration";
 import { clock } from "@/lib/format-dates";
-import type { DoorAct } from "./door-board";
+import type { DoorAct } from "@/lib/schemas/auditions";
 
 type OpenDoor = Extract<DoorView, { open: true }>;
 type Props = {

@@ -13,21 +13,8 @@ import type { DayChoices } from "@/lib/data/auditions/days";
 import { changeDaySchema, createDaySchema } from "@/lib/schemas/auditions";
 import { changeDay, createDay } from "../actions";
 import { AgreeToLoss } from "./agree-to-loss";
+import type { DayFields } from "./day-fields";
 import { DayPreview } from "./day-preview";
-
-/** What the fields hold: text as typed, and the rooms in use with their times. */
-export type DayFields = {
-  productionId: string;
-  localDate: string;
-  slotMinutes: string;
-  restAfterMinutes: string;
-  restMinutes: string;
-  lunchMinutes: string;
-  lunchFrom: string;
-  lunchTo: string;
-  hold: boolean;
-  rooms: { roomId: string; opens: string; closes: string }[];
-};
 
 type Existing = DayFields & { dayId: string; version: number; mayLose: string[] };
 

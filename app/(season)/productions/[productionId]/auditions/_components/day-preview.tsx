@@ -1,7 +1,7 @@
 import { layOutDay } from "@/lib/auditions/lay-out-day";
 import type { DayChoices } from "@/lib/data/auditions/days";
 import { clockSpan } from "@/lib/format-dates";
-import type { DayFields } from "./day-form";
+import type { DayFields } from "./day-fields";
 
 const whole = (text: string): number => (text.trim() === "" ? Number.NaN : Number(text));
 

@@ -71,7 +71,8 @@ export function NumberColumn({ productionId, view, number }: Props) {
                   {role.name}
                 </Link>
                 <span>
-                  {pitchName(drawn.low)}–{pitchName(drawn.high)}
+                  {pitchName(drawn.low, { prefer: number.keyFifths ?? 0 })}–
+                  {pitchName(drawn.high, { prefer: number.keyFifths ?? 0 })}
                 </span>
               </li>
             ))}

@@ -61,9 +61,10 @@ export function ScoreList({ productionId, view }: { productionId: string; view: 
                           className="grid min-h-11 grid-cols-[minmax(0,1fr)_6rem_auto] items-center gap-3 text-sm text-ink"
                         >
                           <span className="truncate">{role.name}</span>
-                          <LineOnScale {...drawn} scale={scale} />
+                          <LineOnScale {...drawn} scale={scale} fifths={number.keyFifths ?? 0} />
                           <span aria-hidden="true" className="min-w-18 text-right text-ink-2">
-                            {pitchName(drawn.low)}–{pitchName(drawn.high)}
+                            {pitchName(drawn.low, { prefer: number.keyFifths ?? 0 })}–
+                            {pitchName(drawn.high, { prefer: number.keyFifths ?? 0 })}
                           </span>
                         </Link>
                       </li>

@@ -187,7 +187,12 @@ function LineCell({
         <span className="sr-only">
           {role.name} in {number.title}:
         </span>
-        <LineOnScale {...drawn} scale={scale} className="w-20! min-w-0!" />
+        <LineOnScale
+          {...drawn}
+          scale={scale}
+          fifths={number.keyFifths ?? 0}
+          className="w-20! min-w-0!"
+        />
       </Link>
     );
   }

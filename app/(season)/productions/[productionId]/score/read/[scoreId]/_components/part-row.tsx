@@ -13,7 +13,7 @@ import type { PitchSpan } from "@/lib/music/types";
 import { ROLE_KIND_NAMES } from "@/lib/score/review-types";
 import type { ReviewPart, ReviewRole } from "@/lib/score/review-types";
 import { shiftOctaves } from "@/lib/score/shift-octaves";
-import type { ReviewValues } from "./review-form";
+import type { ReviewValues } from "./review-values";
 
 type Props = {
   form: UseFormReturn<ReviewValues>;
@@ -47,7 +47,7 @@ export function PartRow({ form, index, part, roles, scale, fifths }: Props) {
                   `, mostly ${pitchName(line.tessitura.low, { prefer: fifths })} to ${pitchName(line.tessitura.high, { prefer: fifths })}`}
                 {!part.vocal && ". No words under its notes and no voice’s name"}.
               </p>
-              <LineOnScale {...line} scale={scale} className="mt-2" />
+              <LineOnScale {...line} scale={scale} fifths={fifths} className="mt-2" />
             </>
           ) : (
             <p className="text-sm text-ink-2">No sung note with a pitch.</p>

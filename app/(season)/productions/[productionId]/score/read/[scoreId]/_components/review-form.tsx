@@ -16,20 +16,11 @@ import type { PartPlan, ScoreReview } from "@/lib/score/review-types";
 import { scaleOf } from "@/lib/score/score-view";
 import { suggestPart } from "@/lib/score/suggest-part";
 import { NumberFields } from "../../../_components/number-fields";
-import type { NumberFieldValues } from "../../../_components/number-fields";
 import { scoreHref } from "../../../_components/selection";
 import { confirmReading } from "../../../actions";
 import { PartRow } from "./part-row";
+import type { ReviewValues } from "./review-values";
 import { WhatChanges } from "./what-changes";
-
-/** What the form holds: text as typed, and a plan for each part. */
-export type ReviewValues = NumberFieldValues & {
-  productionId: string;
-  scoreId: string;
-  numberId: string;
-  version: number | null;
-  parts: PartPlan[];
-};
 
 function plansFor(review: ScoreReview, numberId: string): PartPlan[] {
   const number = review.numbers.find((each) => each.id === numberId) ?? null;

@@ -5,7 +5,7 @@ import type { Control } from "react-hook-form";
 import { importChanges } from "@/lib/score/import-changes";
 import type { ImportChange } from "@/lib/score/import-changes";
 import type { ScoreReview } from "@/lib/score/review-types";
-import type { ReviewValues } from "./review-form";
+import type { ReviewValues } from "./review-values";
 
 const SIGNS: Record<ImportChange["kind"], string> = {
   adds: "+",

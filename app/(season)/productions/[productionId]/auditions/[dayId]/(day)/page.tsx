@@ -5,7 +5,7 @@ import { pageActor } from "@/lib/auth/get-actor";
 import { readDay } from "@/lib/data/auditions/day-view";
 import { listAccompanists } from "@/lib/data/auditions/pianists";
 import { productionFor } from "@/lib/data/guard";
-import { DayBoard } from "./_components/day-board";
+import { DayBoard } from "../_components/day-board";
 
 export const metadata: Metadata = { title: "Audition day" };
 
