@@ -7,6 +7,7 @@ export default function PageError({ retry }: { retry: () => void }) {
   return (
     <main className="mx-auto w-full max-w-3xl px-4 py-12 md:px-8">
       <EmptyState
+        level={1}
         title="This page could not be shown"
         action={
           <Button kind="primary" onClick={() => retry()}>

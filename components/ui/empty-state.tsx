@@ -6,13 +6,13 @@ export type EmptyStateProps = {
   children: ReactNode;
   /** The first step, as a button or a link. */
   action?: ReactNode;
-  /** 2 unless the part already stands under a heading of that level. */
-  level?: 2 | 3;
+  /** 1 where it is all there is on the page, 3 where the part already stands under a second heading; else 2. */
+  level?: 1 | 2 | 3;
 };
 
 /** An empty place says what belongs there and offers the first step. */
 export function EmptyState({ title, children, action, level = 2 }: EmptyStateProps) {
-  const Heading = level === 2 ? "h2" : "h3";
+  const Heading = `h${level}` as const;
   return (
     <div className="flex flex-col items-start gap-3 border-y border-rule px-1 py-8">
       <Heading className="text-2xl">{title}</Heading>

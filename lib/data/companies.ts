@@ -10,7 +10,7 @@ import type { SeasonProduction } from "./season/types";
 /** What the actor may open in a company. */
 export type CompanyMay = { create: boolean; members: boolean; rooms: boolean; trail: boolean };
 
-export type CompanyShown = {
+type CompanyShown = {
   id: string;
   name: string;
   zone: string;

@@ -57,7 +57,9 @@ describe("clashes while a call is being made", () => {
       startsAt: new Date("2027-04-06T17:00:00Z"),
       endsAt: new Date("2027-04-06T18:00:00Z"),
     };
-    await db.insert(t.callbackRounds).values({ ...round, productionId: world.siblingProductionId });
+    await db
+      .insert(t.callbackRounds)
+      .values({ ...round, productionId: world.siblingProductionId, issue: 1 });
     // Runa Oake directs the music of the sibling production, too.
     await db.insert(t.positions).values({
       companyId: world.companyId,
@@ -69,30 +71,64 @@ describe("clashes while a call is being made", () => {
     expect(clashes.map((clash) => clash.words)).toEqual([
       "Runa Oake hears the callbacks of Marrow Street, 18:00–19:00: 30 min of this call",
     ]);
+    // Nobody has been told of the round: the time counts, what it is does not show.
+    await db.update(t.callbackRounds).set({ issue: 0 });
+    const untold = await checked({ leaderId: world.people.md.personId });
+    expect(untold.clashes.map((clash) => clash.words)).toEqual([
+      "Runa Oake is engaged, 18:00–19:00: 30 min of this call",
+    ]);
     await db.delete(t.callbackRounds);
     const there = newId();
-    await db
-      .insert(t.people)
-      .values({
-        id: there,
-        companyId: world.otherCompanyId,
-        userId: world.people.md.userId,
-        name: "Runa Oake",
-      });
-    await db
-      .insert(t.positions)
-      .values({
-        companyId: world.otherCompanyId,
-        personId: there,
-        productionId: world.otherProductionId,
-        kind: "music_director",
-      });
+    await db.insert(t.people).values({
+      id: there,
+      companyId: world.otherCompanyId,
+      userId: world.people.md.userId,
+      name: "Runa Oake",
+    });
+    await db.insert(t.positions).values({
+      companyId: world.otherCompanyId,
+      personId: there,
+      productionId: world.otherProductionId,
+      kind: "music_director",
+    });
     await db.insert(t.callbackRounds).values({ ...round, productionId: world.otherProductionId });
     const abroad = await checked({ leaderId: world.people.md.personId });
     expect(abroad.clashes.map((clash) => clash.words)).toEqual([
       "Runa Oake is engaged, 18:00–19:00: 30 min of this call",
     ]);
     await db.delete(t.callbackRounds);
+  });
+
+  test("a day of auditions in two rooms, one after the other, is heard from the first to the last", async () => {
+    const { siblingProductionId: productionId, people } = world;
+    await db.insert(t.positions).values({
+      companyId: world.companyId,
+      personId: people.md.personId,
+      productionId,
+      kind: "assistant_md",
+    });
+    const dayId = newId();
+    await db.insert(t.auditionDays).values({
+      id: dayId,
+      productionId,
+      localDate: "2027-04-06",
+      zone: "Europe/London",
+      slotMinutes: 10,
+    });
+    const room = (roomId: string, from: string, to: string) => ({
+      dayId,
+      roomId,
+      opensAt: new Date(`2027-04-06T${from}:00Z`),
+      closesAt: new Date(`2027-04-06T${to}:00Z`),
+    });
+    await db
+      .insert(t.auditionRooms)
+      .values([room(world.roomId, "09:00", "11:00"), room(world.secondRoomId, "16:00", "18:00")]);
+    const { clashes } = await checked({ leaderId: people.md.personId });
+    expect(clashes.map((clash) => clash.words)).toEqual([
+      "Runa Oake hears the auditions of Marrow Street, 10:00–19:00: 30 min of this call",
+    ]);
+    await db.delete(t.auditionDays);
   });
 
   test("a conflict: who, what, by how many minutes, and the blocks that could move", async () => {

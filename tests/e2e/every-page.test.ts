@@ -216,15 +216,36 @@ describe("how a page looks, in both modes, wide and narrow", () => {
     expect(await lookAtPage(context, { url, status: 200 })).toEqual([]);
   });
 
-  test("a page that is not there", async () => {
-    await lookAs("nobody");
-    const url = new URL("/no-such-page", base).href;
-    expect(await lookAtPage(context, { url, status: 404 })).toEqual([]);
-  });
+  const refused: { what: string; path: (from: Places) => string; eyes: Viewer }[] = [
+    { what: "a page that is not there", path: () => "/no-such-page", eyes: "nobody" },
+    { what: "a link that is not there", path: () => "/door/no-such-link", eyes: "nobody" },
+    { what: "an invitation that is not there", path: () => "/invitation/none", eyes: "nobody" },
+    { what: "a message that is not there", path: () => "/mailbox/none", eyes: "nobody" },
+    {
+      what: "a sheet not about them",
+      path: ({ issue }) => `/me/call-sheets/${issue}`,
+      eyes: "imke",
+    },
+    {
+      what: "a production not theirs",
+      path: ({ candlemas }) => `/productions/${candlemas}`,
+      eyes: "admin",
+    },
+    {
+      what: "a call that is not there",
+      path: ({ marrow }) => `/productions/${marrow}/rehearsals/none`,
+      eyes: "md",
+    },
+    {
+      what: "a part of a company not theirs",
+      path: ({ company }) => `/companies/${company}/people`,
+      eyes: "director",
+    },
+  ];
 
-  test("a production that is not theirs", async () => {
-    await lookAs("admin");
-    const url = new URL(`/productions/${places.candlemas}`, base).href;
+  test.for(refused)("$what", async ({ path: address, eyes }) => {
+    await lookAs(eyes);
+    const url = new URL(address(places), base).href;
     expect(await lookAtPage(context, { url, status: 404 })).toEqual([]);
   });
 });

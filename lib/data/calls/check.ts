@@ -6,13 +6,13 @@ import type { CallPlan, ClashInWords, PlannedBlock } from "@/lib/calls/types";
 import { describeClashes } from "@/lib/calls/describe-clashes";
 import { waitingMinutes } from "@/lib/calls/waiting-minutes";
 import { productionFor } from "@/lib/data/guard";
-import type { ProductionScope } from "@/lib/data/guard";
 import { AppError } from "@/lib/errors";
 import { clock, localDay, longDay } from "@/lib/format-dates";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import type { CallDraft } from "@/lib/schemas/calls";
 import { readFacts, startsWithin } from "./facts";
+import { hiddenCast, withoutCast } from "./hidden";
 import { planCall } from "./needed";
 import type { ScoreAndCast } from "./needed";
 
@@ -66,9 +66,16 @@ export async function checkCall(
       .where(and(eq(calls.id, draft.callId), eq(calls.productionId, scope.id)));
     if (!own) throw new AppError("not-found");
   }
-  const { plan, score, note } = await planCall(scope, draft, draft.callId);
-  const facts = await readFacts(scope, [plan]);
-  const castHidden = !seesCast(actor, scope);
+  const hidden = await hiddenCast(actor, scope, draft.callId);
+  const castHidden = hidden !== null;
+  const planned = await planCall(scope, draft, draft.callId, hidden);
+  const { score, note } = planned;
+  const plan = hidden ? withoutCast(planned.plan, hidden.standing) : planned.plan;
+  const facts = await readFacts(scope, [plan], { castHidden });
+  const maySeeReasons = can(actor, "conflicts:read", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+  });
   const covers = castHidden ? [] : readCovers(score, plan);
   const names = await namesOf([...facts.names.keys(), ...covers.map(({ personId }) => personId)]);
   const local = (at: Date): string => clock(at, scope.zone);
@@ -82,52 +89,30 @@ export async function checkCall(
       key: block.key,
       from: local(block.from),
       to: local(block.to),
-      called: shownPeople(block, names, castHidden),
-      uncastRoles: castHidden ? [] : block.uncastRoles,
+      called: shownPeople(block, names, maySeeReasons),
+      uncastRoles: block.uncastRoles,
     })),
     covers: covers.map((cover) => ({ ...cover, name: names.get(cover.personId) ?? "" })),
-    clashes: describeClashes(plan, facts, startsWithin(plan)).filter(
-      (clash) => !castHidden || shownWithoutCast(plan, clash),
-    ),
+    clashes: describeClashes(plan, facts, startsWithin(plan)),
     waiting: castHidden ? 0 : waitingMinutes(plan.blocks),
     castHidden,
   };
 }
 
-/** Whether the reader may know who is cast: the stage manager only once the list is out. */
-export function seesCast(actor: Actor, scope: ProductionScope): boolean {
-  return can(actor, "casting:see", {
-    companyId: scope.companyId,
-    productionId: scope.id,
-    castPublished: scope.castPublished,
-  });
-}
-
-/** A clash of somebody whom the score needs would tell who is cast. */
-export function shownWithoutCast(plan: CallPlan, clash: ClashInWords): boolean {
-  const { personId } = clash;
-  if (personId === null || personId === plan.leaderId || personId === plan.pianistId) return true;
-  return !plan.blocks.some((block) =>
-    block.called.some((person) => person.personId === personId && person.source === "score"),
-  );
-}
-
-/** The people of a block by name; without those of the score for a reader who may not see the casting. */
+/** The people of a block by name. Why somebody is let off or called extra is for those who may read conflicts. */
 export function shownPeople(
   block: PlannedBlock,
   names: Map<string, string>,
-  castHidden: boolean,
+  maySeeReasons: boolean,
 ): CheckedPerson[] {
-  return block.called
-    .filter((person) => !castHidden || person.source === "hand")
-    .map(({ personId, roleNames, source, reason, excused }) => ({
-      personId,
-      name: names.get(personId) ?? "",
-      roles: roleNames,
-      source,
-      reason,
-      excused,
-    }));
+  return block.called.map(({ personId, roleNames, source, reason, excused }) => ({
+    personId,
+    name: names.get(personId) ?? "",
+    roles: roleNames,
+    source,
+    reason: maySeeReasons ? reason : null,
+    excused,
+  }));
 }
 
 function clockNote(note: "skipped" | "repeated" | null, starts: string): string | null {

@@ -24,27 +24,40 @@ import { groupBy } from "@/lib/group-by";
 import type { Interval } from "@/lib/schedule/types";
 import { hearingElsewhere } from "./hearing";
 
-type Who = { people: Map<string, string>; companyId: string; productionId: string };
+type Who = {
+  people: Map<string, string>;
+  companyId: string;
+  productionId: string;
+  /** The reader may not see who is cast. */
+  castHidden: boolean;
+};
 
 /**
  * What these people do elsewhere in a time, in every company that has a record of them: calls they are called to, lead or
  * play for, audition rooms they play in, auditions and callbacks they sing in, and those they hear as music directors. Of their own production drafts count
- * too. What another company does is no more than "is engaged"; so is singing for another production.
+ * too, but with `castHidden` not whom the score calls in them. What another company does is no more than "is engaged"; so is
+ * singing for another production.
  */
 export async function readEngagements(
   scope: ProductionScope,
   keys: Map<string, string>,
   window: Interval,
+  castHidden: boolean,
 ): Promise<Engagement[]> {
   const ids = await recordsOf(keys);
   if (ids.size === 0) return [];
-  const who: Who = { people: ids, companyId: scope.companyId, productionId: scope.id };
+  const who: Who = {
+    people: ids,
+    companyId: scope.companyId,
+    productionId: scope.id,
+    castHidden,
+  };
   const found = await Promise.all([
     calledElsewhere(who, window),
     leadingElsewhere(who, window),
     playingElsewhere(who, window),
     singingElsewhere(who, window),
-    hearingElsewhere(ids, scope.companyId, window),
+    hearingElsewhere(ids, scope, window),
   ]);
   return found.flat().map((engagement, index) => ({ ...engagement, id: `e${index}` }));
 }
@@ -119,6 +132,7 @@ async function calledElsewhere(who: Who, window: Interval): Promise<Unnumbered[]
         inArray(called.personId, [...who.people.keys()]),
         eq(called.excused, false),
         counts(who, window),
+        who.castHidden ? or(eq(calls.state, "published"), eq(called.source, "hand")) : undefined,
       ),
     );
   const times = await timesOfBlocks([...new Set(rows.map((row) => row.callId))]);

@@ -17,11 +17,13 @@ const LATEST = "23:00";
 
 /**
  * Everything these calls could clash with: the conflicts and engagements of everyone in them, the company's rooms and
- * who holds them, ways between venues, and who else could play. Asks no permission: the caller has.
+ * who holds them, ways between venues, and who else could play. With `castHidden`, whom the score calls in this
+ * production's drafts is not counted. Asks no permission: the caller has.
  */
 export async function readFacts(
   scope: ProductionScope,
   plans: readonly CallPlan[],
+  { castHidden = false }: { castHidden?: boolean } = {},
 ): Promise<CallFacts> {
   const window = {
     from: new Date(Math.min(...plans.map((plan) => plan.from.getTime())) - DAY),
@@ -47,7 +49,7 @@ export async function readFacts(
   const keys = new Map(records.map((person) => [person.id, person.userId ?? person.id]));
   const [saidNo, engagements, bookings, places, travel] = await Promise.all([
     ids.length === 0 ? [] : readConflicts(ids, window),
-    readEngagements(scope, keys, window),
+    readEngagements(scope, keys, window, castHidden),
     readRoomHolders(scope.companyId, window),
     readRooms(scope.companyId),
     readTravel(scope.companyId),

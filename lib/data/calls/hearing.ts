@@ -10,15 +10,18 @@ import {
   rooms,
 } from "@/db/schema";
 import type { Engagement } from "@/lib/calls/types";
+import type { ProductionScope } from "@/lib/data/guard";
 import type { Interval } from "@/lib/schedule/types";
 
 /**
  * Auditions and callbacks that these people hear because they direct the music of that production. `records` are the
- * companies' records, each with the login that cannot be in two places; what another company does is only "is engaged".
+ * companies' records, each with the login that cannot be in two places; what another company does is only "is engaged",
+ * and so are callbacks of another production that nobody has been told of yet. An audition day is one stretch, from its
+ * first room's opening to its last room's closing.
  */
 export async function hearingElsewhere(
   records: Map<string, string>,
-  companyId: string,
+  scope: Pick<ProductionScope, "id" | "companyId">,
   window: Interval,
 ): Promise<Omit<Engagement, "id">[]> {
   const leads = and(
@@ -30,12 +33,18 @@ export async function hearingElsewhere(
   const columns = {
     personId: positions.personId,
     companyId: productions.companyId,
+    productionId: productions.id,
     production: productions.title,
     venueId: rooms.venueId,
   };
   const [auditions, callbacks] = await Promise.all([
     db
-      .select({ ...columns, from: auditionRooms.opensAt, to: auditionRooms.closesAt })
+      .select({
+        ...columns,
+        hearingId: auditionDays.id,
+        from: auditionRooms.opensAt,
+        to: auditionRooms.closesAt,
+      })
       .from(auditionRooms)
       .innerJoin(auditionDays, eq(auditionDays.id, auditionRooms.dayId))
       .innerJoin(productions, eq(productions.id, auditionDays.productionId))
@@ -50,7 +59,13 @@ export async function hearingElsewhere(
         ),
       ),
     db
-      .select({ ...columns, from: callbackRounds.startsAt, to: callbackRounds.endsAt })
+      .select({
+        ...columns,
+        hearingId: callbackRounds.id,
+        issue: callbackRounds.issue,
+        from: callbackRounds.startsAt,
+        to: callbackRounds.endsAt,
+      })
       .from(callbackRounds)
       .innerJoin(productions, eq(productions.id, callbackRounds.productionId))
       .innerJoin(positions, eq(positions.productionId, productions.id))
@@ -65,20 +80,26 @@ export async function hearingElsewhere(
         ),
       ),
   ]);
-  const seen = new Set<string>();
   const rows = [
-    ...auditions.map((row) => ({ ...row, what: "auditions" })),
-    ...callbacks.map((row) => ({ ...row, what: "callbacks" })),
+    ...auditions.map((row) => ({ ...row, what: "auditions", told: true })),
+    ...callbacks.map(({ issue, ...row }) => ({ ...row, what: "callbacks", told: issue > 0 })),
   ];
-  return rows.flatMap(({ from, to, ...row }) => {
-    if (from === null || to === null) return [];
+  const heard = new Map<string, Omit<Engagement, "id">>();
+  for (const { from, to, ...row } of rows) {
+    if (from === null || to === null) continue;
     const who = records.get(row.personId) ?? row.personId;
-    // Two rooms at once are one day of hearing.
-    const key = [who, row.production, row.what, from.toISOString().slice(0, 10)].join(" ");
-    if (seen.has(key)) return [];
-    seen.add(key);
-    const label =
-      row.companyId === companyId ? `hears the ${row.what} of ${row.production}` : "is engaged";
-    return [{ from, to, who, plays: false, callId: null, label, venueId: row.venueId }];
-  });
+    const key = `${who} ${row.hearingId}`;
+    const known = heard.get(key);
+    if (known) {
+      // Two rooms at once are one day of hearing; so are two positions in the music team.
+      if (from < known.from) known.from = from;
+      if (to > known.to) known.to = to;
+      continue;
+    }
+    const named = row.companyId === scope.companyId && (row.told || row.productionId === scope.id);
+    const label = named ? `hears the ${row.what} of ${row.production}` : "is engaged";
+    const { venueId } = row;
+    heard.set(key, { from, to, who, plays: false, callId: null, label, venueId });
+  }
+  return [...heard.values()];
 }

@@ -9,6 +9,7 @@ import { productionFor } from "@/lib/data/guard";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import { readFacts } from "./facts";
+import { planSeen, seesCast } from "./hidden";
 import { readScoreAndCast } from "./needed";
 import { savedCalls, savedPlans } from "./saved";
 import type { SavedCall } from "./saved";
@@ -29,6 +30,7 @@ export type CallListed = Pick<
 > & {
   /** What is worked on, in order. */
   what: { label: string | null; title: string }[];
+  /** How many are called, as far as the reader may know. */
   people: number;
   /** What it clashes with; null for readers who do not plan. */
   clashes: number | null;
@@ -63,11 +65,19 @@ export async function listCallsOfWeek(
       .from(calls)
       .where(and(eq(calls.productionId, scope.id), visible)),
   ]);
-  const { plans } = await savedPlans(score, saved);
+  const castHidden = !seesCast(actor, scope);
+  const whole = (await savedPlans(score, saved)).plans;
+  const plans = new Map(
+    saved.flatMap(({ id, state }) => {
+      const plan = whole.get(id);
+      return plan ? [[id, planSeen(plan, state, castHidden)] as const] : [];
+    }),
+  );
   const standing = saved
     .filter((call) => call.state !== "cancelled")
     .flatMap((call) => plans.get(call.id) ?? []);
-  const facts = mayChange && standing.length > 0 ? await readFacts(scope, standing) : null;
+  const facts =
+    mayChange && standing.length > 0 ? await readFacts(scope, standing, { castHidden }) : null;
   return {
     any: (counted?.n ?? 0) > 0,
     mayChange,

@@ -23,6 +23,14 @@ export type ScoreAndCast = {
   covers: { roleId: string; personId: string }[];
 };
 
+/** What is kept of a saved call when somebody from whom the casting is hidden plans it. */
+export type HiddenCast = {
+  /** The call as it is published; null for a draft or a new call. */
+  standing: CallPlan | null;
+  /** Who was let off: not theirs to see, and not theirs to lose. */
+  excuses: CallDraft["hand"];
+};
+
 /** What the roles of a production sing and who is cast in them, in the order of the roles. Asks no permission: the caller has. */
 export async function readScoreAndCast(tx: Db | Tx, productionId: string): Promise<ScoreAndCast> {
   const [numberRows, lines, roleRows, chosen] = await Promise.all([
@@ -63,12 +71,15 @@ export async function readScoreAndCast(tx: Db | Tx, productionId: string): Promi
 
 /**
  * A call from its form: times of the blocks, who the score needs, and what was changed by hand. Every id is checked to
- * belong to this production or its company; one that does not is refused beside its field.
+ * belong to this production or its company; one that does not is refused beside its field. With `hidden`, whoever plans it
+ * may not see the casting: blocks of a published call keep the people of the score they have, and who is called by hand
+ * is that even where the score needs them, so that nothing tells that it does.
  */
 export async function planCall(
   scope: ProductionScope,
   draft: CallDraft,
   callId: string | null,
+  hidden: HiddenCast | null,
 ): Promise<{ plan: CallPlan; score: ScoreAndCast; note: "skipped" | "repeated" | null }> {
   const score = await readScoreAndCast(db, scope.id);
   await assertTheirs(scope, draft, score);
@@ -81,12 +92,23 @@ export async function planCall(
     lines: score.lines,
     cast: score.cast,
   });
+  const hand = [...draft.hand, ...(hidden?.excuses ?? [])];
   const blocks = blockTimes(instant, draft.blocks).map((block): PlannedBlock => {
     const need = needs.find(({ blockId }) => blockId === block.key);
+    const numberId = block.kind === "number" ? block.numberId : null;
+    const stood = hidden?.standing?.blocks.find(
+      (one) => one.key === block.key && one.numberId === numberId,
+    );
     const number = block.kind === "number" ? score.numbers.get(block.numberId ?? "") : undefined;
     const roleName = (roleId: string): string => score.roleNames.get(roleId) ?? "";
-    const byScore: CalledPerson[] = (need?.people ?? []).map(({ personId, roleIds }) => {
-      const letOff = draft.hand.find(
+    const byScore = scoreCalls(need?.people ?? [], stood, (personId) => {
+      const byHandToo = hand.some(
+        (change) =>
+          change.act === "call" && change.personId === personId && covers(change, block.key),
+      );
+      return hidden !== null && byHandToo;
+    }).map(({ personId, roleIds }): CalledPerson => {
+      const letOff = hand.find(
         (change) =>
           change.act === "excuse" && change.personId === personId && covers(change, block.key),
       );
@@ -102,7 +124,7 @@ export async function planCall(
       key: block.key,
       kind: block.kind,
       minutes: block.minutes,
-      numberId: block.kind === "number" ? block.numberId : null,
+      numberId,
       label: number?.label ?? null,
       title: number?.title ?? block.title ?? BLOCK_KIND_NAMES[block.kind],
       bars: block.bars,
@@ -128,6 +150,21 @@ export async function planCall(
     score,
     note: note ?? null,
   };
+}
+
+/** Whom the score calls to a block: as it stood in a published call, else whom it needs now; `yields` to a call by hand. */
+function scoreCalls(
+  needed: readonly { personId: string; roleIds: string[] }[],
+  stood: PlannedBlock | undefined,
+  yields: (personId: string) => boolean,
+): { personId: string; roleIds: string[] }[] {
+  if (!stood) return needed.filter(({ personId }) => !yields(personId));
+  return stood.called
+    .filter((person) => person.source === "score" && !(person.excused && yields(person.personId)))
+    .map(({ personId }) => ({
+      personId,
+      roleIds: needed.find((need) => need.personId === personId)?.roleIds ?? [],
+    }));
 }
 
 type HandChange = CallDraft["hand"][number];

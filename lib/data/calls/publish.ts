@@ -11,8 +11,8 @@ import { inTransaction } from "@/lib/data/transaction";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
 import type { publishCallSchema, restoreCallSchema, seenCallSchema } from "@/lib/schemas/calls";
-import { seesCast, shownWithoutCast } from "./check";
 import { readFacts, startsWithin } from "./facts";
+import { ASK_TO_PUBLISH, planSeen, refuseToTellCast, seesCast } from "./hidden";
 import { freeOfCall, holdForCall, lockCall, orTaken } from "./hold";
 import { readScoreAndCast } from "./needed";
 import { savedCalls, savedPlans } from "./saved";
@@ -22,7 +22,8 @@ export type PublishAnswer = { published: true } | { published: false; ask: strin
 
 /**
  * Publishes a draft: takes the room and the pianist, or throws `taken` with by what and when. Clashes of people do not
- * stand in the way, but are asked about once: without `despite` the answer lists them and nothing is written.
+ * stand in the way, but are asked about once: without `despite` the answer lists them and nothing is written. Throws
+ * `refused` where publishing would tell the casting to somebody who may not see it.
  */
 export async function publishCall(
   actor: Actor,
@@ -30,6 +31,7 @@ export async function publishCall(
 ): Promise<PublishAnswer> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const call = await callToHold(scope, input.callId);
+  await refuseToTellCast(actor, scope, input, ASK_TO_PUBLISH);
   if (!input.despite) {
     const ask = await clashesToAsk(actor, scope, input.callId);
     if (ask.length > 0) return { published: false, ask };
@@ -79,6 +81,7 @@ export async function restoreCall(
 ): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const call = await callToHold(scope, input.callId);
+  if (input.to === "published") await refuseToTellCast(actor, scope, input, ASK_TO_PUBLISH);
   await orTaken(scope, call, () =>
     inTransaction(async (tx) => {
       const locked = await lockCall(tx, scope.id, input.callId, input.version);
@@ -127,17 +130,13 @@ async function clashesToAsk(
 ): Promise<string[]> {
   const saved = await savedCalls(scope.id, eq(calls.id, callId));
   const { plans } = await savedPlans(await readScoreAndCast(db, scope.id), saved);
-  const plan = plans.get(callId);
-  if (!plan) return [];
-  const facts = await readFacts(scope, [plan]);
-  const hidden = !seesCast(actor, scope);
+  const whole = plans.get(callId);
+  if (!whole) return [];
+  const castHidden = !seesCast(actor, scope);
+  const plan = planSeen(whole, "draft", castHidden);
+  const facts = await readFacts(scope, [plan], { castHidden });
   return describeClashes(plan, facts, startsWithin(plan))
-    .filter(
-      (clash) =>
-        clash.kind !== "room" &&
-        clash.kind !== "pianist" &&
-        (!hidden || shownWithoutCast(plan, clash)),
-    )
+    .filter((clash) => clash.kind !== "room" && clash.kind !== "pianist")
     .map((clash) => clash.words);
 }
 

@@ -16,9 +16,10 @@ import type { Actor } from "@/lib/permissions/types";
 import { overlaps } from "@/lib/schedule/overlaps";
 import { whoIsNeeded } from "@/lib/schedule/who-is-needed";
 import type { CallDraft } from "@/lib/schemas/calls";
-import { seesCast, shownPeople, shownWithoutCast } from "./check";
+import { shownPeople } from "./check";
 import type { CheckedPerson } from "./check";
 import { readFacts, startsWithin } from "./facts";
+import { planSeen, seesCast, wouldTellCast } from "./hidden";
 import { readScoreAndCast } from "./needed";
 import type { ScoreAndCast } from "./needed";
 import { draftOf, savedCalls, savedPlans } from "./saved";
@@ -46,6 +47,8 @@ export type CallRead = SavedCall & {
   blocks: CallBlockRead[];
   waiting: number;
   mayChange: boolean;
+  /** Without seeing the casting, nobody publishes what would tell it. */
+  mayPublish: boolean;
   castHidden: boolean;
   /** The call as its form has it; null for those who only read. */
   draft: CallDraft | null;
@@ -58,12 +61,15 @@ export async function readCall(
   actor: Actor,
   { productionId, callId }: { productionId: string; callId: string },
 ): Promise<CallRead> {
-  const { scope, saved, plan, names, score, mayChange } = await loadCall(
+  const { scope, saved, plan, whole, names, score, mayChange, castHidden } = await loadCall(
     actor,
     productionId,
     callId,
   );
-  const castHidden = saved.state !== "published" && !seesCast(actor, scope);
+  const maySeeReasons = can(actor, "conflicts:read", {
+    companyId: scope.companyId,
+    productionId: scope.id,
+  });
   return {
     ...saved,
     day: longDay(saved.localDate, scope.locale),
@@ -79,11 +85,12 @@ export async function readCall(
       minutes: block.minutes,
       from: clock(block.from, saved.zone),
       to: clock(block.to, saved.zone),
-      called: shownPeople(block, names, castHidden),
-      uncastRoles: castHidden ? [] : block.uncastRoles,
+      called: shownPeople(block, names, maySeeReasons),
+      uncastRoles: block.uncastRoles,
     })),
     waiting: castHidden ? 0 : waitingMinutes(plan.blocks),
     mayChange,
+    mayPublish: mayChange && (!castHidden || !wouldTellCast(whole, score)),
     castHidden,
     draft: mayChange ? draftOf(saved, plan) : null,
     outOfStep:
@@ -114,18 +121,16 @@ export async function readCallClashes(
   actor: Actor,
   { productionId, callId }: { productionId: string; callId: string },
 ): Promise<CallClashes> {
-  const { scope, plan, mayChange } = await loadCall(actor, productionId, callId);
+  const { scope, plan, mayChange, castHidden } = await loadCall(actor, productionId, callId);
   if (!mayChange) throw new AppError("not-allowed");
-  const facts = await readFacts(scope, [plan]);
-  const hidden = !seesCast(actor, scope);
+  const facts = await readFacts(scope, [plan], { castHidden });
   return {
-    clashes: describeClashes(plan, facts, startsWithin(plan)).filter(
-      (clash) => !hidden || shownWithoutCast(plan, clash),
-    ),
-    around: hidden ? [] : conflictsAround(plan, facts),
+    clashes: describeClashes(plan, facts, startsWithin(plan)),
+    around: conflictsAround(plan, facts),
   };
 }
 
+/** A call as the reader may see it (`plan`) and in whole. */
 async function loadCall(actor: Actor, productionId: string, callId: string) {
   const scope = await productionFor(actor, productionId, "calls:read");
   const mayChange = can(actor, "calls:change", {
@@ -136,9 +141,11 @@ async function loadCall(actor: Actor, productionId: string, callId: string) {
   if (!saved || (!mayChange && saved.state !== "published")) throw new AppError("not-found");
   const score = await readScoreAndCast(db, scope.id);
   const { plans, names } = await savedPlans(score, [saved]);
-  const plan = plans.get(saved.id);
-  if (!plan) throw new AppError("not-found");
-  return { scope, saved, plan, names, score, mayChange };
+  const whole = plans.get(saved.id);
+  if (!whole) throw new AppError("not-found");
+  const castHidden = !seesCast(actor, scope);
+  const plan = planSeen(whole, saved.state, castHidden);
+  return { scope, saved, plan, whole, names, score, mayChange, castHidden };
 }
 
 async function outOfStep(

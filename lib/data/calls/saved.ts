@@ -213,7 +213,7 @@ export function draftOf(saved: SavedCall, plan: CallPlan): CallDraft {
 }
 
 /** The changes by hand, each person's with the same reason as one, over the blocks it is about. */
-function handOf(plan: CallPlan): CallDraft["hand"] {
+export function handOf(plan: CallPlan): CallDraft["hand"] {
   const changes = new Map<string, CallDraft["hand"][number]>();
   for (const block of plan.blocks) {
     for (const person of block.called) {

@@ -16,6 +16,7 @@ import { clock, localDay, shortDay } from "@/lib/format-dates";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import type { CallDraft, changeCallSchema } from "@/lib/schemas/calls";
+import { ASK_TO_REFRESH, hiddenCast, refuseNewlySung, refuseToTellCast } from "./hidden";
 import { holdForCall, lockCall, orTaken } from "./hold";
 import { planCall, readScoreAndCast } from "./needed";
 import { draftOf, savedCalls, savedPlans } from "./saved";
@@ -24,7 +25,7 @@ import { draftOf, savedCalls, savedPlans } from "./saved";
 export async function createCall(actor: Actor, draft: CallDraft): Promise<string> {
   const scope = await productionFor(actor, draft.productionId, "calls:change");
   assertMayChoosePianist(actor, scope, draft.pianistId, null);
-  const { plan } = await planCall(scope, draft, null);
+  const { plan } = await planCall(scope, draft, null, await hiddenCast(actor, scope, null));
   const callId = newId();
   await inTransaction(async (tx) => {
     await tx
@@ -45,7 +46,8 @@ export async function createCall(actor: Actor, draft: CallDraft): Promise<string
 
 /**
  * Changes a call. A published one takes its new room and pianist in the same transaction: when either is taken nothing
- * is changed, and the error says by what. Throws `stale` when someone else changed it since, `refused` when it is cancelled.
+ * is changed, and the error says by what. Throws `stale` when someone else changed it since, `refused` when it is cancelled
+ * or when it would tell the casting to somebody who may not see it.
  */
 export async function changeCall(
   actor: Actor,
@@ -58,7 +60,9 @@ export async function changeCall(
     .where(and(eq(calls.id, input.callId), eq(calls.productionId, scope.id)));
   if (!known) throw new AppError("not-found");
   assertMayChoosePianist(actor, scope, input.pianistId, known.pianistId);
-  const { plan } = await planCall(scope, input, input.callId);
+  const hidden = await hiddenCast(actor, scope, input.callId, input.version);
+  const { plan, score } = await planCall(scope, input, input.callId, hidden);
+  if (hidden) refuseNewlySung(hidden, plan, score);
   await savePlan(actor, scope, input, plan, "Changed");
 }
 
@@ -70,11 +74,12 @@ export async function refreshCall(
   const scope = await productionFor(actor, input.productionId, "calls:change");
   const [saved] = await savedCalls(scope.id, eq(calls.id, input.callId));
   if (!saved) throw new AppError("not-found");
+  await refuseToTellCast(actor, scope, input, ASK_TO_REFRESH);
   const { plans } = await savedPlans(await readScoreAndCast(db, scope.id), [saved]);
   const before = plans.get(saved.id);
   if (!before) throw new AppError("not-found");
   const draft = draftOf(saved, before);
-  const { plan } = await planCall(scope, draft, saved.id);
+  const { plan } = await planCall(scope, draft, saved.id, await hiddenCast(actor, scope, saved.id));
   await savePlan(
     actor,
     scope,

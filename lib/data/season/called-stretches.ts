@@ -8,10 +8,10 @@ import type { Interval } from "@/lib/schedule/types";
 
 /**
  * When each called person is in these calls: their blocks, joined where they follow each other. Blocks lie back to back
- * from the start of the call. Asks no permission: the caller has.
+ * from the start of the call. Of a call with `castHidden`, only those called by hand. Asks no permission: the caller has.
  */
 export async function calledStretches(
-  callRows: readonly { id: string; from: Date }[],
+  callRows: readonly { id: string; from: Date; castHidden?: boolean }[],
 ): Promise<(Interval & { callId: string; personId: string })[]> {
   const ids = callRows.map((call) => call.id);
   if (ids.length === 0) return [];
@@ -22,7 +22,7 @@ export async function calledStretches(
       .where(inArray(blocks.callId, ids))
       .orderBy(asc(blocks.callId), asc(blocks.place)),
     db
-      .select({ blockId: called.blockId, personId: called.personId })
+      .select({ blockId: called.blockId, personId: called.personId, source: called.source })
       .from(called)
       .innerJoin(blocks, eq(blocks.id, called.blockId))
       .where(and(inArray(blocks.callId, ids), eq(called.excused, false))),
@@ -33,7 +33,8 @@ export async function calledStretches(
     const open = new Map<string, Interval & { callId: string; personId: string }>();
     const done: (Interval & { callId: string; personId: string })[] = [];
     for (const block of blockTimes(call.from, byCall.get(call.id) ?? [])) {
-      for (const { personId } of peopleOf.get(block.id) ?? []) {
+      for (const { personId, source } of peopleOf.get(block.id) ?? []) {
+        if (call.castHidden === true && source === "score") continue;
         const running = open.get(personId);
         if (running?.to.getTime() === block.from.getTime()) {
           running.to = block.to;

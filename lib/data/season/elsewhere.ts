@@ -21,7 +21,7 @@ import { calledStretches } from "./called-stretches";
 import type { SeasonEventKind } from "./types";
 
 /** One login's time in a production outside the ones that are looked at. What it is for is only for that person. */
-export type Elsewhere = Interval & {
+type Elsewhere = Interval & {
   login: string;
   kind: SeasonEventKind;
   production: string;

@@ -21,7 +21,7 @@ import type { Held, SeasonEvent, SeasonProduction } from "./types";
 type Found = { events: SeasonEvent[]; held: Held[] };
 
 /** The actor's own record in the company of a production they lead, else undefined. */
-export type OwnIn = (productionId: string) => string | undefined;
+type OwnIn = (productionId: string) => string | undefined;
 
 const idsOf = (productions: readonly SeasonProduction[], sees: "auditions" | "callbacks") =>
   productions.filter((p) => p.sees[sees]).map((p) => p.id);
@@ -192,7 +192,10 @@ async function readRounds(ids: string[], window: Interval, ownIn: OwnIn): Promis
   return { events, held };
 }
 
-/** Drafts are for those who plan; nobody else is told of a call before it is published. */
+/**
+ * Drafts are for those who plan; nobody else is told of a call before it is published. Whom the score calls to a draft is
+ * left out for those who plan and may not see the casting; the people of a published call have been told.
+ */
 async function readCalls(
   productions: readonly SeasonProduction[],
   window: Interval,
@@ -231,7 +234,17 @@ async function readCalls(
         gt(calls.endsAt, window.from),
       ),
     );
-  const stretches = groupBy(await calledStretches(rows), (row) => row.callId);
+  const unseen = new Set(productions.filter((p) => !p.sees.casting).map((p) => p.id));
+  const stretches = groupBy(
+    await calledStretches(
+      rows.map(({ id, from, state, productionId }) => ({
+        id,
+        from,
+        castHidden: state === "draft" && unseen.has(productionId),
+      })),
+    ),
+    (row) => row.callId,
+  );
   const held: Held[] = [];
   for (const { id, from, to, roomId, venueId, leaderId, pianistId } of rows) {
     if (roomId) held.push({ eventId: id, personId: null, roomId, venueId: null, from, to });

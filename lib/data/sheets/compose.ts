@@ -16,7 +16,14 @@ import { localDateRange } from "@/lib/schedule/local-date-range";
 import { releaseTimes } from "@/lib/schedule/release-times";
 
 /** One person's part of a sheet: which of its blocks are theirs, and from when until when they are needed. */
-export type OwnPart = { name: string; blockIds: string[]; from: string; releasedAt: string };
+export type OwnPart = {
+  name: string;
+  blockIds: string[];
+  from: string;
+  releasedAt: string;
+  /** Of what comes next, the calls this person is called to, leads or plays for; issues from before have none. */
+  tomorrow?: string[];
+};
 
 export type ComposedSheet = {
   /** Without what only issuing gives: number, time, changes. */
@@ -44,7 +51,21 @@ export async function composeSheet(
     awayOn(scope, localDate),
     stageManager(scope),
   ]);
-  const people = partsOf(planned, nameOf);
+  const next = await savedPlans(score, tomorrow);
+  const nextOf = tomorrow.map((call) => {
+    const plan = next.plans.get(call.id);
+    const called = plan ? partsOf([{ call, plan }], nameOf) : {};
+    return { line: nextLine(call, scope), called };
+  });
+  const people = Object.fromEntries(
+    Object.entries(partsOf(planned, nameOf)).map(([personId, part]) => [
+      personId,
+      {
+        ...part,
+        tomorrow: nextOf.filter(({ called }) => personId in called).map(({ line }) => line),
+      },
+    ]),
+  );
   return {
     sheet: {
       productionTitle: scope.title,
@@ -59,7 +80,7 @@ export async function composeSheet(
         at: clock(release, scope.zone),
       })),
       music: planned.flatMap(({ call, plan }) => musicLines(call, plan, planned.length > 1)),
-      tomorrow: tomorrow.map((call) => nextLine(call, scope)),
+      tomorrow: nextOf.map(({ line }) => line),
       away,
       notes: placesOf(saved),
       ...(contact === null ? {} : { contact }),

@@ -251,7 +251,7 @@ export function ownChanges(
   return callSheetChanges(ownSheet(personId, before), ownSheet(personId, after));
 }
 
-/** A sheet cut down to one person: their blocks, with nobody else's name. */
+/** A sheet cut down to one person: their blocks and the next calls they are in, with nobody else's name. */
 export function ownSheet(personId: string, { sheet, people: parts }: IssueSnapshot): CallSheet {
   const part = parts[personId];
   const mine = new Set(part?.blockIds);
@@ -265,6 +265,7 @@ export function ownSheet(personId: string, { sheet, people: parts }: IssueSnapsh
         who: part && block.who.includes(part.name) ? [part.name] : [],
       })),
     released: part ? [{ who: part.name, at: part.releasedAt }] : [],
+    tomorrow: part?.tomorrow ?? [],
     away: [],
   };
 }

@@ -24,6 +24,9 @@ export async function makeDay(page: Page, production: string, asked: DayAsked): 
   return new URL(page.url()).pathname;
 }
 
+/** A file by its path, or as it is. */
+type SheetFile = string | { name: string; mimeType: string; buffer: Buffer };
+
 /** Singers brought in from a spreadsheet: what each row becomes, and what is wrong with the others. */
 export class ImportPage {
   private readonly page: Page;
@@ -34,7 +37,7 @@ export class ImportPage {
     this.rows = page.getByRole("table", { name: "What each row becomes" }).getByRole("row");
   }
 
-  async choose(production: string, file: string): Promise<void> {
+  async choose(production: string, file: SheetFile): Promise<void> {
     await visit(this.page, `${production}/auditions/import`);
     await this.page.getByLabel("Spreadsheet, .xlsx or .csv").setInputFiles(file);
     await this.rows.first().waitFor();

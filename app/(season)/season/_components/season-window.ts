@@ -4,7 +4,7 @@ import type { Interval } from "@/lib/schedule/types";
 import { localDateRange } from "@/lib/schedule/local-date-range";
 
 /** As many bars as stand on a wide page without scrolling. */
-export const WEEKS = 9;
+const WEEKS = 9;
 
 const DAY_MS = 86_400_000;
 const monthDay = new Intl.DateTimeFormat("en-GB", {

@@ -5,6 +5,7 @@ import { Button } from "@/components/ui/button";
 export default function AuditionsNotFound() {
   return (
     <EmptyState
+      level={1}
       title="That is not here"
       action={
         <Button asChild>

@@ -6,6 +6,7 @@ import { EmptyState } from "@/components/ui/empty-state";
 export default function ScoreError({ retry }: { retry: () => void }) {
   return (
     <EmptyState
+      level={1}
       title="The score could not be shown"
       action={
         <Button kind="primary" onClick={retry}>

@@ -70,30 +70,36 @@ export default async function CallPage({
                 </Link>
               </Button>
             )}
-            {call.mayChange && <CallButtons {...seen} state={call.state} />}
+            {call.mayChange && (
+              <CallButtons {...seen} state={call.state} mayPublish={call.mayPublish} />
+            )}
           </>
         }
       />
       <OutOfStep call={call} seen={seen} />
-      <SideColumn
-        sideLabel="Waiting and clashes"
-        side={
-          <>
-            {!call.castHidden && <WaitingAndChanges call={call} />}
-            {clashes && (
-              <LiveData>
-                <WhoCannotCome
-                  {...seen}
-                  fields={call.draft ? fieldsOf(call.draft) : null}
-                  initial={clashes}
-                />
-              </LiveData>
-            )}
-          </>
-        }
-      >
+      {call.castHidden && !clashes ? (
         <Ladder call={call} label={title} />
-      </SideColumn>
+      ) : (
+        <SideColumn
+          sideLabel="Waiting and clashes"
+          side={
+            <>
+              {!call.castHidden && <WaitingAndChanges call={call} />}
+              {clashes && (
+                <LiveData>
+                  <WhoCannotCome
+                    {...seen}
+                    fields={call.draft ? fieldsOf(call.draft) : null}
+                    initial={clashes}
+                  />
+                </LiveData>
+              )}
+            </>
+          }
+        >
+          <Ladder call={call} label={title} />
+        </SideColumn>
+      )}
     </>
   );
 }
@@ -131,13 +137,6 @@ function OutOfStep({
 }
 
 function Ladder({ call, label }: { call: CallRead; label: string }) {
-  if (call.castHidden) {
-    return (
-      <Notice title="The cast list is not out yet.">
-        Who is needed shows here when the music director publishes it.
-      </Notice>
-    );
-  }
   const [hours = 0, minutes = 0] = call.localTime.split(":").map(Number);
   const start = hours * 60 + minutes;
   const at = (offset: number) => start + offset;
@@ -145,6 +144,12 @@ function Ladder({ call, label }: { call: CallRead; label: string }) {
   const leads = call.leader === null ? "" : `${call.leader} leads. `;
   return (
     <>
+      {call.castHidden && call.state !== "published" && (
+        <Notice className="mb-6" title="The cast list is not out yet.">
+          Who is called by hand shows here; whom the score calls, once it is.
+          {call.mayPublish ? "" : " Ask the music director to publish this call."}
+        </Notice>
+      )}
       <CallLadder
         label={label}
         blocks={call.blocks

@@ -42,7 +42,10 @@ export function CheckPanel({
             <SectionTitle id="check-clashes">Clashes</SectionTitle>
             {check.clashes.length === 0 ? (
               <p className="text-sm">
-                <Chip tone="fits">None</Chip> Everyone, the room and the pianist are free.
+                <Chip tone="fits">None</Chip>{" "}
+                {check.castHidden
+                  ? "Everyone shown here, the room and the pianist are free."
+                  : "Everyone, the room and the pianist are free."}
               </p>
             ) : (
               <ClashList clashes={check.clashes} onTake={onTake} />
@@ -50,8 +53,8 @@ export function CheckPanel({
           </section>
           {check.castHidden ? (
             <Notice title="The cast list is not out yet.">
-              Who the score needs is called when the music director publishes it; it is left out
-              here.
+              Whom the score needs is called all the same and is left out here. The music director
+              publishes calls for what is sung until it is out.
             </Notice>
           ) : (
             <section aria-labelledby="check-waiting">

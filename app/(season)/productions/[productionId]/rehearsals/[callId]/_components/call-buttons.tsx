@@ -15,10 +15,12 @@ type Props = {
   callId: string;
   version: number;
   state: "draft" | "published" | "cancelled";
+  /** Whoever may not see the casting does not publish what would tell it. */
+  mayPublish: boolean;
 };
 
 /** Publishes a call, cancels it (with the way back), or restores it. */
-export function CallButtons({ productionId, callId, version, state }: Props) {
+export function CallButtons({ productionId, callId, version, state, mayPublish }: Props) {
   const router = useRouter();
   const [pending, setPending] = useState(false);
   const [ask, setAsk] = useState<string[] | null>(null);
@@ -54,8 +56,9 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
             ? "Cancelled: the room and the pianist are free."
             : "The draft is cancelled.",
         undo: async () => {
+          const to = mayPublish ? was : "draft";
           await run(async () => {
-            await orRefuse(restoreCall({ ...seen, version: now, to: was }));
+            await orRefuse(restoreCall({ ...seen, version: now, to }));
           });
         },
       });
@@ -87,7 +90,10 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
         >
           <p>
             Its room and pianist become free. People learn of it with the next issue of the call
-            sheet. You can take it back while both are still free.
+            sheet.{" "}
+            {mayPublish
+              ? "You can take it back while both are still free."
+              : "You can take it back as a draft; the music director publishes it again."}
           </p>
         </Confirm>
       ) : (
@@ -95,14 +101,16 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
           <PendingButton kind="quiet" pending={pending} onClick={() => void cancel()}>
             Cancel the draft
           </PendingButton>
-          <PendingButton
-            kind="primary"
-            pending={pending}
-            pendingLabel="Publishing"
-            onClick={() => void publish(false)}
-          >
-            Publish the call
-          </PendingButton>
+          {mayPublish && (
+            <PendingButton
+              kind="primary"
+              pending={pending}
+              pendingLabel="Publishing"
+              onClick={() => void publish(false)}
+            >
+              Publish the call
+            </PendingButton>
+          )}
         </>
       )}
       <Dialog
@@ -132,7 +140,11 @@ export function CallButtons({ productionId, callId, version, state }: Props) {
 }
 
 /** Calls whom the casting of today needs; changes by hand stay. */
-export function BringUpToDate({ productionId, callId, version }: Omit<Props, "state">) {
+export function BringUpToDate({
+  productionId,
+  callId,
+  version,
+}: Omit<Props, "state" | "mayPublish">) {
   const router = useRouter();
   const [pending, setPending] = useState(false);
   async function bring() {

@@ -12,7 +12,8 @@ type Person = {
   name: string;
   roles: string;
   blockIds: string[];
-  reason: string | null;
+  /** What is said of somebody without a role: why they are called. */
+  why: string;
 };
 
 /**
@@ -30,7 +31,7 @@ export function ladderRows(blocks: readonly CallBlockRead[]): CrowdRow[] {
         roles: "",
         roleSet: new Set<string>(),
         blockIds: [],
-        reason: called.source === "hand" ? called.reason : null,
+        why: called.source === "hand" ? (called.reason ?? "called by hand") : "called",
       };
       for (const role of called.roles) person.roleSet.add(role);
       person.blockIds.push(block.key);
@@ -60,7 +61,7 @@ export function ladderRows(blocks: readonly CallBlockRead[]): CrowdRow[] {
     return group.map((person) => ({
       id: person.personId,
       name: person.roles === "" ? person.name : person.roles,
-      sub: person.roles === "" ? (person.reason ?? "called by hand") : person.name,
+      sub: person.roles === "" ? person.why : person.name,
       blockIds: person.blockIds,
     }));
   });
