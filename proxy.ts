@@ -32,4 +32,6 @@ export function proxy(request: NextRequest): NextResponse {
   return response;
 }
 
-export const config = { matcher: ["/((?!_next/static|_next/image|api/|favicon.ico|icon.svg|workers/).*)"] };
+export const config = {
+  matcher: ["/((?!_next/static|_next/image|api/|favicon.ico|icon.svg|workers/).*)"],
+};

@@ -28,7 +28,8 @@ export const uuid = customType<{ data: string; driverData: Buffer }>({
 
 /** Text compared byte by byte: tokens, hashes, addresses already folded to lower case. */
 export const exactText = customType<{ data: string; config: { length: number } }>({
-  dataType: (config) => `varchar(${String(config?.length ?? 255)}) character set utf8mb4 collate utf8mb4_bin`,
+  dataType: (config) =>
+    `varchar(${String(config?.length ?? 255)}) character set utf8mb4 collate utf8mb4_bin`,
 });
 
 /** A new id, made by the application (UUIDv7: in the order of making, so that keys stay in order). */

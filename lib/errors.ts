@@ -77,7 +77,8 @@ export type ActionResult<T> = { ok: true; data: T } | { ok: false; error: Action
 export function asAppError(error: unknown): AppError | null {
   if (error instanceof AppError) return error;
   for (const candidate of [error, error instanceof Error ? error.cause : null]) {
-    if (candidate instanceof Error && candidate.name === "NotAnIdError") return new AppError("not-found");
+    if (candidate instanceof Error && candidate.name === "NotAnIdError")
+      return new AppError("not-found");
   }
   return null;
 }

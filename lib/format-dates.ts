@@ -19,27 +19,49 @@ const join = (locale: string, options: Intl.DateTimeFormatOptions, at: Date): st
 
 /** "Saturday 20 March" from "2027-03-20". */
 export function longDay(localDate: string, locale = "en-GB"): string {
-  return join(locale, { weekday: "long", day: "numeric", month: "long", timeZone: "UTC" }, noon(localDate));
+  return join(
+    locale,
+    { weekday: "long", day: "numeric", month: "long", timeZone: "UTC" },
+    noon(localDate),
+  );
 }
 
 /** "Sat 20 Mar". */
 export function shortDay(localDate: string, locale = "en-GB"): string {
-  return join(locale, { weekday: "short", day: "numeric", month: "short", timeZone: "UTC" }, noon(localDate));
+  return join(
+    locale,
+    { weekday: "short", day: "numeric", month: "short", timeZone: "UTC" },
+    noon(localDate),
+  );
 }
 
 /** "20 Mar 2027". */
 export function dayOfYear(localDate: string, locale = "en-GB"): string {
-  return join(locale, { day: "numeric", month: "short", year: "numeric", timeZone: "UTC" }, noon(localDate));
+  return join(
+    locale,
+    { day: "numeric", month: "short", year: "numeric", timeZone: "UTC" },
+    noon(localDate),
+  );
 }
 
 /** "18:40", as a wall clock in the zone shows it. */
 export function clock(at: Date, zone: string): string {
-  return format("en-GB", { hour: "2-digit", minute: "2-digit", hourCycle: "h23", timeZone: zone }).format(at);
+  return format("en-GB", {
+    hour: "2-digit",
+    minute: "2-digit",
+    hourCycle: "h23",
+    timeZone: zone,
+  }).format(at);
 }
 
 /** "2027-03-20", the local day of an instant. */
 export function localDay(at: Date, zone: string): string {
-  return format("en-CA", { year: "numeric", month: "2-digit", day: "2-digit", timeZone: zone }).format(at);
+  return format("en-CA", {
+    year: "numeric",
+    month: "2-digit",
+    day: "2-digit",
+    timeZone: zone,
+  }).format(at);
 }
 
 /** "Sat 20 Mar, 18:40". */
@@ -50,6 +72,9 @@ export function dayAndClock(at: Date, zone: string, locale = "en-GB"): string {
 /** "18:40–19:30"; a stretch that ends on another day says so. */
 export function clockSpan(from: Date, to: Date, zone: string): string {
   const end = clock(to, zone);
-  const later = localDay(from, zone) === localDay(to, zone) || end === "00:00" ? "" : ` (${shortDay(localDay(to, zone))})`;
+  const later =
+    localDay(from, zone) === localDay(to, zone) || end === "00:00"
+      ? ""
+      : ` (${shortDay(localDay(to, zone))})`;
   return `${clock(from, zone)}–${end}${later}`;
 }

@@ -1,4 +1,13 @@
-import { bigint, datetime, index, int, json, mysqlTable, text, varchar } from "drizzle-orm/mysql-core";
+import {
+  bigint,
+  datetime,
+  index,
+  int,
+  json,
+  mysqlTable,
+  text,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import type { AnyMySqlColumn } from "drizzle-orm/mysql-core";
 import { exactText, id, uuid } from "../columns";
 import { companies } from "./companies";
@@ -9,7 +18,9 @@ export const files = mysqlTable(
   "files",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references((): AnyMySqlColumn => companies.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references((): AnyMySqlColumn => companies.id),
     productionId: uuid("production_id"),
     sha256: exactText("sha256", { length: 64 }).notNull(),
     bytes: bigint("bytes", { mode: "number" }).notNull(),
@@ -19,7 +30,9 @@ export const files = mysqlTable(
     name: varchar("name", { length: 200 }).notNull(),
     kind: varchar("kind", { length: 30 }).notNull(),
     uploadedBy: uuid("uploaded_by").references(() => users.id, { onDelete: "set null" }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [index("files_production").on(t.productionId), index("files_company").on(t.companyId)],
 );
@@ -35,11 +48,15 @@ export const outbox = mysqlTable(
     data: json("data").$type<Record<string, unknown>>().notNull(),
     dedupeKey: exactText("dedupe_key", { length: 190 }).notNull().unique(),
     tries: int("tries").notNull().default(0),
-    nextTryAt: datetime("next_try_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    nextTryAt: datetime("next_try_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     sentAt: datetime("sent_at", { mode: "date", fsp: 3 }),
     gaveUpAt: datetime("gave_up_at", { mode: "date", fsp: 3 }),
     lastError: text("last_error"),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [index("outbox_due").on(t.sentAt, t.gaveUpAt, t.nextTryAt)],
 );
@@ -59,7 +76,12 @@ export const auditEvents = mysqlTable(
     subjectId: uuid("subject_id"),
     summary: varchar("summary", { length: 300 }).notNull(),
     detail: json("detail").$type<Record<string, unknown>>(),
-    at: datetime("at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    at: datetime("at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
-  (t) => [index("audit_events_company").on(t.companyId, t.at), index("audit_events_production").on(t.productionId, t.at)],
+  (t) => [
+    index("audit_events_company").on(t.companyId, t.at),
+    index("audit_events_production").on(t.productionId, t.at),
+  ],
 );

@@ -1,5 +1,18 @@
 import { sql } from "drizzle-orm";
-import { check, date, datetime, foreignKey, index, int, mysqlEnum, mysqlTable, primaryKey, smallint, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  check,
+  date,
+  datetime,
+  foreignKey,
+  index,
+  int,
+  mysqlEnum,
+  mysqlTable,
+  primaryKey,
+  smallint,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { exactText, id, uuid } from "../columns";
 import { people } from "./companies";
 import { rooms } from "./places";
@@ -9,7 +22,9 @@ export const auditionDays = mysqlTable(
   "audition_days",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     localDate: date("local_date", { mode: "string" }).notNull(),
     zone: varchar("zone", { length: 64 }).notNull(),
     slotMinutes: smallint("slot_minutes").notNull(),
@@ -33,8 +48,12 @@ export const auditionRooms = mysqlTable(
   "audition_rooms",
   {
     id: id(),
-    dayId: uuid("day_id").notNull().references(() => auditionDays.id),
-    roomId: uuid("room_id").notNull().references(() => rooms.id),
+    dayId: uuid("day_id")
+      .notNull()
+      .references(() => auditionDays.id),
+    roomId: uuid("room_id")
+      .notNull()
+      .references(() => rooms.id),
     opensAt: datetime("opens_at", { mode: "date", fsp: 3 }).notNull(),
     closesAt: datetime("closes_at", { mode: "date", fsp: 3 }).notNull(),
   },
@@ -49,7 +68,9 @@ export const slots = mysqlTable(
   "slots",
   {
     id: id(),
-    auditionRoomId: uuid("audition_room_id").notNull().references(() => auditionRooms.id, { onDelete: "cascade" }),
+    auditionRoomId: uuid("audition_room_id")
+      .notNull()
+      .references(() => auditionRooms.id, { onDelete: "cascade" }),
     kind: mysqlEnum("kind", ["slot", "rest", "lunch", "hold"]).notNull(),
     startsAt: datetime("starts_at", { mode: "date", fsp: 3 }).notNull(),
     endsAt: datetime("ends_at", { mode: "date", fsp: 3 }).notNull(),
@@ -63,8 +84,12 @@ export const signUps = mysqlTable(
   "sign_ups",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     state: mysqlEnum("state", SIGN_UP_STATES).notNull().default("listed"),
     /** In the order the server took them. */
     place: int("place").notNull(),
@@ -77,9 +102,14 @@ export const signUps = mysqlTable(
     invitedAt: datetime("invited_at", { mode: "date", fsp: 3 }),
     answeredAt: datetime("answered_at", { mode: "date", fsp: 3 }),
     version: int("version").notNull().default(1),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
-  (t) => [uniqueIndex("sign_ups_once").on(t.productionId, t.personId), index("sign_ups_person").on(t.personId)],
+  (t) => [
+    uniqueIndex("sign_ups_once").on(t.productionId, t.personId),
+    index("sign_ups_person").on(t.personId),
+  ],
 );
 
 /** Who sings in which slot: a slot once, a singer once a day. */
@@ -87,12 +117,20 @@ export const slotAssignments = mysqlTable(
   "slot_assignments",
   {
     slotId: uuid("slot_id").primaryKey(),
-    signUpId: uuid("sign_up_id").notNull().references(() => signUps.id),
-    dayId: uuid("day_id").notNull().references(() => auditionDays.id),
+    signUpId: uuid("sign_up_id")
+      .notNull()
+      .references(() => signUps.id),
+    dayId: uuid("day_id")
+      .notNull()
+      .references(() => auditionDays.id),
   },
   (t) => [
     uniqueIndex("slot_assignments_day").on(t.signUpId, t.dayId),
-    foreignKey({ name: "slot_assignments_slot_fk", columns: [t.slotId], foreignColumns: [slots.id] }),
+    foreignKey({
+      name: "slot_assignments_slot_fk",
+      columns: [t.slotId],
+      foreignColumns: [slots.id],
+    }),
   ],
 );
 
@@ -100,8 +138,12 @@ export const slotAssignments = mysqlTable(
 export const attendances = mysqlTable(
   "attendances",
   {
-    dayId: uuid("day_id").notNull().references(() => auditionDays.id),
-    signUpId: uuid("sign_up_id").notNull().references(() => signUps.id),
+    dayId: uuid("day_id")
+      .notNull()
+      .references(() => auditionDays.id),
+    signUpId: uuid("sign_up_id")
+      .notNull()
+      .references(() => signUps.id),
     hereAt: datetime("here_at", { mode: "date", fsp: 3 }),
     inAt: datetime("in_at", { mode: "date", fsp: 3 }),
     outAt: datetime("out_at", { mode: "date", fsp: 3 }),
@@ -112,8 +154,12 @@ export const attendances = mysqlTable(
 /** The monitor's link: good for one audition day, and only on it. */
 export const dayLinks = mysqlTable("day_links", {
   id: id(),
-  dayId: uuid("day_id").notNull().references(() => auditionDays.id),
+  dayId: uuid("day_id")
+    .notNull()
+    .references(() => auditionDays.id),
   tokenHash: exactText("token_hash", { length: 64 }).notNull().unique(),
-  createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+  createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+    .notNull()
+    .$defaultFn(() => new Date()),
   revokedAt: datetime("revoked_at", { mode: "date", fsp: 3 }),
 });

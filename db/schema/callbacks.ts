@@ -1,4 +1,16 @@
-import { datetime, foreignKey, index, int, json, mysqlEnum, mysqlTable, primaryKey, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  datetime,
+  foreignKey,
+  index,
+  int,
+  json,
+  mysqlEnum,
+  mysqlTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { people } from "./companies";
 import { rooms } from "./places";
@@ -9,7 +21,9 @@ export const callbackRounds = mysqlTable(
   "callback_rounds",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     title: varchar("title", { length: 120 }).notNull(),
     startsAt: datetime("starts_at", { mode: "date", fsp: 3 }),
     endsAt: datetime("ends_at", { mode: "date", fsp: 3 }),
@@ -29,13 +43,23 @@ export const callbackMarks = mysqlTable(
   "callback_marks",
   {
     roundId: uuid("round_id").notNull(),
-    personId: uuid("person_id").notNull().references(() => people.id),
-    roleId: uuid("role_id").notNull().references(() => roles.id),
-    markedAt: datetime("marked_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
+    roleId: uuid("role_id")
+      .notNull()
+      .references(() => roles.id),
+    markedAt: datetime("marked_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [
     primaryKey({ columns: [t.roundId, t.personId, t.roleId] }),
-    foreignKey({ name: "callback_marks_round_fk", columns: [t.roundId], foreignColumns: [callbackRounds.id] }),
+    foreignKey({
+      name: "callback_marks_round_fk",
+      columns: [t.roundId],
+      foreignColumns: [callbackRounds.id],
+    }),
   ],
 );
 
@@ -55,7 +79,9 @@ export const callbackInvitations = mysqlTable(
   {
     id: id(),
     roundId: uuid("round_id").notNull(),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     issue: int("issue").notNull(),
     snapshot: json("snapshot").$type<CallbackSnapshot>().notNull(),
     publishedAt: datetime("published_at", { mode: "date", fsp: 3 }).notNull(),
@@ -67,6 +93,10 @@ export const callbackInvitations = mysqlTable(
   (t) => [
     uniqueIndex("callback_invitations_once").on(t.roundId, t.personId, t.issue),
     index("callback_invitations_person").on(t.personId),
-    foreignKey({ name: "callback_invitations_round_fk", columns: [t.roundId], foreignColumns: [callbackRounds.id] }),
+    foreignKey({
+      name: "callback_invitations_round_fk",
+      columns: [t.roundId],
+      foreignColumns: [callbackRounds.id],
+    }),
   ],
 );

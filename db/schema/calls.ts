@@ -1,19 +1,47 @@
 import { sql } from "drizzle-orm";
-import { boolean, check, date, datetime, foreignKey, index, int, mysqlEnum, mysqlTable, primaryKey, smallint, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  boolean,
+  check,
+  date,
+  datetime,
+  foreignKey,
+  index,
+  int,
+  mysqlEnum,
+  mysqlTable,
+  primaryKey,
+  smallint,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { people } from "./companies";
 import { rooms } from "./places";
 import { numbers } from "./score";
 import { productions } from "./seasons";
 
-export const CALL_KINDS = ["music", "staging", "choreography", "orchestra", "sitzprobe", "wandelprobe", "tech", "dress", "put_in", "brush_up", "performance"] as const;
+export const CALL_KINDS = [
+  "music",
+  "staging",
+  "choreography",
+  "orchestra",
+  "sitzprobe",
+  "wandelprobe",
+  "tech",
+  "dress",
+  "put_in",
+  "brush_up",
+  "performance",
+] as const;
 
 /** A call. What people agreed on (local date, time, zone) is kept beside the instants, so that a clock change moves nothing. */
 export const calls = mysqlTable(
   "calls",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     kind: mysqlEnum("kind", CALL_KINDS).notNull(),
     title: varchar("title", { length: 160 }),
     startsAt: datetime("starts_at", { mode: "date", fsp: 3 }).notNull(),
@@ -39,7 +67,9 @@ export const blocks = mysqlTable(
   "blocks",
   {
     id: id(),
-    callId: uuid("call_id").notNull().references(() => calls.id, { onDelete: "cascade" }),
+    callId: uuid("call_id")
+      .notNull()
+      .references(() => calls.id, { onDelete: "cascade" }),
     place: int("place").notNull(),
     kind: mysqlEnum("kind", ["number", "scene", "warm_up", "break"]).notNull(),
     minutes: smallint("minutes").notNull(),
@@ -60,7 +90,9 @@ export const called = mysqlTable(
   "called",
   {
     blockId: uuid("block_id").notNull(),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     source: mysqlEnum("source", ["score", "hand"]).notNull(),
     reason: varchar("reason", { length: 200 }),
     /** Needed by the score, but let off by hand. */
@@ -69,7 +101,11 @@ export const called = mysqlTable(
   (t) => [
     primaryKey({ columns: [t.blockId, t.personId] }),
     index("called_person").on(t.personId),
-    foreignKey({ name: "called_block_fk", columns: [t.blockId], foreignColumns: [blocks.id] }).onDelete("cascade"),
+    foreignKey({
+      name: "called_block_fk",
+      columns: [t.blockId],
+      foreignColumns: [blocks.id],
+    }).onDelete("cascade"),
   ],
 );
 
@@ -78,7 +114,9 @@ export const conflicts = mysqlTable(
   "conflicts",
   {
     id: id(),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     startsAt: datetime("starts_at", { mode: "date", fsp: 3 }).notNull(),
     endsAt: datetime("ends_at", { mode: "date", fsp: 3 }).notNull(),
     /** As given: first day, "HH:MM" or null for the whole day, last day, in the person's zone. */
@@ -90,8 +128,13 @@ export const conflicts = mysqlTable(
     reason: varchar("reason", { length: 160 }),
     state: mysqlEnum("state", ["asked", "agreed", "declined"]).notNull().default("asked"),
     decidedAt: datetime("decided_at", { mode: "date", fsp: 3 }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     removedAt: datetime("removed_at", { mode: "date", fsp: 3 }),
   },
-  (t) => [index("conflicts_person").on(t.personId, t.startsAt), check("conflicts_order", sql`${t.startsAt} < ${t.endsAt}`)],
+  (t) => [
+    index("conflicts_person").on(t.personId, t.startsAt),
+    check("conflicts_order", sql`${t.startsAt} < ${t.endsAt}`),
+  ],
 );

@@ -1,4 +1,12 @@
-import { datetime, index, int, mysqlEnum, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  datetime,
+  index,
+  int,
+  mysqlEnum,
+  mysqlTable,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { people } from "./companies";
 import { roles } from "./score";
@@ -12,14 +20,22 @@ export const choices = mysqlTable(
   "choices",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
-    roleId: uuid("role_id").notNull().references(() => roles.id),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
+    roleId: uuid("role_id")
+      .notNull()
+      .references(() => roles.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     kind: mysqlEnum("kind", CHOICE_KINDS).notNull().default("principal"),
     state: mysqlEnum("state", ["considered", "cast"]).notNull(),
     note: varchar("note", { length: 400 }),
     chosenBy: uuid("chosen_by").references(() => users.id, { onDelete: "set null" }),
-    chosenAt: datetime("chosen_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    chosenAt: datetime("chosen_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     version: int("version").notNull().default(1),
   },
   (t) => [

@@ -1,5 +1,15 @@
 import { sql } from "drizzle-orm";
-import { boolean, date, datetime, foreignKey, index, mysqlEnum, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  boolean,
+  date,
+  datetime,
+  foreignKey,
+  index,
+  mysqlEnum,
+  mysqlTable,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { POSITION_KINDS } from "@/lib/permissions/position-kinds";
 import { exactText, id, uuid } from "../columns";
 import { productions } from "./seasons";
@@ -11,7 +21,9 @@ export const companies = mysqlTable("companies", {
   zone: varchar("zone", { length: 64 }).notNull(),
   locale: varchar("locale", { length: 20 }).notNull().default("en-GB"),
   paper: mysqlEnum("paper", ["A4", "Letter"]).notNull().default("A4"),
-  createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+  createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+    .notNull()
+    .$defaultFn(() => new Date()),
 });
 
 /** A company's own record of a person; `userId` is set when that person accepts, signed in with that address. */
@@ -19,7 +31,9 @@ export const people = mysqlTable(
   "people",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references(() => companies.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references(() => companies.id),
     userId: uuid("user_id").references(() => users.id, { onDelete: "set null" }),
     name: varchar("name", { length: 160 }).notNull(),
     email: exactText("email", { length: 254 }),
@@ -28,7 +42,9 @@ export const people = mysqlTable(
     minor: boolean("minor").notNull().default(false),
     guardianName: varchar("guardian_name", { length: 160 }),
     guardianEmail: varchar("guardian_email", { length: 254 }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     removedAt: datetime("removed_at", { mode: "date", fsp: 3 }),
   },
   (t) => [
@@ -43,13 +59,19 @@ export const positions = mysqlTable(
   "positions",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references(() => companies.id),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references(() => companies.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     productionId: uuid("production_id"),
     kind: mysqlEnum("kind", POSITION_KINDS).notNull(),
     startsOn: date("starts_on", { mode: "string" }),
     endedAt: datetime("ended_at", { mode: "date", fsp: 3 }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     /** The scope while open, null once ended: makes "the same position twice" impossible, a second term possible. */
     openScope: uuid("open_scope").generatedAlwaysAs(
       sql`(if(\`ended_at\` is null, ifnull(\`production_id\`, \`company_id\`), null))`,
@@ -59,7 +81,11 @@ export const positions = mysqlTable(
   (t) => [
     uniqueIndex("positions_open").on(t.personId, t.kind, t.openScope),
     index("positions_production").on(t.productionId, t.kind),
-    foreignKey({ name: "positions_production_fk", columns: [t.productionId], foreignColumns: [productions.id] }),
+    foreignKey({
+      name: "positions_production_fk",
+      columns: [t.productionId],
+      foreignColumns: [productions.id],
+    }),
   ],
 );
 
@@ -67,13 +93,17 @@ export const invitations = mysqlTable(
   "invitations",
   {
     id: id(),
-    positionId: uuid("position_id").notNull().references(() => positions.id, { onDelete: "cascade" }),
+    positionId: uuid("position_id")
+      .notNull()
+      .references(() => positions.id, { onDelete: "cascade" }),
     email: exactText("email", { length: 254 }).notNull(),
     tokenHash: exactText("token_hash", { length: 64 }).notNull().unique(),
     invitedBy: uuid("invited_by").references(() => users.id, { onDelete: "set null" }),
     expiresAt: datetime("expires_at", { mode: "date", fsp: 3 }).notNull(),
     acceptedAt: datetime("accepted_at", { mode: "date", fsp: 3 }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [index("invitations_position").on(t.positionId)],
 );

@@ -1,5 +1,13 @@
 import { sql } from "drizzle-orm";
-import { boolean, check, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  boolean,
+  check,
+  int,
+  mysqlTable,
+  primaryKey,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { companies } from "./companies";
 
@@ -7,7 +15,9 @@ export const venues = mysqlTable(
   "venues",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references(() => companies.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references(() => companies.id),
     name: varchar("name", { length: 160 }).notNull(),
     address: varchar("address", { length: 255 }).notNull().default(""),
   },
@@ -18,8 +28,12 @@ export const rooms = mysqlTable(
   "rooms",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references(() => companies.id),
-    venueId: uuid("venue_id").notNull().references(() => venues.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references(() => companies.id),
+    venueId: uuid("venue_id")
+      .notNull()
+      .references(() => venues.id),
     name: varchar("name", { length: 120 }).notNull(),
     hasPiano: boolean("has_piano").notNull().default(true),
   },
@@ -30,8 +44,12 @@ export const rooms = mysqlTable(
 export const travelTimes = mysqlTable(
   "travel_times",
   {
-    venueA: uuid("venue_a").notNull().references(() => venues.id, { onDelete: "cascade" }),
-    venueB: uuid("venue_b").notNull().references(() => venues.id, { onDelete: "cascade" }),
+    venueA: uuid("venue_a")
+      .notNull()
+      .references(() => venues.id, { onDelete: "cascade" }),
+    venueB: uuid("venue_b")
+      .notNull()
+      .references(() => venues.id, { onDelete: "cascade" }),
     minutes: int("minutes").notNull(),
   },
   (t) => [

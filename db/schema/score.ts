@@ -1,5 +1,20 @@
 import { sql } from "drizzle-orm";
-import { boolean, check, datetime, double, index, int, json, mysqlEnum, mysqlTable, smallint, text, tinyint, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  boolean,
+  check,
+  datetime,
+  double,
+  index,
+  int,
+  json,
+  mysqlEnum,
+  mysqlTable,
+  smallint,
+  text,
+  tinyint,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { files } from "./around";
 import { productions } from "./seasons";
@@ -12,11 +27,17 @@ export const scores = mysqlTable(
   "scores",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
-    fileId: uuid("file_id").notNull().references(() => files.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
+    fileId: uuid("file_id")
+      .notNull()
+      .references(() => files.id),
     title: varchar("title", { length: 200 }).notNull(),
     version: int("version").notNull().default(1),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [index("scores_production").on(t.productionId)],
 );
@@ -25,7 +46,9 @@ export const scoreParts = mysqlTable(
   "score_parts",
   {
     id: id(),
-    scoreId: uuid("score_id").notNull().references(() => scores.id, { onDelete: "cascade" }),
+    scoreId: uuid("score_id")
+      .notNull()
+      .references(() => scores.id, { onDelete: "cascade" }),
     partId: varchar("part_id", { length: 80 }).notNull(),
     place: int("place").notNull(),
     name: varchar("name", { length: 160 }).notNull(),
@@ -47,7 +70,9 @@ export const numbers = mysqlTable(
   "numbers",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     scoreId: uuid("score_id").references(() => scores.id),
     label: varchar("label", { length: 12 }).notNull(),
     title: varchar("title", { length: 200 }).notNull(),
@@ -78,7 +103,9 @@ export const roles = mysqlTable(
   "roles",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     name: varchar("name", { length: 120 }).notNull(),
     kind: mysqlEnum("kind", ROLE_KINDS).notNull().default("principal"),
     place: int("place").notNull(),
@@ -89,7 +116,10 @@ export const roles = mysqlTable(
     version: int("version").notNull().default(1),
     removedAt: datetime("removed_at", { mode: "date", fsp: 3 }),
   },
-  (t) => [index("roles_production").on(t.productionId, t.place), check("roles_needed", sql`${t.needed} between 1 and 400`)],
+  (t) => [
+    index("roles_production").on(t.productionId, t.place),
+    check("roles_needed", sql`${t.needed} between 1 and 400`),
+  ],
 );
 
 /** What a role sings in a number: read from a part of a score, or typed. */
@@ -97,8 +127,12 @@ export const vocalLines = mysqlTable(
   "vocal_lines",
   {
     id: id(),
-    roleId: uuid("role_id").notNull().references(() => roles.id),
-    numberId: uuid("number_id").notNull().references(() => numbers.id),
+    roleId: uuid("role_id")
+      .notNull()
+      .references(() => roles.id),
+    numberId: uuid("number_id")
+      .notNull()
+      .references(() => numbers.id),
     scorePartId: uuid("score_part_id").references(() => scoreParts.id),
     /** The part's id in its score, or "typed": with the bars, what makes a line of a role in a number one line. */
     partKey: varchar("part_key", { length: 80 }).notNull().default("typed"),

@@ -1,5 +1,15 @@
 import { sql } from "drizzle-orm";
-import { check, date, datetime, index, int, mysqlEnum, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import {
+  check,
+  date,
+  datetime,
+  index,
+  int,
+  mysqlEnum,
+  mysqlTable,
+  uniqueIndex,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import type { AnyMySqlColumn } from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { companies } from "./companies";
@@ -8,7 +18,9 @@ export const seasons = mysqlTable(
   "seasons",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references((): AnyMySqlColumn => companies.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references((): AnyMySqlColumn => companies.id),
     title: varchar("title", { length: 120 }).notNull(),
     startsOn: date("starts_on", { mode: "string" }).notNull(),
     endsOn: date("ends_on", { mode: "string" }).notNull(),
@@ -19,13 +31,22 @@ export const seasons = mysqlTable(
   ],
 );
 
-export const PRODUCTION_STAGES = ["planning", "auditions", "casting", "rehearsals", "running", "closed"] as const;
+export const PRODUCTION_STAGES = [
+  "planning",
+  "auditions",
+  "casting",
+  "rehearsals",
+  "running",
+  "closed",
+] as const;
 
 export const productions = mysqlTable(
   "productions",
   {
     id: id(),
-    companyId: uuid("company_id").notNull().references((): AnyMySqlColumn => companies.id),
+    companyId: uuid("company_id")
+      .notNull()
+      .references((): AnyMySqlColumn => companies.id),
     seasonId: uuid("season_id").references(() => seasons.id),
     title: varchar("title", { length: 160 }).notNull(),
     stage: mysqlEnum("stage", PRODUCTION_STAGES).notNull().default("planning"),
@@ -36,12 +57,17 @@ export const productions = mysqlTable(
     /** Before this the stage manager and others do not see who is cast. */
     castPublishedAt: datetime("cast_published_at", { mode: "date", fsp: 3 }),
     version: int("version").notNull().default(1),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     removedAt: datetime("removed_at", { mode: "date", fsp: 3 }),
   },
   (t) => [
     index("productions_company").on(t.companyId),
     check("productions_retention", sql`${t.retentionMonths} between 1 and 60`),
-    check("productions_run", sql`${t.opensOn} is null or ${t.closesOn} is null or ${t.opensOn} <= ${t.closesOn}`),
+    check(
+      "productions_run",
+      sql`${t.opensOn} is null or ${t.closesOn} is null or ${t.opensOn} <= ${t.closesOn}`,
+    ),
   ],
 );

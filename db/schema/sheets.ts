@@ -1,4 +1,14 @@
-import { datetime, date, foreignKey, index, int, json, mysqlTable, primaryKey, uniqueIndex } from "drizzle-orm/mysql-core";
+import {
+  datetime,
+  date,
+  foreignKey,
+  index,
+  int,
+  json,
+  mysqlTable,
+  primaryKey,
+  uniqueIndex,
+} from "drizzle-orm/mysql-core";
 import { id, uuid } from "../columns";
 import { people } from "./companies";
 import { productions } from "./seasons";
@@ -9,7 +19,9 @@ export const callSheetIssues = mysqlTable(
   "call_sheet_issues",
   {
     id: id(),
-    productionId: uuid("production_id").notNull().references(() => productions.id),
+    productionId: uuid("production_id")
+      .notNull()
+      .references(() => productions.id),
     localDate: date("local_date", { mode: "string" }).notNull(),
     number: int("number").notNull(),
     issuedAt: datetime("issued_at", { mode: "date", fsp: 3 }).notNull(),
@@ -25,12 +37,18 @@ export const acknowledgements = mysqlTable(
   "acknowledgements",
   {
     issueId: uuid("issue_id").notNull(),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     at: datetime("at", { mode: "date", fsp: 3 }).notNull(),
   },
   (t) => [
     primaryKey({ columns: [t.issueId, t.personId] }),
     index("acknowledgements_person").on(t.personId),
-    foreignKey({ name: "acknowledgements_issue_fk", columns: [t.issueId], foreignColumns: [callSheetIssues.id] }),
+    foreignKey({
+      name: "acknowledgements_issue_fk",
+      columns: [t.issueId],
+      foreignColumns: [callSheetIssues.id],
+    }),
   ],
 );

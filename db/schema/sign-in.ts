@@ -1,4 +1,13 @@
-import { datetime, index, int, mysqlTable, primaryKey, text, timestamp, varchar } from "drizzle-orm/mysql-core";
+import {
+  datetime,
+  index,
+  int,
+  mysqlTable,
+  primaryKey,
+  text,
+  timestamp,
+  varchar,
+} from "drizzle-orm/mysql-core";
 import { exactText, id, uuid } from "../columns";
 
 /** Logins, world-wide. What a company knows of a person is in `people`. */
@@ -8,13 +17,17 @@ export const users = mysqlTable("users", {
   email: exactText("email", { length: 254 }).notNull().unique(),
   emailVerified: timestamp("email_verified", { mode: "date", fsp: 3 }),
   image: varchar("image", { length: 255 }),
-  createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+  createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+    .notNull()
+    .$defaultFn(() => new Date()),
 });
 
 export const accounts = mysqlTable(
   "accounts",
   {
-    userId: uuid("user_id").notNull().references(() => users.id, { onDelete: "cascade" }),
+    userId: uuid("user_id")
+      .notNull()
+      .references(() => users.id, { onDelete: "cascade" }),
     type: varchar("type", { length: 255 }).notNull(),
     provider: varchar("provider", { length: 100 }).notNull(),
     providerAccountId: varchar("provider_account_id", { length: 150 }).notNull(),
@@ -33,11 +46,15 @@ export const sessions = mysqlTable(
   "sessions",
   {
     sessionToken: exactText("session_token", { length: 191 }).primaryKey(),
-    userId: uuid("user_id").notNull().references(() => users.id, { onDelete: "cascade" }),
+    userId: uuid("user_id")
+      .notNull()
+      .references(() => users.id, { onDelete: "cascade" }),
     expires: timestamp("expires", { mode: "date", fsp: 3 }).notNull(),
     /** What the person recognises a session by in their list. */
     device: varchar("device", { length: 120 }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [index("sessions_user").on(t.userId)],
 );
@@ -53,20 +70,28 @@ export const verificationTokens = mysqlTable(
 );
 
 export const passwordHashes = mysqlTable("password_hashes", {
-  userId: uuid("user_id").primaryKey().references(() => users.id, { onDelete: "cascade" }),
+  userId: uuid("user_id")
+    .primaryKey()
+    .references(() => users.id, { onDelete: "cascade" }),
   /** `scrypt$N$r$p$salt$key`, base64url parts. */
   hash: varchar("hash", { length: 255 }).notNull(),
-  updatedAt: datetime("updated_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+  updatedAt: datetime("updated_at", { mode: "date", fsp: 3 })
+    .notNull()
+    .$defaultFn(() => new Date()),
 });
 
 export const apiTokens = mysqlTable(
   "api_tokens",
   {
     id: id(),
-    userId: uuid("user_id").notNull().references(() => users.id, { onDelete: "cascade" }),
+    userId: uuid("user_id")
+      .notNull()
+      .references(() => users.id, { onDelete: "cascade" }),
     hash: exactText("hash", { length: 64 }).notNull().unique(),
     label: varchar("label", { length: 80 }).notNull(),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
     lastUsedAt: datetime("last_used_at", { mode: "date", fsp: 3 }),
     revokedAt: datetime("revoked_at", { mode: "date", fsp: 3 }),
   },

@@ -10,7 +10,9 @@ export const ranges = mysqlTable(
   "ranges",
   {
     id: id(),
-    personId: uuid("person_id").notNull().references(() => people.id),
+    personId: uuid("person_id")
+      .notNull()
+      .references(() => people.id),
     kind: mysqlEnum("kind", ["claimed", "heard"]).notNull(),
     low: tinyint("low").notNull(),
     high: tinyint("high").notNull(),
@@ -19,7 +21,9 @@ export const ranges = mysqlTable(
     /** Where it was heard. */
     productionId: uuid("production_id").references(() => productions.id),
     givenBy: uuid("given_by").references(() => users.id, { onDelete: "set null" }),
-    createdAt: datetime("created_at", { mode: "date", fsp: 3 }).notNull().$defaultFn(() => new Date()),
+    createdAt: datetime("created_at", { mode: "date", fsp: 3 })
+      .notNull()
+      .$defaultFn(() => new Date()),
   },
   (t) => [
     index("ranges_person").on(t.personId, t.kind, t.createdAt),

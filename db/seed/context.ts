@@ -35,13 +35,33 @@ export async function addUser(tx: Tx, name: string, email: string): Promise<Seed
 }
 
 /** A company's record of a person. Returns its id. */
-export async function joinCompany(tx: Tx, companyId: string, person: SeedPerson, extra: { phone?: string; pronouns?: string; minor?: boolean } = {}): Promise<string> {
+export async function joinCompany(
+  tx: Tx,
+  companyId: string,
+  person: SeedPerson,
+  extra: { phone?: string; pronouns?: string; minor?: boolean } = {},
+): Promise<string> {
   const id = newId();
-  await tx.insert(people).values({ id, companyId, userId: person.userId, name: person.name, email: person.email, ...extra });
+  await tx
+    .insert(people)
+    .values({
+      id,
+      companyId,
+      userId: person.userId,
+      name: person.name,
+      email: person.email,
+      ...extra,
+    });
   return id;
 }
 
 /** Opens a position. */
-export async function give(tx: Tx, companyId: string, personId: string, kind: PositionKind, productionId: string | null): Promise<void> {
+export async function give(
+  tx: Tx,
+  companyId: string,
+  personId: string,
+  kind: PositionKind,
+  productionId: string | null,
+): Promise<void> {
   await tx.insert(positions).values({ companyId, personId, kind, productionId });
 }

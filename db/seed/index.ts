@@ -13,7 +13,10 @@ import { seedTidewatcher } from "./the-tidewatcher";
  * DEMO_PASSWORD is everyone's password. Who can sign in is written to `.run/demo-people.json` for the start command.
  */
 async function seed(): Promise<void> {
-  const [already] = await db.select({ id: users.id }).from(users).where(eq(users.email, DEMO_PEOPLE.md.email));
+  const [already] = await db
+    .select({ id: users.id })
+    .from(users)
+    .where(eq(users.email, DEMO_PEOPLE.md.email));
   if (already) {
     console.log("The demo season is there already.");
     return;
@@ -31,7 +34,14 @@ async function seed(): Promise<void> {
   await mkdir(runDir, { recursive: true });
   await writeFile(
     path.resolve(runDir, process.env["DEMO_PEOPLE_FILE"] ?? "demo-people.json"),
-    JSON.stringify({ people: Object.values(DEMO_PEOPLE), links: [{ label: "Monitor, at the door today", path: `/door/${doorSecret}` }] }, null, 2),
+    JSON.stringify(
+      {
+        people: Object.values(DEMO_PEOPLE),
+        links: [{ label: "Monitor, at the door today", path: `/door/${doorSecret}` }],
+      },
+      null,
+      2,
+    ),
   );
   console.log("The demo season is loaded.");
 }

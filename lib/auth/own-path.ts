@@ -7,7 +7,6 @@ const LONGEST = 1000;
  * the sign-in pages themselves, which would go round in a circle.
  */
 export function ownPath(raw: unknown, fallback: string): string {
-   
   if (
     typeof raw !== "string" ||
     raw.length > LONGEST ||

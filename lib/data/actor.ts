@@ -29,7 +29,12 @@ export async function loadActor(userId: string): Promise<Actor | null> {
     if (row.personId === null || row.companyId === null) continue;
     known.set(row.personId, { id: row.personId, companyId: row.companyId });
     if (row.kind !== null) {
-      held.push({ kind: row.kind, companyId: row.companyId, productionId: row.productionId, personId: row.personId });
+      held.push({
+        kind: row.kind,
+        companyId: row.companyId,
+        productionId: row.productionId,
+        personId: row.personId,
+      });
     }
   }
   return {

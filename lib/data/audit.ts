@@ -16,7 +16,11 @@ export type AuditEntry = {
 };
 
 /** Writes who changed what, in the transaction of the change. */
-export async function recordAudit(tx: Db | Tx, actor: Pick<Actor, "userId" | "name"> | null, entry: AuditEntry): Promise<void> {
+export async function recordAudit(
+  tx: Db | Tx,
+  actor: Pick<Actor, "userId" | "name"> | null,
+  entry: AuditEntry,
+): Promise<void> {
   await tx.insert(auditEvents).values({
     companyId: entry.companyId,
     productionId: entry.productionId ?? null,

@@ -36,8 +36,14 @@ async function deliverOne(): Promise<"sent" | "failed" | "nothing due"> {
     if (!mail) return "nothing due";
     try {
       const template = mail.template as keyof MailTemplates;
-      await sendMail(mail.toEmail, writeMessage(template, mail.data as MailTemplates[typeof template]));
-      await tx.update(outbox).set({ sentAt: new Date(), data: {}, lastError: null }).where(eq(outbox.id, mail.id));
+      await sendMail(
+        mail.toEmail,
+        writeMessage(template, mail.data as MailTemplates[typeof template]),
+      );
+      await tx
+        .update(outbox)
+        .set({ sentAt: new Date(), data: {}, lastError: null })
+        .where(eq(outbox.id, mail.id));
       return "sent";
     } catch (error) {
       const tries = mail.tries + 1;

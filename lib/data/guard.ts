@@ -27,7 +27,11 @@ export type ProductionScope = {
  * Throws `not-found` when it does not exist or is not theirs to know of (the two must look the same), and
  * `not-allowed` when they know of it but may not do this.
  */
-export async function productionFor(actor: Actor, productionId: string, action: Action): Promise<ProductionScope> {
+export async function productionFor(
+  actor: Actor,
+  productionId: string,
+  action: Action,
+): Promise<ProductionScope> {
   const [row] = await db
     .select({
       id: productions.id,
@@ -49,7 +53,11 @@ export async function productionFor(actor: Actor, productionId: string, action: 
   if (!row) throw new AppError("not-found");
   const { castPublishedAt, ...rest } = row;
   const scope = { ...rest, castPublished: castPublishedAt !== null };
-  const subject = { companyId: row.companyId, productionId: row.id, castPublished: scope.castPublished };
+  const subject = {
+    companyId: row.companyId,
+    productionId: row.id,
+    castPublished: scope.castPublished,
+  };
   if (!can(actor, "production:see", subject)) throw new AppError("not-found");
   if (!can(actor, action, subject)) throw new AppError("not-allowed");
   return scope;
@@ -62,7 +70,13 @@ export async function companyFor(
   action: Action,
 ): Promise<{ id: string; name: string; zone: string; locale: string; paper: "A4" | "Letter" }> {
   const [row] = await db
-    .select({ id: companies.id, name: companies.name, zone: companies.zone, locale: companies.locale, paper: companies.paper })
+    .select({
+      id: companies.id,
+      name: companies.name,
+      zone: companies.zone,
+      locale: companies.locale,
+      paper: companies.paper,
+    })
     .from(companies)
     .where(eq(companies.id, companyId));
   if (!row || !can(actor, "company:see", { companyId })) throw new AppError("not-found");

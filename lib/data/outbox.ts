@@ -9,7 +9,13 @@ import type { MailTemplates } from "@/lib/services/mail/templates";
  */
 export async function queueMail<K extends keyof MailTemplates>(
   tx: Db | Tx,
-  mail: { companyId: string | null; to: string; template: K; data: MailTemplates[K]; dedupeKey: string },
+  mail: {
+    companyId: string | null;
+    to: string;
+    template: K;
+    data: MailTemplates[K];
+    dedupeKey: string;
+  },
 ): Promise<void> {
   await tx
     .insert(outbox)

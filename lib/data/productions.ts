@@ -7,20 +7,35 @@ import { companies, people, positions, productions, users } from "@/db/schema";
 import { AppError } from "@/lib/errors";
 import { can } from "@/lib/permissions/can";
 import type { Actor, PositionKind } from "@/lib/permissions/types";
-import type { changeProductionSchema, createCompanySchema, createProductionSchema } from "@/lib/schemas/productions";
+import type {
+  changeProductionSchema,
+  createCompanySchema,
+  createProductionSchema,
+} from "@/lib/schemas/productions";
 import { recordAudit } from "./audit";
 import { companyFor, personIn, productionFor } from "./guard";
 import { countTry, RATES } from "./rate-limit";
 import { inTransaction } from "./transaction";
 
 /** A new company, with the actor as its admin and as a music director in it. Returns its id. */
-export async function createCompany(actor: Actor, input: z.output<typeof createCompanySchema>): Promise<string> {
+export async function createCompany(
+  actor: Actor,
+  input: z.output<typeof createCompanySchema>,
+): Promise<string> {
   await countTry(RATES.companiesOfUser, actor.userId);
   return inTransaction(async (tx) => {
     const companyId = newId();
     const personId = newId();
     await tx.insert(companies).values({ id: companyId, ...input });
-    await tx.insert(people).values({ id: personId, companyId, userId: actor.userId, name: actor.name, email: actor.email });
+    await tx
+      .insert(people)
+      .values({
+        id: personId,
+        companyId,
+        userId: actor.userId,
+        name: actor.name,
+        email: actor.email,
+      });
     await tx.insert(positions).values([
       { companyId, personId, kind: "company_admin" },
       { companyId, personId, kind: "music_director" },
@@ -37,7 +52,10 @@ export async function createCompany(actor: Actor, input: z.output<typeof createC
 }
 
 /** A new production of a company, with the actor as its music director. Returns its id. */
-export async function createProduction(actor: Actor, input: z.output<typeof createProductionSchema>): Promise<string> {
+export async function createProduction(
+  actor: Actor,
+  input: z.output<typeof createProductionSchema>,
+): Promise<string> {
   const company = await companyFor(actor, input.companyId, "production:create");
   const personId = personIn(actor, company.id);
   return inTransaction(async (tx) => {
@@ -49,7 +67,9 @@ export async function createProduction(actor: Actor, input: z.output<typeof crea
       opensOn: input.opensOn,
       closesOn: input.closesOn,
     });
-    await tx.insert(positions).values({ companyId: company.id, personId, productionId, kind: "music_director" });
+    await tx
+      .insert(positions)
+      .values({ companyId: company.id, personId, productionId, kind: "music_director" });
     await recordAudit(tx, actor, {
       companyId: company.id,
       productionId,
@@ -63,7 +83,10 @@ export async function createProduction(actor: Actor, input: z.output<typeof crea
 }
 
 /** Changes title, stage and dates. Throws `stale` when someone else changed it since `version` was read. */
-export async function changeProduction(actor: Actor, input: z.output<typeof changeProductionSchema>): Promise<void> {
+export async function changeProduction(
+  actor: Actor,
+  input: z.output<typeof changeProductionSchema>,
+): Promise<void> {
   const scope = await productionFor(actor, input.productionId, "production:change");
   await inTransaction(async (tx) => {
     const [result] = await tx
@@ -104,7 +127,9 @@ export type ProductionListed = {
 /** Every production the actor may see, in all their companies, in order of company and opening. */
 export async function listProductions(actor: Actor): Promise<ProductionListed[]> {
   const mine = actor.positions.flatMap((p) => (p.productionId === null ? [] : [p.productionId]));
-  const administered = actor.positions.flatMap((p) => (p.productionId === null && p.kind === "company_admin" ? [p.companyId] : []));
+  const administered = actor.positions.flatMap((p) =>
+    p.productionId === null && p.kind === "company_admin" ? [p.companyId] : [],
+  );
   if (mine.length === 0 && administered.length === 0) return [];
   const rows = await db
     .select({
@@ -130,7 +155,9 @@ export async function listProductions(actor: Actor): Promise<ProductionListed[]>
     )
     .orderBy(asc(companies.name), asc(productions.opensOn), asc(productions.title));
   return rows
-    .filter((row) => can(actor, "production:see", { companyId: row.companyId, productionId: row.id }))
+    .filter((row) =>
+      can(actor, "production:see", { companyId: row.companyId, productionId: row.id }),
+    )
     .map((row) => ({
       ...row,
       positions: actor.positions.filter((p) => p.productionId === row.id).map((p) => p.kind),
@@ -138,7 +165,9 @@ export async function listProductions(actor: Actor): Promise<ProductionListed[]>
 }
 
 /** The companies in which the actor may create a production. */
-export async function listCompaniesToCreateIn(actor: Actor): Promise<{ id: string; name: string }[]> {
+export async function listCompaniesToCreateIn(
+  actor: Actor,
+): Promise<{ id: string; name: string }[]> {
   const ids = [...new Set(actor.positions.map((p) => p.companyId))].filter((companyId) =>
     can(actor, "production:create", { companyId }),
   );
@@ -151,7 +180,9 @@ export async function listCompaniesToCreateIn(actor: Actor): Promise<{ id: strin
 }
 
 /** The companies the actor belongs to. */
-export async function listCompanies(actor: Actor): Promise<{ id: string; name: string; zone: string }[]> {
+export async function listCompanies(
+  actor: Actor,
+): Promise<{ id: string; name: string; zone: string }[]> {
   const ids = [...new Set(actor.people.map((p) => p.companyId))];
   if (ids.length === 0) return [];
   return db

@@ -27,7 +27,9 @@ export const RATES = {
  */
 export async function countTry(rule: RateRule, who: string): Promise<void> {
   const now = Date.now();
-  const windowStart = new Date(Math.floor(now / (rule.windowSeconds * 1000)) * rule.windowSeconds * 1000);
+  const windowStart = new Date(
+    Math.floor(now / (rule.windowSeconds * 1000)) * rule.windowSeconds * 1000,
+  );
   const key = `${rule.name}:${createHash("sha256").update(who).digest("base64url")}`;
   await db
     .insert(rateCounters)
@@ -39,11 +41,17 @@ export async function countTry(rule: RateRule, who: string): Promise<void> {
     .where(and(eq(rateCounters.key, key), gte(rateCounters.windowStart, windowStart)));
   if ((row?.hits ?? 0) > rule.limit) {
     const retryAfter = Math.ceil((windowStart.getTime() + rule.windowSeconds * 1000 - now) / 1000);
-    throw new AppError("too-many", `That was tried too often. Wait ${String(Math.ceil(retryAfter / 60))} min and try again.`, { retryAfter });
+    throw new AppError(
+      "too-many",
+      `That was tried too often. Wait ${String(Math.ceil(retryAfter / 60))} min and try again.`,
+      { retryAfter },
+    );
   }
 }
 
 /** Forgets windows that are over. Run now and then by the worker. */
 export async function sweepRateCounters(): Promise<void> {
-  await db.delete(rateCounters).where(lt(rateCounters.windowStart, new Date(Date.now() - 86_400_000)));
+  await db
+    .delete(rateCounters)
+    .where(lt(rateCounters.windowStart, new Date(Date.now() - 86_400_000)));
 }

@@ -22,15 +22,25 @@ export async function createToken(actor: Actor, label: string): Promise<string> 
 
 /** For the command line on the server itself: a token for the login with this address. Throws `not-found`. */
 export async function createTokenByEmail(email: string): Promise<string> {
-  const [user] = await db.select({ id: users.id }).from(users).where(eq(users.email, email.trim().toLowerCase()));
+  const [user] = await db
+    .select({ id: users.id })
+    .from(users)
+    .where(eq(users.email, email.trim().toLowerCase()));
   if (!user) throw new AppError("not-found", `Nobody signs in as ${email}.`);
   return insertToken(user.id, "Made on the command line");
 }
 
 /** The actor's own tokens that still work, newest first. */
-export async function listTokens(actor: Actor): Promise<{ id: string; label: string; createdAt: Date; lastUsedAt: Date | null }[]> {
+export async function listTokens(
+  actor: Actor,
+): Promise<{ id: string; label: string; createdAt: Date; lastUsedAt: Date | null }[]> {
   return db
-    .select({ id: apiTokens.id, label: apiTokens.label, createdAt: apiTokens.createdAt, lastUsedAt: apiTokens.lastUsedAt })
+    .select({
+      id: apiTokens.id,
+      label: apiTokens.label,
+      createdAt: apiTokens.createdAt,
+      lastUsedAt: apiTokens.lastUsedAt,
+    })
     .from(apiTokens)
     .where(and(eq(apiTokens.userId, actor.userId), isNull(apiTokens.revokedAt)))
     .orderBy(desc(apiTokens.createdAt));
@@ -41,7 +51,13 @@ export async function revokeToken(actor: Actor, tokenId: string): Promise<void> 
   const [result] = await db
     .update(apiTokens)
     .set({ revokedAt: new Date() })
-    .where(and(eq(apiTokens.id, tokenId), eq(apiTokens.userId, actor.userId), isNull(apiTokens.revokedAt)));
+    .where(
+      and(
+        eq(apiTokens.id, tokenId),
+        eq(apiTokens.userId, actor.userId),
+        isNull(apiTokens.revokedAt),
+      ),
+    );
   if (result.affectedRows === 0) throw new AppError("not-found", "That token is already revoked.");
 }
 

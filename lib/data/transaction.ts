@@ -11,7 +11,8 @@ const LOCK_WAIT = 1205;
 /** The database's error number, or null if the error is none of its. */
 export function databaseErrno(error: unknown): number | null {
   const cause = error instanceof DrizzleQueryError ? error.cause : error;
-  if (cause instanceof Error && "errno" in cause && typeof cause.errno === "number") return cause.errno;
+  if (cause instanceof Error && "errno" in cause && typeof cause.errno === "number")
+    return cause.errno;
   return null;
 }
 
@@ -34,7 +35,9 @@ export async function inTransaction<T>(work: (tx: Tx) => Promise<T>): Promise<T>
     } catch (error) {
       const errno = databaseErrno(error);
       if ((errno !== DEADLOCK && errno !== LOCK_WAIT) || attempt >= 5) throw error;
-      await new Promise((resolve) => setTimeout(resolve, 10 * attempt * attempt + Math.random() * 20));
+      await new Promise((resolve) =>
+        setTimeout(resolve, 10 * attempt * attempt + Math.random() * 20),
+      );
     }
   }
 }

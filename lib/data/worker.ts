@@ -17,7 +17,10 @@ export function startWorker(): void {
     if (busy) return;
     busy = true;
     rounds += 1;
-    const work = rounds % SWEEP_EVERY === 0 ? sweepRateCounters().then(() => deliverOutbox()) : deliverOutbox();
+    const work =
+      rounds % SWEEP_EVERY === 0
+        ? sweepRateCounters().then(() => deliverOutbox())
+        : deliverOutbox();
     work
       .catch((error: unknown) => {
         log.error({ err: faultOf(error) }, "worker round failed");

@@ -9,12 +9,26 @@ const RULES = {
   "production:see": { production: ["member"], company: ["company_admin"] },
   "production:change": { production: ["music_director", "assistant_md"] },
   "score:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
     company: ["company_admin"],
   },
   "score:change": { production: ["music_director", "assistant_md"] },
   "auditions:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
   },
   "auditions:plan": { production: ["music_director", "assistant_md", "stage_manager"] },
   "sign-up:change": { production: ["music_director", "assistant_md", "stage_manager"], own: true },
@@ -26,7 +40,14 @@ const RULES = {
     production: ["music_director", "assistant_md", "director", "choreographer", "producer"],
   },
   "callbacks:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
   },
   "callbacks:publish": { production: ["music_director", "assistant_md"] },
   "casting:see": {
@@ -35,7 +56,14 @@ const RULES = {
   },
   "casting:choose": { production: ["music_director", "assistant_md"] },
   "calls:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
     company: ["company_admin"],
   },
   "calls:change": { production: ["music_director", "assistant_md", "stage_manager"] },
@@ -43,7 +71,14 @@ const RULES = {
   "conflicts:agree": { production: ["music_director", "assistant_md", "stage_manager"] },
   "sheets:issue": { production: ["music_director", "assistant_md", "stage_manager"] },
   "sheets:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
     company: ["company_admin"],
   },
   "contacts:read": {
@@ -51,16 +86,32 @@ const RULES = {
     company: ["company_admin"],
   },
   "people:read": {
-    production: ["music_director", "assistant_md", "stage_manager", "director", "choreographer", "producer"],
+    production: [
+      "music_director",
+      "assistant_md",
+      "stage_manager",
+      "director",
+      "choreographer",
+      "producer",
+    ],
     company: ["company_admin"],
   },
-  "pianists:see": { production: ["music_director", "assistant_md", "stage_manager"], company: ["company_admin"] },
+  "pianists:see": {
+    production: ["music_director", "assistant_md", "stage_manager"],
+    company: ["company_admin"],
+  },
   "pianists:assign": { production: ["music_director", "assistant_md"] },
   "positions:manage": { production: ["music_director"], company: ["company_admin"] },
   "company:see": { company: ["member"] },
-  "rooms:manage": { company: ["company_admin"], anyProduction: ["stage_manager", "music_director"] },
+  "rooms:manage": {
+    company: ["company_admin"],
+    anyProduction: ["stage_manager", "music_director"],
+  },
   "members:manage": { company: ["company_admin"] },
-  "trail:read": { production: ["music_director", "assistant_md", "stage_manager"], company: ["company_admin"] },
+  "trail:read": {
+    production: ["music_director", "assistant_md", "stage_manager"],
+    company: ["company_admin"],
+  },
   "own:change": { own: true },
 } as const satisfies Record<string, Rule>;
 
@@ -88,19 +139,24 @@ export function can(actor: Actor | null, action: Action, subject: Subject): bool
   if (!actor) return false;
   const rule: Rule = RULES[action];
   if (rule.own && subject.personId !== undefined) {
-    if (actor.people.some((p) => p.id === subject.personId && p.companyId === subject.companyId)) return true;
+    if (actor.people.some((p) => p.id === subject.personId && p.companyId === subject.companyId))
+      return true;
   }
   return actor.positions.some((position) => {
     if (position.companyId !== subject.companyId) return false;
     if (position.productionId === null) return holds(rule.company, position.kind);
     if (holds(rule.anyProduction, position.kind)) return true;
     if (rule.company?.includes("member") === true) return true;
-    if (subject.productionId === undefined || position.productionId !== subject.productionId) return false;
+    if (subject.productionId === undefined || position.productionId !== subject.productionId)
+      return false;
     if (holds(rule.production, position.kind)) return true;
     return subject.castPublished === true && holds(rule.oncePublished, position.kind);
   });
 }
 
-function holds(list: readonly (PositionKind | "member")[] | undefined, kind: PositionKind): boolean {
+function holds(
+  list: readonly (PositionKind | "member")[] | undefined,
+  kind: PositionKind,
+): boolean {
   return list?.some((entry) => entry === "member" || entry === kind) ?? false;
 }

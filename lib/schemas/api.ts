@@ -14,7 +14,10 @@ const singer = z
     comfortableLow: pitch.optional(),
     comfortableHigh: pitch.optional(),
   })
-  .refine((s) => s.low <= s.high, { path: ["low"], message: "The lowest note lies above the highest." });
+  .refine((s) => s.low <= s.high, {
+    path: ["low"],
+    message: "The lowest note lies above the highest.",
+  });
 
 const line = z
   .object({
@@ -24,7 +27,10 @@ const line = z
     optionalHigh: pitch.optional(),
     optionalLow: pitch.optional(),
   })
-  .refine((l) => l.low <= l.high, { path: ["low"], message: "The lowest note lies above the highest." });
+  .refine((l) => l.low <= l.high, {
+    path: ["low"],
+    message: "The lowest note lies above the highest.",
+  });
 
 export const rangeFitRequest = z.object({ singer, line });
 
@@ -32,7 +38,10 @@ export const rangeFitResponse = z.object({
   verdict: z.enum(["fits", "stretch", "out"]),
   shortBelow: z.number().int(),
   shortAbove: z.number().int(),
-  shareOutside: z.number().nullable().describe("Part of the sung time outside the range; null when no histogram says"),
+  shareOutside: z
+    .number()
+    .nullable()
+    .describe("Part of the sung time outside the range; null when no histogram says"),
   shareOutsideComfort: z.number().nullable(),
   lowerReserve: z.number().int(),
   upperReserve: z.number().int(),
@@ -75,5 +84,9 @@ export const vocalLinesResponse = z.object({
 });
 
 export const apiError = z.object({
-  error: z.object({ code: z.string().describe("area.reason"), message: z.string(), path: z.string().optional() }),
+  error: z.object({
+    code: z.string().describe("area.reason"),
+    message: z.string(),
+    path: z.string().optional(),
+  }),
 });

@@ -33,7 +33,9 @@ export const optionalLocalDate = z
   .nullish()
   .transform((day) => (day === undefined || day === null || day === "" ? null : day));
 
-export const localTimeField = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, "Write a time such as 18:30.");
+export const localTimeField = z
+  .string()
+  .regex(/^([01]\d|2[0-3]):[0-5]\d$/, "Write a time such as 18:30.");
 
 /** An IANA zone that this server knows. */
 export const zoneField = z.string().refine((zone) => {

@@ -10,7 +10,20 @@ export const log = pino({
   level: env().LOG_LEVEL,
   base: null,
   redact: {
-    paths: ["email", "name", "phone", "to", "password", "token", "*.email", "*.name", "*.phone", "*.to", "*.password", "*.token"],
+    paths: [
+      "email",
+      "name",
+      "phone",
+      "to",
+      "password",
+      "token",
+      "*.email",
+      "*.name",
+      "*.phone",
+      "*.to",
+      "*.password",
+      "*.token",
+    ],
     censor: "[kept out]",
   },
 });

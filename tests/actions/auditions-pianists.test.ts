@@ -88,23 +88,19 @@ describe("pianists of a day", () => {
       productionId: world.productionId,
     });
     const otherRecord = newId();
-    await db
-      .insert(t.people)
-      .values({
-        id: otherRecord,
-        companyId: world.otherCompanyId,
-        userId: both.userId,
-        name: "Ada Twofold",
-        email: both.email,
-      });
-    await db
-      .insert(t.positions)
-      .values({
-        companyId: world.otherCompanyId,
-        personId: otherRecord,
-        productionId: world.otherProductionId,
-        kind: "accompanist",
-      });
+    await db.insert(t.people).values({
+      id: otherRecord,
+      companyId: world.otherCompanyId,
+      userId: both.userId,
+      name: "Ada Twofold",
+      email: both.email,
+    });
+    await db.insert(t.positions).values({
+      companyId: world.otherCompanyId,
+      personId: otherRecord,
+      productionId: world.otherProductionId,
+      kind: "accompanist",
+    });
     as(world.people.outsiderMd.userId);
     const other = await createDay({
       ...dayInput(world, "2027-03-20", [world.otherRoomId]),

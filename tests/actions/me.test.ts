@@ -21,15 +21,13 @@ let secondRecord: string;
 beforeAll(async () => {
   world = await makeWorld();
   secondRecord = newId();
-  await db
-    .insert(people)
-    .values({
-      id: secondRecord,
-      companyId: world.otherCompanyId,
-      userId: world.people.actor.userId,
-      name: "Wren Tallis",
-      email: world.people.actor.email,
-    });
+  await db.insert(people).values({
+    id: secondRecord,
+    companyId: world.otherCompanyId,
+    userId: world.people.actor.userId,
+    name: "Wren Tallis",
+    email: world.people.actor.email,
+  });
 });
 beforeEach(async () => {
   await db.delete(ranges);

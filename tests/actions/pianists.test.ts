@@ -57,50 +57,42 @@ async function auditionRoom(): Promise<void> {
   const slotId = newId();
   const signUpId = newId();
   const at = (time: string) => new Date(`2027-03-20T${time}:00Z`);
-  await db
-    .insert(t.auditionDays)
-    .values({
-      id: dayId,
-      productionId: world.productionId,
-      localDate: "2027-03-20",
-      zone: "Europe/London",
-      slotMinutes: 8,
-    });
-  await db
-    .insert(t.auditionRooms)
-    .values({
-      id: auditionRoomId,
-      dayId,
-      roomId: world.roomId,
-      opensAt: at("10:00"),
-      closesAt: at("12:00"),
-    });
+  await db.insert(t.auditionDays).values({
+    id: dayId,
+    productionId: world.productionId,
+    localDate: "2027-03-20",
+    zone: "Europe/London",
+    slotMinutes: 8,
+  });
+  await db.insert(t.auditionRooms).values({
+    id: auditionRoomId,
+    dayId,
+    roomId: world.roomId,
+    opensAt: at("10:00"),
+    closesAt: at("12:00"),
+  });
   await db.insert(t.slots).values([
     { id: slotId, auditionRoomId, kind: "slot", startsAt: at("10:00"), endsAt: at("10:08") },
     { auditionRoomId, kind: "rest", startsAt: at("10:08"), endsAt: at("10:18") },
   ]);
-  await db
-    .insert(t.signUps)
-    .values({
-      id: signUpId,
-      productionId: world.productionId,
-      personId: world.cover.personId,
-      place: 1,
-      state: "confirmed",
-      song: "Fairy Lullaby",
-      bars: 16,
-    });
+  await db.insert(t.signUps).values({
+    id: signUpId,
+    productionId: world.productionId,
+    personId: world.cover.personId,
+    place: 1,
+    state: "confirmed",
+    song: "Fairy Lullaby",
+    bars: 16,
+  });
   await db.insert(t.slotAssignments).values({ slotId, signUpId, dayId });
-  await db
-    .insert(t.pianistSessions)
-    .values({
-      productionId: world.productionId,
-      personId: world.people.accompanist.personId,
-      bookeeId: world.people.accompanist.userId,
-      auditionRoomId,
-      startsAt: at("10:00"),
-      endsAt: at("11:00"),
-    });
+  await db.insert(t.pianistSessions).values({
+    productionId: world.productionId,
+    personId: world.people.accompanist.personId,
+    bookeeId: world.people.accompanist.userId,
+    auditionRoomId,
+    startsAt: at("10:00"),
+    endsAt: at("11:00"),
+  });
 }
 
 describe("the pianists of a production", () => {

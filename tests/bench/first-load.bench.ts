@@ -6,7 +6,10 @@ import type { BenchContext } from "./lib/sign-in";
 /** First-load JavaScript of a page on the wire (compressed bytes of every script the browser fetches), beside a bare page. */
 export default async function firstLoad(ctx: BenchContext): Promise<object[]> {
   const bare = await serveBareApp(ctx);
-  const browser = await chromium.launch({ executablePath: ctx.chromium, args: ["--no-sandbox", "--disable-gpu", "--disable-quic", "--disable-background-networking"] });
+  const browser = await chromium.launch({
+    executablePath: ctx.chromium,
+    args: ["--no-sandbox", "--disable-gpu", "--disable-quic", "--disable-background-networking"],
+  });
   const measure = async (url: string, cookie?: string): Promise<number> => {
     const context = await browser.newContext();
     if (cookie) {
@@ -50,7 +53,13 @@ export default async function firstLoad(ctx: BenchContext): Promise<object[]> {
     ];
     for (const [page, path, cookie, goal] of subjects) {
       const kb = await measure(ctx.baseUrl + path, cookie);
-      lines.push({ page, kb, bareKb, overBareKb: kb - bareKb, goal: `≤ bare + ${String(goal)} kB` });
+      lines.push({
+        page,
+        kb,
+        bareKb,
+        overBareKb: kb - bareKb,
+        goal: `≤ bare + ${String(goal)} kB`,
+      });
     }
     return lines;
   } finally {

@@ -5,24 +5,35 @@ import type { BenchContext } from "./lib/sign-in";
 
 type Times = { p50: number; p95: number; perSecond: number };
 
-const nearestRank = (sorted: number[], p: number): number => sorted[Math.max(0, Math.ceil(p * sorted.length) - 1)] ?? NaN;
+const nearestRank = (sorted: number[], p: number): number =>
+  sorted[Math.max(0, Math.ceil(p * sorted.length) - 1)] ?? NaN;
 
 async function load(url: string, connections: number, cookie?: string): Promise<Times> {
   const run = (duration: number, times: number[]) =>
     new Promise<autocannon.Result>((resolve, reject) => {
-      const instance = autocannon({ url, connections, duration, headers: cookie ? { cookie } : {} }, (error: Error | null, result) => {
-        if (error) reject(error);
-        else resolve(result);
-      });
+      const instance = autocannon(
+        { url, connections, duration, headers: cookie ? { cookie } : {} },
+        (error: Error | null, result) => {
+          if (error) reject(error);
+          else resolve(result);
+        },
+      );
       instance.on("response", (_client, _status, _bytes, milliseconds) => times.push(milliseconds));
     });
   await run(2, []); // to be warm
   const times: number[] = [];
   const result = await run(5, times);
-  if (result.non2xx > 0 || result.errors > 0) throw new Error(`${url}: ${String(result.non2xx)} answers that were not 200, ${String(result.errors)} errors`);
+  if (result.non2xx > 0 || result.errors > 0)
+    throw new Error(
+      `${url}: ${String(result.non2xx)} answers that were not 200, ${String(result.errors)} errors`,
+    );
   times.sort((a, b) => a - b);
   const round = (ms: number) => Number(ms.toFixed(1));
-  return { p50: round(nearestRank(times, 0.5)), p95: round(nearestRank(times, 0.95)), perSecond: Math.round(result.requests.average) };
+  return {
+    p50: round(nearestRank(times, 0.5)),
+    p95: round(nearestRank(times, 0.95)),
+    perSecond: Math.round(result.requests.average),
+  };
 }
 
 /** A server-rendered page at 1 and 20 clients beside a bare page of the same framework that reads one row. Milliseconds. */
@@ -44,7 +55,15 @@ export default async function pages(ctx: BenchContext): Promise<object[]> {
       for (const subject of subjects) {
         ctx.log(`${subject.page}, ${String(clients)} clients`);
         const ours = await load(ctx.baseUrl + subject.path, clients, subject.cookie);
-        lines.push({ page: subject.page, clients, ours, bare: yardstick, ratioP50: Number((ours.p50 / yardstick.p50).toFixed(2)), ratioP95: Number((ours.p95 / yardstick.p95).toFixed(2)), goal: "ratio ≤ 2" });
+        lines.push({
+          page: subject.page,
+          clients,
+          ours,
+          bare: yardstick,
+          ratioP50: Number((ours.p50 / yardstick.p50).toFixed(2)),
+          ratioP95: Number((ours.p95 / yardstick.p95).toFixed(2)),
+          goal: "ratio ≤ 2",
+        });
       }
     }
     return lines;

@@ -21,9 +21,15 @@ async function perSecond(work: () => Promise<unknown>, seconds = 3): Promise<num
 
 /** The one-row query (a production, with its company and the permission to see it) through the data layer, and the same row through mysql2 alone. One after another, per second. */
 export default async function query(ctx: BenchContext): Promise<object> {
-  const [user] = await db.select({ id: users.id }).from(users).where(eq(users.email, demoEmail(ctx, /^Music director/)));
+  const [user] = await db
+    .select({ id: users.id })
+    .from(users)
+    .where(eq(users.email, demoEmail(ctx, /^Music director/)));
   const actor = user && (await loadActor(user.id));
-  const [row] = await db.select({ id: productions.id }).from(productions).where(eq(productions.title, "The Tidewatcher"));
+  const [row] = await db
+    .select({ id: productions.id })
+    .from(productions)
+    .where(eq(productions.title, "The Tidewatcher"));
   if (!actor || !row) throw new Error("the demo season is not loaded");
   const pool = mysql.createPool({ uri: ctx.databaseUrl, timezone: "Z" });
   const idBytes = Buffer.from(row.id.replaceAll("-", ""), "hex");
@@ -33,5 +39,9 @@ export default async function query(ctx: BenchContext): Promise<object> {
   const layer = await perSecond(() => productionFor(actor, row.id, "score:read"));
   await pool.end();
   await closePool();
-  return { layerPerSecond: layer, mysql2PerSecond: alone, ratio: Number((layer / alone).toFixed(2)) };
+  return {
+    layerPerSecond: layer,
+    mysql2PerSecond: alone,
+    ratio: Number((layer / alone).toFixed(2)),
+  };
 }

@@ -6,7 +6,11 @@ import type { BenchContext } from "./lib/sign-in";
 /** Runs `npm start` in a folder until it prints an address that answers. Seconds, and how to stop it. */
 async function startOnce(dir: string): Promise<number> {
   const started = performance.now();
-  const child = spawn("npm", ["start"], { cwd: dir, stdio: ["ignore", "pipe", "pipe"], detached: true });
+  const child = spawn("npm", ["start"], {
+    cwd: dir,
+    stdio: ["ignore", "pipe", "pipe"],
+    detached: true,
+  });
   let output = "";
   const address = await new Promise<string>((resolve, reject) => {
     const read = (chunk: Buffer) => {

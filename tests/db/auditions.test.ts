@@ -83,30 +83,26 @@ describe("the database refuses", () => {
 
     const pianist = world.people.accompanist;
     const play = (auditionRoomId: string, from: string, to: string) =>
-      db
-        .insert(t.pianistSessions)
-        .values({
-          productionId: world.productionId,
-          personId: pianist.personId,
-          bookeeId: pianist.userId,
-          auditionRoomId,
-          startsAt: at(from),
-          endsAt: at(to),
-        });
+      db.insert(t.pianistSessions).values({
+        productionId: world.productionId,
+        personId: pianist.personId,
+        bookeeId: pianist.userId,
+        auditionRoomId,
+        startsAt: at(from),
+        endsAt: at(to),
+      });
     expect(await keyOf(play(room, "10:00", "12:00"))).toBeNull();
     expect(await keyOf(play(otherRoom, "09:00", "10:01"))).toBe("pianist_sessions_held");
     expect(await keyOf(play(otherRoom, "12:00", "12:30"))).toBeNull();
 
     expect(
       await keyOf(
-        db
-          .insert(t.slots)
-          .values({
-            auditionRoomId: room,
-            kind: "slot",
-            startsAt: at("10:04"),
-            endsAt: at("10:06"),
-          }),
+        db.insert(t.slots).values({
+          auditionRoomId: room,
+          kind: "slot",
+          startsAt: at("10:04"),
+          endsAt: at("10:06"),
+        }),
       ),
     ).toBe("slots_held");
   });

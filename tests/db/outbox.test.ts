@@ -20,7 +20,11 @@ const server = new SMTPServer({
   },
   onData: (stream, session, done) => {
     void simpleParser(stream).then((mail) => {
-      received.push({ to: session.envelope.rcptTo[0]?.address ?? "", subject: mail.subject ?? "", text: mail.text ?? "" });
+      received.push({
+        to: session.envelope.rcptTo[0]?.address ?? "",
+        subject: mail.subject ?? "",
+        text: mail.text ?? "",
+      });
       done();
     });
   },
@@ -34,7 +38,14 @@ beforeAll(async () => {
     return { env: () => ({ ...real.env(), SMTP_URL: `smtp://127.0.0.1:${String(port)}` }) };
   });
 });
-afterAll(() => new Promise<void>((resolve) => server.close(() => { resolve(); })));
+afterAll(
+  () =>
+    new Promise<void>((resolve) =>
+      server.close(() => {
+        resolve();
+      }),
+    ),
+);
 beforeEach(async () => {
   await emptyDatabase();
   received.length = 0;
@@ -42,7 +53,13 @@ beforeEach(async () => {
 });
 
 const mail = (dedupeKey: string) =>
-  queueMail(db, { companyId: null, to: "singer@people.example", template: "sign-in", data: { link: "https://cembalo.example/sign-in/link?token=x", minutes: 30 }, dedupeKey });
+  queueMail(db, {
+    companyId: null,
+    to: "singer@people.example",
+    template: "sign-in",
+    data: { link: "https://cembalo.example/sign-in/link?token=x", minutes: 30 },
+    dedupeKey,
+  });
 
 test("queued twice, and worked on by three at once, a message goes out once", async () => {
   const { deliverOutbox: deliver } = await freshDelivery();
@@ -51,7 +68,10 @@ test("queued twice, and worked on by three at once, a message goes out once", as
   const sent = await Promise.all([deliver(), deliver(), deliver()]);
   expect(sent.reduce((a, b) => a + b, 0)).toBe(1);
   expect(received).toHaveLength(1);
-  expect(received[0]).toMatchObject({ to: "singer@people.example", subject: "Your link to sign in to Cembalo" });
+  expect(received[0]).toMatchObject({
+    to: "singer@people.example",
+    subject: "Your link to sign in to Cembalo",
+  });
   expect(received[0]?.text).toContain("https://cembalo.example/sign-in/link?token=x");
   expect(await deliver()).toBe(0);
   // The secret in the link does not stay behind in the database.
@@ -78,7 +98,13 @@ test("a message the server does not take stays, is tried again later, and then g
 test("a message whose transaction is rolled back never existed", async () => {
   await expect(
     db.transaction(async (tx) => {
-      await queueMail(tx, { companyId: null, to: "a@people.example", template: "sign-in", data: { link: "x", minutes: 1 }, dedupeKey: "three" });
+      await queueMail(tx, {
+        companyId: null,
+        to: "a@people.example",
+        template: "sign-in",
+        data: { link: "x", minutes: 1 },
+        dedupeKey: "three",
+      });
       throw new Error("changed my mind");
     }),
   ).rejects.toThrow("changed my mind");
@@ -87,9 +113,13 @@ test("a message whose transaction is rolled back never existed", async () => {
 
 test("tries are counted together by everyone who counts, and the window says how long to wait", async () => {
   const rule = { name: "test", limit: 10, windowSeconds: 900 };
-  const tries = await Promise.allSettled(Array.from({ length: 25 }, () => countTry(rule, "somebody@people.example")));
+  const tries = await Promise.allSettled(
+    Array.from({ length: 25 }, () => countTry(rule, "somebody@people.example")),
+  );
   expect(tries.filter((r) => r.status === "fulfilled").length).toBeLessThanOrEqual(10);
-  await expect(countTry(rule, "somebody@people.example")).rejects.toMatchObject({ code: "too-many" });
+  await expect(countTry(rule, "somebody@people.example")).rejects.toMatchObject({
+    code: "too-many",
+  });
   await expect(countTry(rule, "another@people.example")).resolves.toBeUndefined();
   const keys = await db.select({ key: t.rateCounters.key }).from(t.rateCounters);
   expect(JSON.stringify(keys)).not.toContain("somebody");

@@ -6,4 +6,10 @@ import type { Doors } from "./doors/types";
 export type { Door } from "./doors/types";
 
 /** Every server action and route handler of the product, and who may pass it. */
-export const DOORS: Doors = { ...AROUND, ...PRODUCTION, ...AUDITION, ...REHEARSAL, ...COMPANY_DOORS };
+export const DOORS: Doors = {
+  ...AROUND,
+  ...PRODUCTION,
+  ...AUDITION,
+  ...REHEARSAL,
+  ...COMPANY_DOORS,
+};

@@ -24,4 +24,6 @@ export type Persona = keyof typeof PERSONAS;
 export const MUSIC: Persona[] = ["md", "assistant"];
 export const TABLE: Persona[] = ["director", "choreographer", "producer"];
 export const PLANNERS: Persona[] = ["md", "assistant", "stageManager"];
-export const SIGNED_IN = (Object.keys(PERSONAS) as Persona[]).filter((persona) => persona !== "nobody");
+export const SIGNED_IN = (Object.keys(PERSONAS) as Persona[]).filter(
+  (persona) => persona !== "nobody",
+);

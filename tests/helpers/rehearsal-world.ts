@@ -26,20 +26,18 @@ export async function makeRehearsalWorld() {
   });
   const numbers = [newId(), newId(), newId()] as const;
   const titles = ["Low Water", "A Letter from Ansel", "The Ness Light"];
-  await db
-    .insert(t.numbers)
-    .values(
-      numbers.map((id, index) => ({
-        id,
-        productionId,
-        label: String(index + 1),
-        title: titles[index] ?? "",
-        place: index + 1,
-        keyName: "G",
-        keyFifths: 1,
-        tempo: 96,
-      })),
-    );
+  await db.insert(t.numbers).values(
+    numbers.map((id, index) => ({
+      id,
+      productionId,
+      label: String(index + 1),
+      title: titles[index] ?? "",
+      place: index + 1,
+      keyName: "G",
+      keyFifths: 1,
+      tempo: 96,
+    })),
+  );
   const maren = newId();
   const ansel = newId();
   const pip = newId();

@@ -4,14 +4,23 @@ import { beforeEach, vi } from "vitest";
 // permissions and the queries are the real ones on a real database.
 const asking = vi.hoisted(() => ({ userId: null as string | null }));
 vi.mock("@/lib/auth/current-user", () => ({ currentUserId: () => Promise.resolve(asking.userId) }));
-vi.mock("react", async (original) => ({ ...(await original<typeof import("react")>()), cache: <T>(fn: T) => fn }));
-vi.mock("next/cache", () => ({ revalidatePath: vi.fn(), revalidateTag: vi.fn(), refresh: vi.fn() }));
+vi.mock("react", async (original) => ({
+  ...(await original<typeof import("react")>()),
+  cache: <T>(fn: T) => fn,
+}));
+vi.mock("next/cache", () => ({
+  revalidatePath: vi.fn(),
+  revalidateTag: vi.fn(),
+  refresh: vi.fn(),
+}));
 const jar = vi.hoisted(() => ({ cookies: new Map<string, string>() }));
 vi.mock("next/headers", () => ({
-  headers: () => Promise.resolve(new Headers({ "x-forwarded-for": "192.0.2.1", "user-agent": "test" })),
+  headers: () =>
+    Promise.resolve(new Headers({ "x-forwarded-for": "192.0.2.1", "user-agent": "test" })),
   cookies: () =>
     Promise.resolve({
-      get: (name: string) => (jar.cookies.has(name) ? { name, value: jar.cookies.get(name) } : undefined),
+      get: (name: string) =>
+        jar.cookies.has(name) ? { name, value: jar.cookies.get(name) } : undefined,
       set: (name: string, value: string) => jar.cookies.set(name, value),
       delete: (name: string) => jar.cookies.delete(name),
     }),

@@ -10,12 +10,50 @@ export type TestPerson = { userId: string; personId: string; email: string; name
 export type World = Awaited<ReturnType<typeof makeWorld>>;
 
 const TABLES = [
-  "acknowledgements", "call_sheet_issues", "pianist_sessions", "room_bookings", "called", "blocks", "calls", "conflicts",
-  "choices", "callback_invitations", "callback_marks", "callback_rounds", "attendances", "day_links", "slot_assignments",
-  "slots", "audition_rooms", "audition_days", "sign_ups", "ranges", "vocal_lines", "roles", "numbers", "score_parts",
-  "scores", "files", "invitations", "positions", "travel_times", "rooms", "venues", "people", "productions", "seasons",
-  "outbox", "audit_events", "companies", "api_tokens", "password_hashes", "sessions", "accounts", "verification_tokens",
-  "rate_counters", "users",
+  "acknowledgements",
+  "call_sheet_issues",
+  "pianist_sessions",
+  "room_bookings",
+  "called",
+  "blocks",
+  "calls",
+  "conflicts",
+  "choices",
+  "callback_invitations",
+  "callback_marks",
+  "callback_rounds",
+  "attendances",
+  "day_links",
+  "slot_assignments",
+  "slots",
+  "audition_rooms",
+  "audition_days",
+  "sign_ups",
+  "ranges",
+  "vocal_lines",
+  "roles",
+  "numbers",
+  "score_parts",
+  "scores",
+  "files",
+  "invitations",
+  "positions",
+  "travel_times",
+  "rooms",
+  "venues",
+  "people",
+  "productions",
+  "seasons",
+  "outbox",
+  "audit_events",
+  "companies",
+  "api_tokens",
+  "password_hashes",
+  "sessions",
+  "accounts",
+  "verification_tokens",
+  "rate_counters",
+  "users",
 ];
 
 /** Empties every table of the test database; refuses any other. */
@@ -69,7 +107,12 @@ export async function makeWorld() {
   await db.insert(t.productions).values([
     { id: productionId, companyId, title: "The Tidewatcher", stage: "auditions" },
     { id: siblingProductionId, companyId, title: "Marrow Street", stage: "rehearsals" },
-    { id: otherProductionId, companyId: otherCompanyId, title: "A Fair at Candlemas", stage: "auditions" },
+    {
+      id: otherProductionId,
+      companyId: otherCompanyId,
+      title: "A Fair at Candlemas",
+      stage: "auditions",
+    },
   ]);
   const venueId = newId();
   const roomId = newId();
@@ -85,7 +128,8 @@ export async function makeWorld() {
     { id: secondRoomId, companyId, venueId, name: "Room 2" },
     { id: otherRoomId, companyId: otherCompanyId, venueId: otherVenueId, name: "Hall" },
   ]);
-  const inProduction = (kind: PositionKind, name: string) => makePerson(companyId, name, { kind, productionId });
+  const inProduction = (kind: PositionKind, name: string) =>
+    makePerson(companyId, name, { kind, productionId });
   const people = {
     md: await inProduction("music_director", "Runa Oake"),
     assistant: await inProduction("assistant_md", "Ilse Varga"),
@@ -97,14 +141,36 @@ export async function makeWorld() {
     actor: await inProduction("actor", "Wren Tallis"),
     otherActor: await inProduction("actor", "Dele Fashanu"),
     admin: await makePerson(companyId, "Cora Finch", { kind: "company_admin" }),
-    siblingMd: await makePerson(companyId, "Petra Lund", { kind: "music_director", productionId: siblingProductionId }),
-    outsiderMd: await makePerson(otherCompanyId, "Lucan Wray", { kind: "music_director", productionId: otherProductionId }),
+    siblingMd: await makePerson(companyId, "Petra Lund", {
+      kind: "music_director",
+      productionId: siblingProductionId,
+    }),
+    outsiderMd: await makePerson(otherCompanyId, "Lucan Wray", {
+      kind: "music_director",
+      productionId: otherProductionId,
+    }),
     outsiderAdmin: await makePerson(otherCompanyId, "Maud Ferris", { kind: "company_admin" }),
   };
   const strangerId = newId();
-  await db.insert(t.users).values({ id: strangerId, name: "Nobody Known", email: `stranger.${strangerId.slice(-6)}@people.example` });
+  await db
+    .insert(t.users)
+    .values({
+      id: strangerId,
+      name: "Nobody Known",
+      email: `stranger.${strangerId.slice(-6)}@people.example`,
+    });
   return {
-    companyId, otherCompanyId, productionId, siblingProductionId, otherProductionId,
-    venueId, roomId, secondRoomId, otherVenueId, otherRoomId, people, strangerId,
+    companyId,
+    otherCompanyId,
+    productionId,
+    siblingProductionId,
+    otherProductionId,
+    venueId,
+    roomId,
+    secondRoomId,
+    otherVenueId,
+    otherRoomId,
+    people,
+    strangerId,
   };
 }

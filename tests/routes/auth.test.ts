@@ -115,13 +115,11 @@ describe("the button of a sign-in link", () => {
 
 describe("the first sign-in of an address", () => {
   test("makes a login with the name that a company wrote down, and joins nothing by itself", async () => {
-    await db
-      .insert(people)
-      .values({
-        companyId: world.companyId,
-        name: "Ayo Lindqvist",
-        email: "ayo.lindqvist@people.example",
-      });
+    await db.insert(people).values({
+      companyId: world.companyId,
+      name: "Ayo Lindqvist",
+      email: "ayo.lindqvist@people.example",
+    });
     await press(await askedLink("Ayo.Lindqvist@People.Example"));
     const [user] = await db
       .select()

@@ -22,33 +22,56 @@ function doorsInTheTree(): string[] {
     .filter((file) => file.endsWith("/actions.ts") || file.endsWith("/route.ts"));
   return files.flatMap((file) => {
     const source = readFileSync(path.join(root, file), "utf8");
-    const names = [...source.matchAll(/export (?:const|async function|function) (\w+)/g)].map((m) => m[1] ?? "");
-    const destructured = [...source.matchAll(/export const \{([^}]+)\}/g)].flatMap((m) => (m[1] ?? "").split(",").map((n) => n.trim()));
+    const names = [...source.matchAll(/export (?:const|async function|function) (\w+)/g)].map(
+      (m) => m[1] ?? "",
+    );
+    const destructured = [...source.matchAll(/export const \{([^}]+)\}/g)].flatMap((m) =>
+      (m[1] ?? "").split(",").map((n) => n.trim()),
+    );
     const exported = [...new Set([...names, ...destructured])].filter((name) => name !== "");
-    return exported.filter((name) => file.endsWith("actions.ts") || METHODS.includes(name)).map((name) => `${file}#${name}`);
+    return exported
+      .filter((name) => file.endsWith("actions.ts") || METHODS.includes(name))
+      .map((name) => `${file}#${name}`);
   });
 }
 
 type Called = { refused: boolean; what: string };
 
-async function callDoor(door: Door, name: string, world: RichWorld, persona: Persona): Promise<Called> {
+async function callDoor(
+  door: Door,
+  name: string,
+  world: RichWorld,
+  persona: Persona,
+): Promise<Called> {
   const [file = "", exported = ""] = name.split("#");
-  const module = (await import(/* @vite-ignore */ path.join(root, file))) as Record<string, (...args: unknown[]) => unknown>;
+  const module = (await import(/* @vite-ignore */ path.join(root, file))) as Record<
+    string,
+    (...args: unknown[]) => unknown
+  >;
   const fn = module[exported];
   if (!fn) throw new Error(`${name} is not exported`);
   as(PERSONAS[persona](world));
   try {
     if (file.endsWith("actions.ts")) {
       if (!("input" in door)) throw new Error(`${name} needs an input`);
-      const result = (await fn(door.input(world))) as { ok: boolean; error?: { code: string; message: string } };
+      const result = (await fn(door.input(world))) as {
+        ok: boolean;
+        error?: { code: string; message: string };
+      };
       if (result.ok) return { refused: false, what: "done" };
       const code = result.error?.code ?? "";
-      return { refused: ["signed-out", "not-found", "not-allowed"].includes(code), what: `${code}: ${result.error?.message ?? ""}` };
+      return {
+        refused: ["signed-out", "not-found", "not-allowed"].includes(code),
+        what: `${code}: ${result.error?.message ?? ""}`,
+      };
     }
     if (!("request" in door)) throw new Error(`${name} needs a request`);
     const { request, params } = door.request(world);
     const response = (await fn(request(), { params: Promise.resolve(params) })) as Response;
-    return { refused: [401, 403, 404].includes(response.status), what: `${String(response.status)} ${response.status >= 400 ? await response.text() : ""}` };
+    return {
+      refused: [401, 403, 404].includes(response.status),
+      what: `${String(response.status)} ${response.status >= 400 ? await response.text() : ""}`,
+    };
   } catch (error) {
     // redirect() is how some actions end well.
     const digest = error instanceof Error && "digest" in error ? String(error.digest) : "";

@@ -141,15 +141,13 @@ export function laidOut(plan: DayPlan, zone: string): RoomLaidOut[] {
 /** One room of a day with its booking and its slots. Returns the audition room's id. */
 export async function insertRoom(tx: Tx, dayId: string, room: RoomLaidOut): Promise<string> {
   const auditionRoomId = newId();
-  await tx
-    .insert(auditionRooms)
-    .values({
-      id: auditionRoomId,
-      dayId,
-      roomId: room.roomId,
-      opensAt: room.opensAt,
-      closesAt: room.closesAt,
-    });
+  await tx.insert(auditionRooms).values({
+    id: auditionRoomId,
+    dayId,
+    roomId: room.roomId,
+    opensAt: room.opensAt,
+    closesAt: room.closesAt,
+  });
   await tx
     .insert(roomBookings)
     .values({ roomId: room.roomId, startsAt: room.opensAt, endsAt: room.closesAt, auditionRoomId });
@@ -163,17 +161,15 @@ export async function insertSlots(
   auditionRoomId: string,
   room: RoomLaidOut,
 ): Promise<void> {
-  await tx
-    .insert(slots)
-    .values(
-      room.items.map((item) => ({
-        id: newId(),
-        auditionRoomId,
-        kind: item.kind,
-        startsAt: item.from,
-        endsAt: item.to,
-      })),
-    );
+  await tx.insert(slots).values(
+    room.items.map((item) => ({
+      id: newId(),
+      auditionRoomId,
+      kind: item.kind,
+      startsAt: item.from,
+      endsAt: item.to,
+    })),
+  );
 }
 
 /** The day's columns from a plan. */

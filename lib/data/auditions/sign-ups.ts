@@ -165,16 +165,14 @@ export async function takeSignUp(
       ? null
       : (await rangesOf(tx, [person.id])).get(person.id)?.claimed;
     if (!claimed) {
-      await tx
-        .insert(ranges)
-        .values({
-          id: newId(),
-          personId: person.id,
-          kind: "claimed",
-          low: row.low,
-          high: row.high,
-          givenBy: actor.userId,
-        });
+      await tx.insert(ranges).values({
+        id: newId(),
+        personId: person.id,
+        kind: "claimed",
+        low: row.low,
+        high: row.high,
+        givenBy: actor.userId,
+      });
     }
   }
   return { signUpId, personId: person.id, newPerson: person.created, already: false };

@@ -88,16 +88,14 @@ export async function choose(actor: Actor, input: z.output<typeof chooseSchema>)
           })
           .where(eq(choices.id, present.id));
       } else {
-        await tx
-          .insert(choices)
-          .values({
-            productionId: scope.id,
-            roleId: role.id,
-            personId: input.personId,
-            state: input.state,
-            kind: input.kind,
-            chosenBy: actor.userId,
-          });
+        await tx.insert(choices).values({
+          productionId: scope.id,
+          roleId: role.id,
+          personId: input.personId,
+          state: input.state,
+          kind: input.kind,
+          chosenBy: actor.userId,
+        });
       }
       await recordAudit(tx, actor, {
         companyId: scope.companyId,

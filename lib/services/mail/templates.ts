@@ -1,17 +1,49 @@
 /** What each message needs to be written. Dates and times come as the reader will read them. */
 export type MailTemplates = {
   "sign-in": { link: string; minutes: number };
-  invitation: { name: string; company: string; production: string | null; position: string; link: string; from: string };
-  "audition-invitation": { name: string; production: string; when: string; where: string; link: string };
+  invitation: {
+    name: string;
+    company: string;
+    production: string | null;
+    position: string;
+    link: string;
+    from: string;
+  };
+  "audition-invitation": {
+    name: string;
+    production: string;
+    when: string;
+    where: string;
+    link: string;
+  };
   "audition-moved": { name: string; production: string; when: string; where: string; link: string };
-  callback: { name: string; production: string; roles: string; when: string; where: string; link: string };
-  "call-sheet": { name: string; production: string; day: string; number: number; changes: string[]; link: string };
+  callback: {
+    name: string;
+    production: string;
+    roles: string;
+    when: string;
+    where: string;
+    link: string;
+  };
+  "call-sheet": {
+    name: string;
+    production: string;
+    day: string;
+    number: number;
+    changes: string[];
+    link: string;
+  };
   "password-changed": { name: string };
 };
 
 export type Message = { subject: string; text: string; html: string };
 
-type Parts = { subject: string; lines: string[]; button?: { label: string; href: string }; after?: string[] };
+type Parts = {
+  subject: string;
+  lines: string[];
+  button?: { label: string; href: string };
+  after?: string[];
+};
 
 const WRITERS: { [K in keyof MailTemplates]: (data: MailTemplates[K]) => Parts } = {
   "sign-in": (d) => ({
@@ -31,37 +63,66 @@ const WRITERS: { [K in keyof MailTemplates]: (data: MailTemplates[K]) => Parts }
   }),
   "audition-invitation": (d) => ({
     subject: `Your audition for ${d.production}: ${d.when}`,
-    lines: [`Dear ${d.name},`, `We would like to hear you for ${d.production} on ${d.when}, ${d.where}.`, "Please confirm the time, tell us your range, and say which dates are impossible."],
+    lines: [
+      `Dear ${d.name},`,
+      `We would like to hear you for ${d.production} on ${d.when}, ${d.where}.`,
+      "Please confirm the time, tell us your range, and say which dates are impossible.",
+    ],
     button: { label: "Confirm your time", href: d.link },
   }),
   "audition-moved": (d) => ({
     subject: `New time for your audition: ${d.when}`,
-    lines: [`Dear ${d.name},`, `Your audition for ${d.production} is now on ${d.when}, ${d.where}. Please confirm the new time.`],
+    lines: [
+      `Dear ${d.name},`,
+      `Your audition for ${d.production} is now on ${d.when}, ${d.where}. Please confirm the new time.`,
+    ],
     button: { label: "Confirm the new time", href: d.link },
   }),
   callback: (d) => ({
     subject: `Callback for ${d.production}`,
-    lines: [`Dear ${d.name},`, `You are called back for ${d.roles} in ${d.production}: ${d.when}, ${d.where}.`],
+    lines: [
+      `Dear ${d.name},`,
+      `You are called back for ${d.roles} in ${d.production}: ${d.when}, ${d.where}.`,
+    ],
     button: { label: "See and answer", href: d.link },
   }),
   "call-sheet": (d) => ({
     subject: `${d.production}, ${d.day}: call sheet, issue ${String(d.number)}`,
-    lines: [`Dear ${d.name},`, ...(d.changes.length > 0 ? ["Changed since the last issue:", ...d.changes] : ["The call sheet is out."])],
+    lines: [
+      `Dear ${d.name},`,
+      ...(d.changes.length > 0
+        ? ["Changed since the last issue:", ...d.changes]
+        : ["The call sheet is out."]),
+    ],
     button: { label: "Read and acknowledge", href: d.link },
   }),
   "password-changed": (d) => ({
     subject: "Your Cembalo password was changed",
-    lines: [`Dear ${d.name},`, "Your password was changed. If that was not you, sign in by e-mail link and set a new one; other sessions were ended."],
+    lines: [
+      `Dear ${d.name},`,
+      "Your password was changed. If that was not you, sign in by e-mail link and set a new one; other sessions were ended.",
+    ],
   }),
 };
 
 const escapeHtml = (text: string): string =>
-  text.replace(/[&<>"']/g, (c) => ({ "&": "&amp;", "<": "&lt;", ">": "&gt;", '"': "&quot;", "'": "&#39;" })[c] ?? c);
+  text.replace(
+    /[&<>"']/g,
+    (c) => ({ "&": "&amp;", "<": "&lt;", ">": "&gt;", '"': "&quot;", "'": "&#39;" })[c] ?? c,
+  );
 
 /** Writes a message: subject, plain text and the same as simple HTML. Header injection is cut off at line breaks. */
-export function writeMessage<K extends keyof MailTemplates>(template: K, data: MailTemplates[K]): Message {
+export function writeMessage<K extends keyof MailTemplates>(
+  template: K,
+  data: MailTemplates[K],
+): Message {
   const parts = WRITERS[template](data);
-  const text = [...parts.lines, ...(parts.button ? [`${parts.button.label}: ${parts.button.href}`] : []), ...(parts.after ?? []), "Cembalo"].join("\n\n");
+  const text = [
+    ...parts.lines,
+    ...(parts.button ? [`${parts.button.label}: ${parts.button.href}`] : []),
+    ...(parts.after ?? []),
+    "Cembalo",
+  ].join("\n\n");
   const paragraphs = (lines: string[]): string =>
     lines.map((line) => `<p style="margin:0 0 14px">${escapeHtml(line)}</p>`).join("");
   const button = parts.button

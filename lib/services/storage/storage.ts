@@ -20,7 +20,11 @@ export async function storeFile(bytes: Uint8Array): Promise<StoredFile> {
   await mkdir(path.dirname(target), { recursive: true });
   await writeFile(`${target}.part`, bytes, { mode: 0o600 });
   await rename(`${target}.part`, target);
-  return { storageKey, sha256: createHash("sha256").update(bytes).digest("hex"), bytes: bytes.byteLength };
+  return {
+    storageKey,
+    sha256: createHash("sha256").update(bytes).digest("hex"),
+    bytes: bytes.byteLength,
+  };
 }
 
 /** The bytes kept under a key. Throws when there are none. */

@@ -38,7 +38,10 @@ export async function serveBareApp(ctx: BenchContext): Promise<{ url: string; st
   const dir = path.join(ctx.runDir, "bare-app");
   rmSync(dir, { recursive: true, force: true });
   mkdirSync(path.join(dir, "app"), { recursive: true });
-  writeFileSync(path.join(dir, "package.json"), JSON.stringify({ name: "bare", private: true, type: "module" }));
+  writeFileSync(
+    path.join(dir, "package.json"),
+    JSON.stringify({ name: "bare", private: true, type: "module" }),
+  );
   writeFileSync(path.join(dir, "app/page.jsx"), PAGE);
   writeFileSync(path.join(dir, "app/layout.jsx"), LAYOUT);
   writeFileSync(
@@ -47,15 +50,28 @@ export async function serveBareApp(ctx: BenchContext): Promise<{ url: string; st
   );
   symlinkSync(path.join(ctx.root, "node_modules"), path.join(dir, "node_modules"));
   const next = path.join(ctx.root, "node_modules/next/dist/bin/next");
-  const env = { ...process.env, DATABASE_URL: ctx.databaseUrl, NEXT_TELEMETRY_DISABLED: "1", NODE_ENV: "production" as const };
+  const env = {
+    ...process.env,
+    DATABASE_URL: ctx.databaseUrl,
+    NEXT_TELEMETRY_DISABLED: "1",
+    NODE_ENV: "production" as const,
+  };
   ctx.log("building the bare page");
   const built = spawnSync(process.execPath, [next, "build"], { cwd: dir, env, encoding: "utf8" });
-  if (built.status !== 0 || !existsSync(path.join(dir, ".next/BUILD_ID"))) throw new Error(`The bare page did not build: ${built.stdout} ${built.stderr}`);
+  if (built.status !== 0 || !existsSync(path.join(dir, ".next/BUILD_ID")))
+    throw new Error(`The bare page did not build: ${built.stdout} ${built.stderr}`);
   const port = await freePort();
-  const server = spawn(process.execPath, [next, "start", "-H", "127.0.0.1", "-p", String(port)], { cwd: dir, env, stdio: "ignore" });
+  const server = spawn(process.execPath, [next, "start", "-H", "127.0.0.1", "-p", String(port)], {
+    cwd: dir,
+    env,
+    stdio: "ignore",
+  });
   const url = `http://127.0.0.1:${String(port)}/`;
   for (let tries = 0; tries < 100; tries += 1) {
-    const up = await fetch(url).then((r) => r.ok, () => false);
+    const up = await fetch(url).then(
+      (r) => r.ok,
+      () => false,
+    );
     if (up) break;
     await new Promise((resolve) => setTimeout(resolve, 100));
   }

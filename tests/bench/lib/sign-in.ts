@@ -29,15 +29,26 @@ export async function sessionCookie(ctx: BenchContext, email: string): Promise<s
 /** The id of the demo production with this title. */
 export async function productionId(ctx: BenchContext, title: string): Promise<string> {
   const connection = await mysql.createConnection({ uri: ctx.databaseUrl });
-  const [rows] = await connection.query("select lower(hex(id)) as id from productions where title = ?", [title]);
+  const [rows] = await connection.query(
+    "select lower(hex(id)) as id from productions where title = ?",
+    [title],
+  );
   await connection.end();
   const hex = (rows as { id: string }[])[0]?.id ?? "";
-  return [hex.slice(0, 8), hex.slice(8, 12), hex.slice(12, 16), hex.slice(16, 20), hex.slice(20)].join("-");
+  return [
+    hex.slice(0, 8),
+    hex.slice(8, 12),
+    hex.slice(12, 16),
+    hex.slice(16, 20),
+    hex.slice(20),
+  ].join("-");
 }
 
 /** Demo addresses by what the person does. */
 export function demoEmail(ctx: BenchContext, position: RegExp): string {
-  const { people } = JSON.parse(readFileSync(ctx.peopleFile, "utf8")) as { people: { email: string; position: string }[] };
+  const { people } = JSON.parse(readFileSync(ctx.peopleFile, "utf8")) as {
+    people: { email: string; position: string }[];
+  };
   const found = people.find((person) => position.test(person.position));
   if (!found) throw new Error(`The demo has nobody who is ${String(position)}.`);
   return found.email;

@@ -12,12 +12,21 @@ export type Doors = Record<string, Door>;
 export const ORIGIN = "http://localhost:3000";
 
 /** A route read with GET. */
-export function reads(may: Door["may"], url: string, params: (w: RichWorld) => Record<string, string> = () => ({})): Door {
+export function reads(
+  may: Door["may"],
+  url: string,
+  params: (w: RichWorld) => Record<string, string> = () => ({}),
+): Door {
   return { may, request: (w) => ({ request: () => new Request(ORIGIN + url), params: params(w) }) };
 }
 
 /** A route that takes a file in the form field "file". */
-export function takesFile(may: Door["may"], url: string, file: () => File, params: (w: RichWorld) => Record<string, string>): Door {
+export function takesFile(
+  may: Door["may"],
+  url: string,
+  file: () => File,
+  params: (w: RichWorld) => Record<string, string>,
+): Door {
   return {
     may,
     request: (w) => ({

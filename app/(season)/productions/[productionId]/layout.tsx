@@ -20,11 +20,18 @@ const KEYS: { label: string; area: string; action: Action }[] = [
 ];
 
 /** The frame of a production: only the keys this person may press. Each page asks permission for itself. */
-export default async function ProductionLayout({ children, params }: LayoutProps<"/productions/[productionId]">) {
+export default async function ProductionLayout({
+  children,
+  params,
+}: LayoutProps<"/productions/[productionId]">) {
   const { productionId } = await params;
   const actor = await pageActor(`/productions/${productionId}`);
   const production = await orNotFound(productionFor(actor, productionId, "production:see"));
-  const subject = { companyId: production.companyId, productionId, castPublished: production.castPublished };
+  const subject = {
+    companyId: production.companyId,
+    productionId,
+    castPublished: production.castPublished,
+  };
   const items = KEYS.filter((key) => can(actor, key.action, subject)).map((key) => ({
     label: key.label,
     href: `/productions/${productionId}/${key.area}`,

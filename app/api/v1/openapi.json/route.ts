@@ -2,7 +2,9 @@ import { z } from "zod";
 import { env } from "@/lib/env";
 import { apiError, rangeFitRequest, rangeFitResponse, vocalLinesResponse } from "@/lib/schemas/api";
 
-const json = (schema: z.ZodType, io: "input" | "output") => ({ "application/json": { schema: z.toJSONSchema(schema, { io, target: "draft-2020-12" }) } });
+const json = (schema: z.ZodType, io: "input" | "output") => ({
+  "application/json": { schema: z.toJSONSchema(schema, { io, target: "draft-2020-12" }) },
+});
 const refusals = Object.fromEntries(
   (
     [
@@ -20,23 +22,65 @@ const refusals = Object.fromEntries(
 export function GET(): Response {
   return Response.json({
     openapi: "3.1.0",
-    info: { title: "Cembalo", version: "1", description: "The arithmetic of a music director's season. Pitches are MIDI numbers (60 is C4). Nothing is stored." },
+    info: {
+      title: "Cembalo",
+      version: "1",
+      description:
+        "The arithmetic of a music director's season. Pitches are MIDI numbers (60 is C4). Nothing is stored.",
+    },
     servers: [{ url: `${env().AUTH_URL}/api/v1` }],
     security: [{ token: [] }],
-    components: { securitySchemes: { token: { type: "http", scheme: "bearer", description: "A personal token, made on the account page" } } },
+    components: {
+      securitySchemes: {
+        token: {
+          type: "http",
+          scheme: "bearer",
+          description: "A personal token, made on the account page",
+        },
+      },
+    },
     paths: {
       "/vocal-lines": {
         post: {
           summary: "What each part of a MusicXML score sings",
-          requestBody: { required: true, content: { "multipart/form-data": { schema: { type: "object", required: ["file"], properties: { file: { type: "string", format: "binary", description: ".musicxml, .xml or .mxl, at most 20 MB" } } } } } },
-          responses: { "200": { description: "Ranges, histograms and quantiles by part", content: json(vocalLinesResponse, "output") }, ...refusals },
+          requestBody: {
+            required: true,
+            content: {
+              "multipart/form-data": {
+                schema: {
+                  type: "object",
+                  required: ["file"],
+                  properties: {
+                    file: {
+                      type: "string",
+                      format: "binary",
+                      description: ".musicxml, .xml or .mxl, at most 20 MB",
+                    },
+                  },
+                },
+              },
+            },
+          },
+          responses: {
+            "200": {
+              description: "Ranges, histograms and quantiles by part",
+              content: json(vocalLinesResponse, "output"),
+            },
+            ...refusals,
+          },
         },
       },
       "/range-fit": {
         post: {
           summary: "How one singer's range meets one vocal line",
           requestBody: { required: true, content: json(rangeFitRequest, "input") },
-          responses: { "200": { description: "The fit; reserves and shift after Herbst et al. 2012", content: json(rangeFitResponse, "output") }, ...refusals },
+          responses: {
+            "200": {
+              description: "The fit; reserves and shift after Herbst et al. 2012",
+              content: json(rangeFitResponse, "output"),
+            },
+            ...refusals,
+          },
         },
       },
     },

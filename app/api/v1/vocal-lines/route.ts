@@ -13,7 +13,8 @@ export const POST = defineApiRoute(async (request) => {
   try {
     return shape(await readScoreInWorker(bytes, name));
   } catch (error) {
-    if (error instanceof ScoreError) throw new ApiError(STATUS[error.kind], error.code, error.message, "file");
+    if (error instanceof ScoreError)
+      throw new ApiError(STATUS[error.kind], error.code, error.message, "file");
     throw error;
   }
 });
