@@ -16,7 +16,7 @@ const singer = z
   })
   .refine((s) => s.low <= s.high, {
     path: ["low"],
-    message: "The lowest note lies above the highest.",
+    error: "The lowest note lies above the highest.",
   });
 
 const line = z
@@ -29,7 +29,7 @@ const line = z
   })
   .refine((l) => l.low <= l.high, {
     path: ["low"],
-    message: "The lowest note lies above the highest.",
+    error: "The lowest note lies above the highest.",
   });
 
 export const rangeFitRequest = z.object({ singer, line });

@@ -19,7 +19,7 @@ export const changeRoundSchema = z
   })
   .refine((r) => r.from < r.to, {
     path: ["to"],
-    message: "The end has to come after the beginning.",
+    error: "The end has to come after the beginning.",
   });
 
 export const markSchema = z.object({

@@ -16,7 +16,7 @@ export const createProductionSchema = z
   })
   .refine((p) => p.opensOn === null || p.closesOn === null || p.opensOn <= p.closesOn, {
     path: ["closesOn"],
-    message: "The last night cannot come before the first.",
+    error: "The last night cannot come before the first.",
   });
 
 export const changeProductionSchema = z
@@ -30,5 +30,5 @@ export const changeProductionSchema = z
   })
   .refine((p) => p.opensOn === null || p.closesOn === null || p.opensOn <= p.closesOn, {
     path: ["closesOn"],
-    message: "The last night cannot come before the first.",
+    error: "The last night cannot come before the first.",
   });

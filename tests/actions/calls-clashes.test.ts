@@ -128,6 +128,7 @@ describe("clashes while a call is being made", () => {
     expect(clashes.map((clash) => clash.words)).toEqual([
       "Runa Oake hears the auditions of Marrow Street, 10:00–19:00: 30 min of this call",
     ]);
+    await db.delete(t.auditionRooms);
     await db.delete(t.auditionDays);
   });
 

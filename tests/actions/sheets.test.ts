@@ -255,6 +255,60 @@ describe("reading and acknowledging", () => {
     expect(hanne.blocks).toHaveLength(4);
   });
 
+  test("of what comes next, one's own sheet lists only the calls one is in", async () => {
+    const [low] = callForm(world).blocks;
+    const none = { leaderId: "", pianistId: "" };
+    await publishedCall({ ...none, localDate: "2027-04-08", blocks: [low] });
+    await publishedCall({
+      ...none,
+      localDate: "2027-04-08",
+      localTime: "20:30",
+      leaderId: world.people.md.personId,
+      blocks: [{ ...low, numberId: world.numbers[1] }],
+      hand: [
+        {
+          personId: world.people.otherActor.personId,
+          act: "excuse",
+          reason: "Costume fitting",
+          keys: [],
+        },
+      ],
+    });
+    as(world.people.stageManager.userId);
+    const { issueId } = await issued();
+    const nextOf = async (who: "actor" | "otherActor" | "md" | "accompanist") =>
+      (await readOwnSheet(await actorOf(world.people[who].userId), issueId)).tomorrow;
+    const [first, second] = [
+      "Thu 8 Apr, 18:30, music call, Room 1",
+      "Thu 8 Apr, 20:30, music call, Room 1",
+    ];
+    expect(await nextOf("actor")).toEqual([first]);
+    expect(await nextOf("md")).toEqual([second]);
+    // Excused from one and not in the other; neither plays nor leads in either.
+    expect(await nextOf("otherActor")).toEqual([]);
+    expect(await nextOf("accompanist")).toEqual([]);
+    const manager = await actorOf(world.people.stageManager.userId);
+    const { sheet } = await readIssue(manager, { productionId: world.productionId, issueId });
+    expect(sheet.tomorrow).toEqual([first, second]);
+  });
+
+  test("an issue that kept nothing of what comes next for each person lists none of it", async () => {
+    const { issueId } = await issued();
+    const [row] = await db.select().from(t.callSheetIssues);
+    const kept = row?.snapshot as {
+      sheet: object;
+      people: Record<string, { tomorrow?: string[] }>;
+    };
+    for (const part of Object.values(kept.people)) delete part.tomorrow;
+    const snapshot = {
+      ...kept,
+      sheet: { ...kept.sheet, tomorrow: ["Thu 8 Apr, 18:30, music call"] },
+    };
+    await db.update(t.callSheetIssues).set({ snapshot });
+    const wren = await actorOf(world.people.actor.userId);
+    expect((await readOwnSheet(wren, issueId)).tomorrow).toEqual([]);
+  });
+
   test("acknowledging is one's own, and the stage manager sees who has not", async () => {
     const { issueId } = await issued();
     as(world.people.actor.userId);

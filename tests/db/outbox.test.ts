@@ -4,7 +4,7 @@ import { SMTPServer } from "smtp-server";
 import { afterAll, beforeAll, beforeEach, expect, test, vi } from "vitest";
 import { db } from "@/db/client";
 import * as t from "@/db/schema";
-import { deliverOutbox } from "@/lib/data/deliver-outbox";
+import type { deliverOutbox } from "@/lib/data/deliver-outbox";
 import { queueMail } from "@/lib/data/outbox";
 import { countTry } from "@/lib/data/rate-limit";
 import { emptyDatabase } from "../helpers/world";

@@ -23,11 +23,15 @@ async function actorOf(userId: string) {
 }
 const seasonOf = async (userId: string) => readSeason(await actorOf(userId), WINDOW);
 
-type CallOver = Partial<typeof t.calls.$inferInsert> & { who?: string[]; minutes?: number[] };
+type CallOver = Partial<typeof t.calls.$inferInsert> & {
+  who?: string[];
+  minutes?: number[];
+  source?: "hand" | "score";
+};
 
 /** A published music call from 18:00 to 20:00 UTC on 24 March, as one block of two hours unless told. */
 async function makeCall(productionId: string, over: CallOver = {}): Promise<string> {
-  const { who = [], minutes = [120], ...columns } = over;
+  const { who = [], minutes = [120], source = "hand", ...columns } = over;
   const id = newId();
   await db.insert(t.calls).values({
     id,
@@ -49,7 +53,7 @@ async function makeCall(productionId: string, over: CallOver = {}): Promise<stri
     // One person to a block where there are several blocks.
     const called = minutes.length === 1 ? who : who.slice(place, place + 1);
     for (const personId of called) {
-      await db.insert(t.called).values({ blockId, personId, source: "hand" });
+      await db.insert(t.called).values({ blockId, personId, source });
     }
   }
   return id;
@@ -239,6 +243,43 @@ describe("clashes within a company", () => {
 });
 
 describe("who sees what of a season", () => {
+  test("whom the score calls to a draft is kept from the stage manager until the cast list is out", async () => {
+    const { actor, md, stageManager } = world.people;
+    const who = [actor.personId];
+    await makeCall(world.productionId, { who });
+    await makeCall(world.productionId, { who, state: "draft", source: "score" });
+    await db.insert(t.conflicts).values({
+      personId: actor.personId,
+      startsAt: new Date("2027-03-24T17:00:00Z"),
+      endsAt: new Date("2027-03-24T19:00:00Z"),
+      localFrom: "2027-03-24",
+      localTo: "2027-03-24",
+      zone: "Europe/London",
+    });
+    const kinds = async (userId: string) =>
+      (await seasonOf(userId)).clashes.map((clash) => clash.kind).sort();
+    // The published call names them by hand: that they cannot come to it is the stage manager's to know.
+    expect(await kinds(md.userId)).toEqual(["conflict", "conflict", "person"]);
+    expect(await kinds(stageManager.userId)).toEqual(["conflict"]);
+    await db.update(t.calls).set({ state: "draft" });
+    await db.update(t.called).set({ source: "score" });
+    const drafts = await seasonOf(stageManager.userId);
+    expect(JSON.stringify(drafts)).not.toContain("Wren Tallis");
+    expect(drafts.events).toHaveLength(2);
+    await db.update(t.productions).set({ castPublishedAt: new Date() });
+    expect(await kinds(stageManager.userId)).toEqual(["conflict", "conflict", "person"]);
+  });
+
+  test("called by hand to a draft is the stage manager's to see; so is a published call, whoever calls", async () => {
+    const { actor, stageManager } = world.people;
+    const who = [actor.personId];
+    await makeCall(world.productionId, { who, state: "draft" });
+    await makeCall(world.productionId, { who, source: "score" });
+    expect((await seasonOf(stageManager.userId)).clashes).toMatchObject([
+      { kind: "person", who: ["Wren Tallis"] },
+    ]);
+  });
+
   test("the company admin sees calls, but neither auditions, callbacks nor casting", async () => {
     const dayId = newId();
     await db.insert(t.auditionDays).values({

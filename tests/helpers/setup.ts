@@ -27,7 +27,9 @@ vi.mock("next/headers", () => ({
 }));
 vi.mock("next/server", async (original) => ({
   ...(await original<typeof import("next/server")>()),
-  after: (work: () => unknown) => void work,
+  after: (work: () => unknown) => {
+    work();
+  },
 }));
 
 (globalThis as Record<string, unknown>)["cembaloAsking"] = asking;

@@ -44,11 +44,11 @@ async function callDoor(
   persona: Persona,
 ): Promise<Called> {
   const [file = "", exported = ""] = name.split("#");
-  const module = (await import(/* @vite-ignore */ path.join(root, file))) as Record<
+  const loaded = (await import(/* @vite-ignore */ path.join(root, file))) as Record<
     string,
     (...args: unknown[]) => unknown
   >;
-  const fn = module[exported];
+  const fn = loaded[exported];
   if (!fn) throw new Error(`${name} is not exported`);
   as(PERSONAS[persona](world));
   try {
