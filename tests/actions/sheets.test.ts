@@ -258,6 +258,7 @@ describe("reading and acknowledging", () => {
   test("of what comes next, one's own sheet lists only the calls one is in", async () => {
     const [low] = callForm(world).blocks;
     const none = { leaderId: "", pianistId: "" };
+    const { personId } = world.people.otherActor;
     await publishedCall({ ...none, localDate: "2027-04-08", blocks: [low] });
     await publishedCall({
       ...none,
@@ -265,23 +266,14 @@ describe("reading and acknowledging", () => {
       localTime: "20:30",
       leaderId: world.people.md.personId,
       blocks: [{ ...low, numberId: world.numbers[1] }],
-      hand: [
-        {
-          personId: world.people.otherActor.personId,
-          act: "excuse",
-          reason: "Costume fitting",
-          keys: [],
-        },
-      ],
+      hand: [{ personId, act: "excuse", reason: "Costume fitting", keys: [] }],
     });
     as(world.people.stageManager.userId);
     const { issueId } = await issued();
     const nextOf = async (who: "actor" | "otherActor" | "md" | "accompanist") =>
       (await readOwnSheet(await actorOf(world.people[who].userId), issueId)).tomorrow;
-    const [first, second] = [
-      "Thu 8 Apr, 18:30, music call, Room 1",
-      "Thu 8 Apr, 20:30, music call, Room 1",
-    ];
+    const first = "Thu 8 Apr, 18:30, music call, Room 1";
+    const second = "Thu 8 Apr, 20:30, music call, Room 1";
     expect(await nextOf("actor")).toEqual([first]);
     expect(await nextOf("md")).toEqual([second]);
     // Excused from one and not in the other; neither plays nor leads in either.
