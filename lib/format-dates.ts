@@ -78,3 +78,12 @@ export function clockSpan(from: Date, to: Date, zone: string): string {
       : ` (${shortDay(localDay(to, zone))})`;
   return `${clock(from, zone)}–${end}${later}`;
 }
+
+/** "18:40–19:30"; whole days by name: "on Sat 20 Mar", "from Sat 20 Mar to Mon 22 Mar". */
+export function daysOrClocks(from: Date, to: Date, zone: string): string {
+  if (clock(from, zone) !== "00:00" || clock(to, zone) !== "00:00")
+    return clockSpan(from, to, zone);
+  const first = localDay(from, zone);
+  const last = localDay(new Date(to.getTime() - 1), zone);
+  return first === last ? `on ${shortDay(first)}` : `from ${shortDay(first)} to ${shortDay(last)}`;
+}

@@ -1,4 +1,4 @@
-import { clockSpan } from "@/lib/format-dates";
+import { clockSpan, daysOrClocks } from "@/lib/format-dates";
 import type { CallFacts, CallPlan, ClashInWords, FoundClash, Remedy } from "./types";
 
 /**
@@ -31,7 +31,7 @@ function wordsOf(plan: CallPlan, facts: CallFacts, clash: FoundClash): string {
     if (!conflict) return `${name} cannot come: ${minutes} of this call`;
     const why = conflict.reason === null ? "" : ` (${conflict.reason})`;
     const said = conflict.state === "agreed" ? "agreed" : "asked, not agreed yet";
-    return `${name} cannot come ${clockSpan(conflict.from, conflict.to, plan.zone)}${why}, ${said}: ${minutes} of this call`;
+    return `${name} cannot come ${daysOrClocks(conflict.from, conflict.to, plan.zone)}${why}, ${said}: ${minutes} of this call`;
   }
   if (clash.kind === "room") {
     const booking = facts.bookings[Number(clash.withId.split(" ")[1])];

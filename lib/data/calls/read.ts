@@ -10,7 +10,7 @@ import { waitingMinutes } from "@/lib/calls/waiting-minutes";
 import { productionFor } from "@/lib/data/guard";
 import type { ProductionScope } from "@/lib/data/guard";
 import { AppError } from "@/lib/errors";
-import { clock, clockSpan, longDay } from "@/lib/format-dates";
+import { clock, clockSpan, daysOrClocks, longDay } from "@/lib/format-dates";
 import { can } from "@/lib/permissions/can";
 import type { Actor } from "@/lib/permissions/types";
 import { overlaps } from "@/lib/schedule/overlaps";
@@ -203,6 +203,6 @@ function conflictsAround(plan: CallPlan, facts: CallFacts): string[] {
       const before = theirs.every((run) => run.to <= conflict.from);
       const where = after ? "after it" : before ? "before it" : "around it";
       const why = conflict.reason === null ? "" : ` (${conflict.reason})`;
-      return `${name} cannot come ${clockSpan(conflict.from, conflict.to, plan.zone)}${why}: their blocks are ${where}.`;
+      return `${name} cannot come ${daysOrClocks(conflict.from, conflict.to, plan.zone)}${why}: their blocks are ${where}.`;
     });
 }

@@ -301,7 +301,7 @@ async function mailSheet(
       ),
     )
     .where(and(inArray(people.id, issue.concerns), isNull(people.removedAt)))
-    .groupBy(people.id)
+    .groupBy(people.id, people.name, people.email, people.userId)
     .orderBy(asc(people.name));
   let told = 0;
   for (const person of rows) {

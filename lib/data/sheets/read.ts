@@ -76,12 +76,10 @@ async function listIssues(where: ReturnType<typeof eq>) {
       number: callSheetIssues.number,
       issuedAt: callSheetIssues.issuedAt,
       concerns: sql<number>`json_length(${callSheetIssues.concerns})`.mapWith(Number),
-      acknowledged: sql<number>`count(${acknowledgements.personId})`.mapWith(Number),
+      acknowledged: db.$count(acknowledgements, eq(acknowledgements.issueId, callSheetIssues.id)),
     })
     .from(callSheetIssues)
-    .leftJoin(acknowledgements, eq(acknowledgements.issueId, callSheetIssues.id))
     .where(where)
-    .groupBy(callSheetIssues.id)
     .orderBy(asc(callSheetIssues.localDate), desc(callSheetIssues.number));
 }
 

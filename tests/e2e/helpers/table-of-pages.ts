@@ -11,8 +11,8 @@ export type PageRow = {
   may: readonly Viewer[];
   /** Who is led on instead, and where to. */
   leadsOn?: Partial<Record<Viewer, (places: Places) => string>>;
-  /** By whose eyes it is looked at; null where nobody ever sees it. */
-  eyes: Viewer | null;
+  /** By whose eyes it is looked at, one after another; empty where nobody ever sees it. */
+  eyes: readonly Viewer[];
 };
 
 // Who may open what is written here by hand, from what each position of the demo's people is for (README.md), and not
@@ -37,21 +37,25 @@ const PRODUCTION = `${SEASON}/productions/[productionId]`;
 /** Every page of the product. */
 export const PAGES: readonly PageRow[] = [
   // Open to all.
-  { file: "(public)", of: "nobody yet", path: () => "/", may: EVERY_VIEWER, eyes: "nobody" },
-  { file: "(public)", of: "someone signed in", path: () => "/", may: EVERY_VIEWER, eyes: "md" },
+  { file: "(public)", path: () => "/", may: EVERY_VIEWER, eyes: ["nobody", "md"] },
   {
     file: "(public)/sign-in",
     path: () => "/sign-in",
     may: ["nobody"],
     leadsOn: each(EVERY_PERSON, "/sign-in/done"),
-    eyes: "nobody",
+    eyes: ["nobody"],
   },
-  { file: "(public)/sign-in/sent", path: () => "/sign-in/sent", may: EVERY_VIEWER, eyes: "nobody" },
+  {
+    file: "(public)/sign-in/sent",
+    path: () => "/sign-in/sent",
+    may: EVERY_VIEWER,
+    eyes: ["nobody"],
+  },
   {
     file: "(public)/sign-in/link",
     path: ({ signInLink }) => signInLink,
     may: EVERY_VIEWER,
-    eyes: "nobody",
+    eyes: ["nobody"],
   },
   {
     file: "(public)/sign-in/done",
@@ -62,113 +66,87 @@ export const PAGES: readonly PageRow[] = [
       ...each(["hanne", "osric", "wren", "teo", "imke"], "/me"),
       nobody: () => "/sign-in?to=%2Fme",
     },
-    eyes: null,
+    eyes: [],
   },
   {
     file: "(public)/invitation/[token]",
     path: ({ invitation }) => `/invitation/${invitation}`,
     may: EVERY_VIEWER,
-    eyes: "nobody",
+    eyes: ["nobody"],
   },
   {
     file: "(room)/door/[token]",
     path: ({ doorPath }) => doorPath,
     may: EVERY_VIEWER,
-    eyes: "nobody",
+    eyes: ["nobody"],
   },
-  { file: "mailbox", path: () => "/mailbox", may: EVERY_VIEWER, eyes: "nobody" },
+  { file: "mailbox", path: () => "/mailbox", may: EVERY_VIEWER, eyes: ["nobody"] },
   {
     file: "mailbox/[messageId]",
     path: ({ message }) => `/mailbox/${message}`,
     may: EVERY_VIEWER,
-    eyes: "nobody",
+    eyes: ["nobody"],
   },
 
   // Everyone's own.
   {
     file: "(me)/me/(home)",
-    of: "an actor with a callback",
     path: () => "/me",
     may: EVERY_PERSON,
-    eyes: "wren",
+    // A callback to answer, calls this week, somebody else's singers to play for.
+    eyes: ["wren", "teo", "hanne"],
   },
-  {
-    file: "(me)/me/(home)",
-    of: "an actor who is cast",
-    path: () => "/me",
-    may: EVERY_PERSON,
-    eyes: "teo",
-  },
-  {
-    file: "(me)/me/(home)",
-    of: "an accompanist",
-    path: () => "/me",
-    may: EVERY_PERSON,
-    eyes: "hanne",
-  },
-  { file: "(me)/me/conflicts", path: () => "/me/conflicts", may: EVERY_PERSON, eyes: "teo" },
-  { file: "(me)/me/range", path: () => "/me/range", may: EVERY_PERSON, eyes: "wren" },
-  { file: "(me)/me/sessions", path: () => "/me/sessions", may: EVERY_PERSON, eyes: "osric" },
+  { file: "(me)/me/conflicts", path: () => "/me/conflicts", may: EVERY_PERSON, eyes: ["teo"] },
+  { file: "(me)/me/range", path: () => "/me/range", may: EVERY_PERSON, eyes: ["wren"] },
+  { file: "(me)/me/sessions", path: () => "/me/sessions", may: EVERY_PERSON, eyes: ["osric"] },
   {
     file: "(me)/me/call-sheets/[issueId]",
     path: ({ issue }) => `/me/call-sheets/${issue}`,
     // Those the sheet of that day is about: who leads the call, plays it and sings in it.
     may: ["md", "osric", "wren", "teo"],
-    eyes: "teo",
+    eyes: ["teo"],
   },
-  { file: "(me)/account", path: () => "/account", may: EVERY_PERSON, eyes: "md" },
+  { file: "(me)/account", path: () => "/account", may: EVERY_PERSON, eyes: ["md"] },
 
   // The season and its companies.
-  {
-    file: `${SEASON}/season`,
-    of: "the music director",
-    path: () => "/season",
-    may: EVERY_PERSON,
-    eyes: "md",
-  },
-  {
-    file: `${SEASON}/season`,
-    of: "who has none",
-    path: () => "/season",
-    may: EVERY_PERSON,
-    eyes: "imke",
-  },
-  { file: `${SEASON}/companies/(all)`, path: () => "/companies", may: EVERY_PERSON, eyes: "md" },
+  // Imke has none: the page says so, and what to do.
+  { file: `${SEASON}/season`, path: () => "/season", may: EVERY_PERSON, eyes: ["md", "imke"] },
+  { file: `${SEASON}/companies/(all)`, path: () => "/companies", may: EVERY_PERSON, eyes: ["md"] },
   {
     file: `${SEASON}/companies/(all)/new`,
     path: () => "/companies/new",
     may: EVERY_PERSON,
-    eyes: "imke",
+    eyes: ["imke"],
   },
   {
     file: `${COMPANY}/(overview)`,
     path: ({ company }) => `/companies/${company}`,
     may: [...TABLE_OF_TIDEWATCHER, "admin"],
-    eyes: "admin",
+    eyes: ["admin"],
   },
   {
     file: `${COMPANY}/people`,
     path: ({ company }) => `/companies/${company}/people`,
     may: ["admin"],
-    eyes: "admin",
+    eyes: ["admin"],
   },
   {
     file: `${COMPANY}/rooms`,
     path: ({ company }) => `/companies/${company}/rooms`,
     may: ["md", "stageManager", "admin"],
-    eyes: "admin",
+    eyes: ["admin"],
   },
   {
     file: `${COMPANY}/trail`,
     path: ({ company }) => `/companies/${company}/trail`,
     may: ["md", "assistant", "stageManager", "admin"],
-    eyes: "admin",
+    eyes: ["admin"],
   },
   {
     file: `${SEASON}/productions/new`,
     path: () => "/productions/new",
     may: EVERY_PERSON,
-    eyes: "md",
+    eyes: ["md"],
   },
 
   // A production.
@@ -177,76 +155,76 @@ export const PAGES: readonly PageRow[] = [
     path: ({ marrow }) => `/productions/${marrow}`,
     may: [...TABLE_OF_MARROW, "admin"],
     leadsOn: each(SINGS_OR_PLAYS_IN_MARROW, "/me"),
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/people`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/people`,
     may: [...TABLE_OF_TIDEWATCHER, "admin"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/score/(matrix)`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/score`,
     may: [...TABLE_OF_TIDEWATCHER, "admin"],
-    eyes: "assistant",
+    eyes: ["assistant"],
   },
   {
     file: `${PRODUCTION}/score/(matrix)`,
     of: "the second company",
     path: ({ candlemas }) => `/productions/${candlemas}/score`,
     may: TABLE_OF_CANDLEMAS,
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/score/read/[scoreId]`,
     path: ({ marrow, score }) => `/productions/${marrow}/score/read/${score}`,
     may: ["md"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/auditions/(list)`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/auditions`,
     may: TABLE_OF_TIDEWATCHER,
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/auditions/new`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/auditions/new`,
     may: ["md", "assistant", "stageManager"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/auditions/import`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/auditions/import`,
     may: ["md", "assistant", "stageManager"],
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/auditions/[dayId]/(day)`,
     path: ({ tidewatcher, auditionDay }) => `/productions/${tidewatcher}/auditions/${auditionDay}`,
     may: TABLE_OF_TIDEWATCHER,
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/auditions/[dayId]/change`,
     path: ({ tidewatcher, auditionDay }) =>
       `/productions/${tidewatcher}/auditions/${auditionDay}/change`,
     may: ["md", "assistant", "stageManager"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/auditions/[dayId]/running-order`,
     path: ({ tidewatcher, auditionDay }) =>
       `/productions/${tidewatcher}/auditions/${auditionDay}/running-order`,
     may: TABLE_OF_TIDEWATCHER,
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/callbacks`,
     path: ({ tidewatcher }) => `/productions/${tidewatcher}/callbacks`,
     may: TABLE_OF_TIDEWATCHER,
-    eyes: "director",
+    eyes: ["director"],
   },
   {
     file: `${PRODUCTION}/casting`,
@@ -254,61 +232,61 @@ export const PAGES: readonly PageRow[] = [
     path: ({ candlemas }) => `/productions/${candlemas}/casting`,
     // The stage manager (Ilse, here) sees the cast once it is out.
     may: ["md", "director"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/casting`,
     of: "once the list is out",
     path: ({ marrow }) => `/productions/${marrow}/casting`,
     may: TABLE_OF_MARROW,
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/rehearsals/(list)`,
     path: ({ marrow }) => `/productions/${marrow}/rehearsals`,
     may: [...TABLE_OF_MARROW, "admin"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/rehearsals/new`,
     path: ({ marrow }) => `/productions/${marrow}/rehearsals/new`,
     may: ["md", "stageManager"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/rehearsals/[callId]`,
     path: ({ marrow, call }) => `/productions/${marrow}/rehearsals/${call}`,
     may: [...TABLE_OF_MARROW, "admin"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/rehearsals/[callId]/change`,
     path: ({ marrow, call }) => `/productions/${marrow}/rehearsals/${call}/change`,
     may: ["md", "stageManager"],
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/pianists/(list)`,
     path: ({ marrow }) => `/productions/${marrow}/pianists`,
     may: ["md", "stageManager", "admin"],
-    eyes: "md",
+    eyes: ["md"],
   },
   {
     file: `${PRODUCTION}/call-sheets/(list)`,
     path: ({ marrow }) => `/productions/${marrow}/call-sheets`,
     may: [...TABLE_OF_MARROW, "admin"],
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/call-sheets/[localDate]`,
     path: ({ marrow, callDay }) => `/productions/${marrow}/call-sheets/${callDay}`,
     may: [...TABLE_OF_MARROW, "admin"],
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
   {
     file: `${PRODUCTION}/call-sheets/issues/[issueId]`,
     path: ({ marrow, issue }) => `/productions/${marrow}/call-sheets/issues/${issue}`,
     may: [...TABLE_OF_MARROW, "admin"],
-    eyes: "stageManager",
+    eyes: ["stageManager"],
   },
 ];

@@ -1,5 +1,5 @@
 import type { Locator, Page } from "playwright-core";
-import { visit } from "./visit";
+import { told, visit } from "./visit";
 
 /** The casting grid: singers down, roles across. */
 export class CastingPage {
@@ -54,7 +54,7 @@ export class CastingPage {
   async cast(singer: string, role: string): Promise<void> {
     await this.look(singer, role);
     await this.choice("Cast").click();
-    await this.side.getByRole("button", { name: "Cast", exact: true, pressed: true }).waitFor();
+    await told(this.page, `${singer} as ${role}: cast.`);
   }
 
   /** Whether a singer's cell says that the role is theirs. */

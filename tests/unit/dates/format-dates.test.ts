@@ -4,6 +4,7 @@ import {
   clockSpan,
   dayAndClock,
   dayOfYear,
+  daysOrClocks,
   localDay,
   longDay,
   shortDay,
@@ -31,4 +32,15 @@ test("a stretch past midnight says on which day it ends; midnight itself belongs
   expect(
     clockSpan(new Date("2027-01-04T22:00:00Z"), new Date("2027-01-05T00:00:00Z"), "Europe/London"),
   ).toBe("22:00–00:00");
+});
+
+test("days that are taken whole are named, not given as midnight to midnight", () => {
+  // The clocks go forward on 28 March 2027: that day has 23 hours and is still one day.
+  const span = (from: string, to: string) =>
+    daysOrClocks(new Date(from), new Date(to), "Europe/London");
+  expect(span("2027-03-20T00:00:00Z", "2027-03-21T00:00:00Z")).toBe("on Sat 20 Mar");
+  expect(span("2027-03-27T00:00:00Z", "2027-03-28T23:00:00Z")).toBe(
+    "from Sat 27 Mar to Sun 28 Mar",
+  );
+  expect(span("2027-03-20T18:00:00Z", "2027-03-20T19:00:00Z")).toBe("18:00–19:00");
 });
