@@ -1,5 +1,6 @@
 import { NextResponse } from "next/server";
 import type { NextRequest } from "next/server";
+import { ASKED_FOR } from "@/lib/auth/asked-for";
 
 /**
  * The nonce CSP and the usual headers on every page. It guards nothing: permission is asked in `lib/data`.
@@ -26,6 +27,8 @@ export function proxy(request: NextRequest): NextResponse {
   ].join("; ");
   const requestHeaders = new Headers(request.headers);
   requestHeaders.set("x-nonce", nonce);
+  // Where someone who has to sign in first comes back to: a layout does not know the page below it.
+  requestHeaders.set(ASKED_FOR, request.nextUrl.pathname + request.nextUrl.search);
   requestHeaders.set("content-security-policy", csp);
   const response = NextResponse.next({ request: { headers: requestHeaders } });
   response.headers.set("content-security-policy", csp);

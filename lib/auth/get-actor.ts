@@ -1,9 +1,11 @@
 import "server-only";
+import { headers } from "next/headers";
 import { redirect } from "next/navigation";
 import { cache } from "react";
 import { loadActor } from "@/lib/data/actor";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/types";
+import { ASKED_FOR } from "./asked-for";
 import { currentUserId } from "./current-user";
 
 /** Who is asking, or null: once per request. */
@@ -12,11 +14,12 @@ export const getActor = cache(async (): Promise<Actor | null> => {
   return userId ? loadActor(userId) : null;
 });
 
-/** For pages: who is asking; someone not signed in is sent to sign in and comes back to `from` after. */
+/** For pages: who is asking; someone not signed in is sent to sign in and comes back to what they asked for, or to `from`. */
 export async function pageActor(from: string): Promise<Actor> {
   const actor = await getActor();
-  if (!actor) redirect(`/sign-in?to=${encodeURIComponent(from)}`);
-  return actor;
+  if (actor) return actor;
+  const to = (await headers()).get(ASKED_FOR) ?? from;
+  redirect(`/sign-in?to=${encodeURIComponent(to)}`);
 }
 
 /** For actions and route handlers: who is asking. Throws `signed-out`. */

@@ -6,6 +6,7 @@ import { EmptyState } from "@/components/ui/empty-state";
 export default function SeasonError({ retry }: { retry: () => void }) {
   return (
     <EmptyState
+      level={1}
       title="The season could not be shown"
       action={
         <Button kind="primary" onClick={() => retry()}>

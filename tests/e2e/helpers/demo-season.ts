@@ -59,6 +59,7 @@ type Row = Record<string, unknown>;
 const asUuid = (hex: string): string =>
   hex.toLowerCase().replace(/^(.{8})(.{4})(.{4})(.{4})(.{12})$/, "$1-$2-$3-$4-$5");
 const asBytes = (id: string): Buffer => Buffer.from(id.replaceAll("-", ""), "hex");
+const hashOf = (secret: string): string => createHash("sha256").update(secret).digest("hex");
 const newSecret = (): string => randomBytes(32).toString("base64url");
 
 /** The database of the application under test. */
@@ -109,8 +110,12 @@ export class DemoDatabase {
     return sessions as Sessions;
   }
 
-  async signEveryoneOut(): Promise<void> {
+  /** Takes back what was put in past the application: the sessions, and the invitation with this secret. */
+  async takeBack(invitation: string): Promise<void> {
     await this.connection.query("delete from sessions where device = 'Every page'");
+    await this.connection.query("delete from invitations where token_hash = ?", [
+      hashOf(invitation),
+    ]);
   }
 
   /** An open invitation of Imke's; its page only shows it, so that nobody accepts it here. */
@@ -123,12 +128,7 @@ export class DemoDatabase {
     );
     await this.connection.query(
       "insert into invitations (id, position_id, email, token_hash, expires_at, created_at) values (?, ?, ?, ?, date_add(utc_timestamp(), interval 1 day), utc_timestamp())",
-      [
-        asBytes(v7()),
-        asBytes(position),
-        PEOPLE.imke,
-        createHash("sha256").update(secret).digest("hex"),
-      ],
+      [asBytes(v7()), asBytes(position), PEOPLE.imke, hashOf(secret)],
     );
     return secret;
   }

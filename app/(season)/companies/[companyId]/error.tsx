@@ -6,6 +6,7 @@ import { EmptyState } from "@/components/ui/empty-state";
 export default function CompanyError({ retry }: { retry: () => void }) {
   return (
     <EmptyState
+      level={1}
       title="This page could not be shown"
       action={
         <Button kind="primary" onClick={() => retry()}>

@@ -5,6 +5,7 @@ import { EmptyState } from "@/components/ui/empty-state";
 export default function CompanyNotFound() {
   return (
     <EmptyState
+      level={1}
       title="This is not here"
       action={
         <Button asChild>

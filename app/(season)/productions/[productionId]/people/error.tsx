@@ -6,6 +6,7 @@ import { EmptyState } from "@/components/ui/empty-state";
 export default function PeopleError({ retry }: { retry: () => void }) {
   return (
     <EmptyState
+      level={1}
       title="The people could not be shown"
       action={
         <Button kind="primary" onClick={() => retry()}>
