@@ -64,7 +64,7 @@ export const PAGES: readonly PageRow[] = [
     leadsOn: {
       ...each(["md", "assistant", "stageManager", "director", "admin"], "/season"),
       ...each(["hanne", "osric", "wren", "teo", "imke"], "/me"),
-      nobody: () => "/sign-in?to=%2Fme",
+      nobody: () => "/sign-in?to=%2Fsign-in%2Fdone",
     },
     eyes: [],
   },
