@@ -45,7 +45,10 @@ export class CallbacksPage {
   }
 
   async mark(singer: string, role: string): Promise<void> {
+    // The box is ticked at once; it is kept when the answer is there.
+    const kept = this.page.waitForResponse((answer) => answer.request().method() === "POST");
     await this.page.getByRole("checkbox", { name: `${singer} for ${role}`, exact: true }).check();
+    await kept;
   }
 
   async sayWhen(round: {

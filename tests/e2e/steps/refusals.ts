@@ -1,4 +1,10 @@
+import { expect } from "vitest";
 import type { Page } from "playwright-core";
+import { PEOPLE } from "../helpers/demo-season";
+import { CALL_DATE, SINGER, TITLE } from "../helpers/job";
+import type { Job, Made } from "../helpers/job";
+import { makeProduction, startCompany } from "../pages/productions";
+import { signInByLink, signInWithPassword } from "../pages/sign-in";
 
 /** Everyone who asks for the addresses of the production, the owner among them as the control. */
 export const ASKERS = [
@@ -10,9 +16,9 @@ export const ASKERS = [
   "music director elsewhere",
   "nobody",
 ] as const;
-export type Asker = (typeof ASKERS)[number];
+type Asker = (typeof ASKERS)[number];
 
-export type Address = {
+type Address = {
   path: string;
   /** Who gets it; all others are told that there is no such page, or to sign in. */
   may: readonly Asker[];
@@ -25,23 +31,12 @@ const PLANNERS: Asker[] = [...MUSIC, "stage manager"];
 const TABLE: Asker[] = [...MUSIC, "director at the table"];
 const TEAM: Asker[] = [...PLANNERS, "director at the table"];
 
-/** The addresses that one run through the main job leaves behind. */
-export type Made = {
-  production: string;
-  reading: string;
-  day: string;
-  call: string;
-  /** "2027-03-20" */
-  callDate: string;
-  issue: string;
-};
-
 /**
  * Every page and download of the main job, with who gets it. Positions as "Who uses it, and what each must be able to do"
  * has them: the stage manager runs days and calls and sees no casting before it is out; the table hears, marks and sees the
  * grid; accompanists and actors have pages of their own and none of these.
  */
-export function addressesOf(made: Made): Address[] {
+function addressesOf(made: Made): Address[] {
   const { production, day, call, issue } = made;
   const api = `/api${production}`;
   const id = (address: string): string => address.split("/").at(-1) ?? "";
@@ -64,7 +59,7 @@ export function addressesOf(made: Made): Address[] {
     page(`${call}/change`, PLANNERS),
     page(`${production}/pianists`, PLANNERS),
     page(`${production}/call-sheets`, TEAM),
-    page(`${production}/call-sheets/${made.callDate}`, TEAM),
+    page(`${production}/call-sheets/${CALL_DATE}`, TEAM),
     page(issue, TEAM),
     page(`${production}/people`, TEAM),
     file(`${api}/auditions/template`, PLANNERS),
@@ -78,12 +73,17 @@ export function addressesOf(made: Made): Address[] {
   ];
 }
 
+/** What a refusal must not name: the singers, and to strangers the production itself. */
+const PEOPLE_OF_IT = [SINGER.name, "Kalinda Morrow"];
+const INSIDE: Asker[] = ["stage manager", "director at the table", "accompanist", "singer"];
+const REFUSAL = /is not here|There is no such page/;
+
 type Answer = { status: number; words: string; signIn: boolean };
 
 async function ask(page: Page, { path, file }: Address): Promise<Answer> {
   if (file) {
     const response = await page.request.get(path, { maxRedirects: 0 });
-    const { status } = { status: response.status() };
+    const status = response.status();
     return { status, words: status === 200 ? "" : await response.text(), signIn: status === 401 };
   }
   const response = await page.goto(path, { waitUntil: "load" });
@@ -98,14 +98,9 @@ async function ask(page: Page, { path, file }: Address): Promise<Answer> {
 
 /**
  * Asks for every address as one person, and returns in words whatever is not as it should be: refused to those who may,
- * open to those who may not, or refused in words that still give something of the production away (`secrets`).
+ * open to those who may not, or refused in words that still give something of the production away.
  */
-export async function wrongAnswers(
-  page: Page,
-  asker: Asker,
-  addresses: Address[],
-  secrets: string[],
-): Promise<string[]> {
+async function wrongAnswers(page: Page, asker: Asker, addresses: Address[]): Promise<string[]> {
   const wrong: string[] = [];
   for (const address of addresses) {
     const { status, words, signIn } = await ask(page, address);
@@ -114,12 +109,50 @@ export async function wrongAnswers(
       if (status !== 200 || signIn) wrong.push(`refused ${what}`);
       continue;
     }
-    const refused = asker === "nobody" ? signIn : status === 404;
+    // Somebody of the production knows that there is a grid, and a program may tell them that it is not for them.
+    const inside = INSIDE.includes(asker);
+    const refused =
+      asker === "nobody" ? signIn : status === 404 || (inside && address.file && status === 403);
     if (!refused) wrong.push(`not refused as it should be ${what}`);
-    if (!address.file && asker !== "nobody" && !words.includes("There is no such page"))
+    if (!address.file && asker !== "nobody" && !REFUSAL.test(words))
       wrong.push(`no plain refusal ${what}`);
-    const given = secrets.filter((secret) => words.includes(secret));
+    const given = (inside ? PEOPLE_OF_IT : [TITLE, ...PEOPLE_OF_IT]).filter((secret) =>
+      words.includes(secret),
+    );
     if (given.length > 0) wrong.push(`gives away ${given.join(", ")}: ${what}`);
   }
   return wrong;
+}
+
+/** Sits each of the askers down: those of the journey where they are, the others anew. */
+async function enter(job: Job, asker: Asker): Promise<Page> {
+  const { stage, mailbox, md, phone } = job;
+  if (asker === "music director") return md;
+  if (asker === "singer") return phone;
+  const desk = await stage.desk(asker);
+  if (asker === "stage manager") await signInWithPassword(desk, PEOPLE.stageManager);
+  if (asker === "director at the table") await signInWithPassword(desk, PEOPLE.director);
+  if (asker === "accompanist") await signInWithPassword(desk, PEOPLE.osric);
+  if (asker === "music director elsewhere") {
+    await signInByLink(desk, `md.${Date.now().toString(36)}@elsewhere.example`, mailbox);
+    await startCompany(desk, "Quayside Players");
+    await makeProduction(desk, { title: "Somebody Else’s" });
+  }
+  return desk;
+}
+
+/** Every page and download of the main job, asked for by one person. */
+export async function askForEverything(job: Job, asker: Asker): Promise<void> {
+  const page = await enter(job, asker);
+  expect(await wrongAnswers(page, asker, addressesOf(job.made))).toEqual([]);
+}
+
+/** The singer, who is let off, has no call sheet of that day. */
+export async function otherSheets({ phone, made }: Job): Promise<void> {
+  const own = `/me/call-sheets/${made.issue.split("/").at(-1) ?? ""}`;
+  expect((await phone.goto(own))?.status()).toBe(404);
+}
+
+export async function complaints({ stage }: Job): Promise<void> {
+  expect(stage.complaints).toEqual([]);
 }
