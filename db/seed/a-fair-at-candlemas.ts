@@ -36,27 +36,23 @@ const CALLED_BACK: [voice: VoiceKind, roles: string[]][] = [
 export async function seedCandlemas(tx: Tx, companies: Companies): Promise<string> {
   const companyId = companies.fenmoor;
   const seasonId = newId();
-  await tx
-    .insert(seasons)
-    .values({
-      id: seasonId,
-      companyId,
-      title: "This season",
-      startsOn: dayFromToday(-60),
-      endsOn: dayFromToday(200),
-    });
+  await tx.insert(seasons).values({
+    id: seasonId,
+    companyId,
+    title: "This season",
+    startsOn: dayFromToday(-60),
+    endsOn: dayFromToday(200),
+  });
   const productionId = newId();
-  await tx
-    .insert(productions)
-    .values({
-      id: productionId,
-      companyId,
-      seasonId,
-      title: "A Fair at Candlemas",
-      stage: "casting",
-      opensOn: dayFromToday(80),
-      closesOn: dayFromToday(86),
-    });
+  await tx.insert(productions).values({
+    id: productionId,
+    companyId,
+    seasonId,
+    title: "A Fair at Candlemas",
+    stage: "casting",
+    opensOn: dayFromToday(80),
+    closesOn: dayFromToday(86),
+  });
   const who = companies.atFenmoor;
   await give(tx, companyId, who.md, "music_director", productionId);
   await give(tx, companyId, who.director, "director", productionId);
@@ -151,30 +147,26 @@ export async function seedCandlemas(tx: Tx, companies: Companies): Promise<strin
         ? who.wren
         : await joinCompany(tx, companyId, { userId: null, name, email: inventedEmail(name) });
     await give(tx, companyId, personId, "actor", productionId);
-    await tx
-      .insert(signUps)
-      .values({
-        productionId,
-        personId,
-        place: index + 1,
-        state: "confirmed",
-        song: "Fairy Lullaby",
-        bars: 32,
-        asksFor: wanted[0] ?? null,
-      });
+    await tx.insert(signUps).values({
+      productionId,
+      personId,
+      place: index + 1,
+      state: "confirmed",
+      song: "Fairy Lullaby",
+      bars: 32,
+      asksFor: wanted[0] ?? null,
+    });
     const range = inventedRange(voice, 200 + index);
     await tx.insert(ranges).values({ personId, kind: "claimed", ...range });
     if (index % 2 === 0)
-      await tx
-        .insert(ranges)
-        .values({
-          personId,
-          kind: "heard",
-          ...range,
-          low: range.low + 1,
-          high: range.high - 1,
-          productionId,
-        });
+      await tx.insert(ranges).values({
+        personId,
+        kind: "heard",
+        ...range,
+        low: range.low + 1,
+        high: range.high - 1,
+        productionId,
+      });
     for (const role of wanted) {
       const roleId = roleIds[role];
       if (roleId) await tx.insert(callbackMarks).values({ roundId, personId, roleId });

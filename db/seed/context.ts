@@ -42,16 +42,14 @@ export async function joinCompany(
   extra: { phone?: string; pronouns?: string; minor?: boolean } = {},
 ): Promise<string> {
   const id = newId();
-  await tx
-    .insert(people)
-    .values({
-      id,
-      companyId,
-      userId: person.userId,
-      name: person.name,
-      email: person.email,
-      ...extra,
-    });
+  await tx.insert(people).values({
+    id,
+    companyId,
+    userId: person.userId,
+    name: person.name,
+    email: person.email,
+    ...extra,
+  });
   return id;
 }
 

@@ -334,16 +334,14 @@ export async function seedMarrowStreet(tx: Tx, companies: Companies): Promise<st
     if (call.numbers.length === 1) rows.push({ numberId: null, minutes: 15 });
     for (const [place, row] of rows.entries()) {
       const blockId = newId();
-      await tx
-        .insert(blocks)
-        .values({
-          id: blockId,
-          callId,
-          place: place + 1,
-          kind: row.numberId ? "number" : "break",
-          minutes: row.minutes,
-          numberId: row.numberId,
-        });
+      await tx.insert(blocks).values({
+        id: blockId,
+        callId,
+        place: place + 1,
+        kind: row.numberId ? "number" : "break",
+        minutes: row.minutes,
+        numberId: row.numberId,
+      });
       if (!row.numberId) continue;
       const needed = new Set((sings[row.numberId] ?? []).flatMap((role) => castOf[role] ?? []));
       for (const personId of needed)
@@ -356,16 +354,14 @@ export async function seedMarrowStreet(tx: Tx, companies: Companies): Promise<st
         .select({ userId: people.userId })
         .from(people)
         .where(eq(people.id, call.pianist));
-      await tx
-        .insert(pianistSessions)
-        .values({
-          productionId,
-          personId: call.pianist,
-          bookeeId: row?.userId ?? call.pianist,
-          callId,
-          startsAt,
-          endsAt,
-        });
+      await tx.insert(pianistSessions).values({
+        productionId,
+        personId: call.pianist,
+        bookeeId: row?.userId ?? call.pianist,
+        callId,
+        startsAt,
+        endsAt,
+      });
     }
   }
   const away = weekday(6, 0);

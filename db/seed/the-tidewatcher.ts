@@ -130,27 +130,23 @@ export async function seedTidewatcher(
 ): Promise<{ productionId: string; doorSecret: string }> {
   const companyId = companies.lantern;
   const seasonId = newId();
-  await tx
-    .insert(seasons)
-    .values({
-      id: seasonId,
-      companyId,
-      title: "This season",
-      startsOn: dayFromToday(-60),
-      endsOn: dayFromToday(200),
-    });
+  await tx.insert(seasons).values({
+    id: seasonId,
+    companyId,
+    title: "This season",
+    startsOn: dayFromToday(-60),
+    endsOn: dayFromToday(200),
+  });
   const productionId = newId();
-  await tx
-    .insert(productions)
-    .values({
-      id: productionId,
-      companyId,
-      seasonId,
-      title: "The Tidewatcher",
-      stage: "auditions",
-      opensOn: dayFromToday(110),
-      closesOn: dayFromToday(120),
-    });
+  await tx.insert(productions).values({
+    id: productionId,
+    companyId,
+    seasonId,
+    title: "The Tidewatcher",
+    stage: "auditions",
+    opensOn: dayFromToday(110),
+    closesOn: dayFromToday(120),
+  });
   const who = companies.atLantern;
   await give(tx, companyId, who.md, "music_director", productionId);
   await give(tx, companyId, who.assistant, "assistant_md", productionId);
@@ -179,12 +175,10 @@ export async function seedTidewatcher(
   await invite(tx, singers[38], singers[39]);
 
   const doorSecret = randomBytes(32).toString("base64url");
-  await tx
-    .insert(dayLinks)
-    .values({
-      dayId: today.dayId,
-      tokenHash: createHash("sha256").update(doorSecret).digest("hex"),
-    });
+  await tx.insert(dayLinks).values({
+    dayId: today.dayId,
+    tokenHash: createHash("sha256").update(doorSecret).digest("hex"),
+  });
   return { productionId, doorSecret };
 }
 
@@ -242,29 +236,25 @@ async function addDay(
     const lunch = plan.items.find((item) => item.kind === "lunch");
     const personId = companies.atLantern[pianist];
     const bookeeId = await loginOf(tx, personId);
-    await tx
-      .insert(pianistSessions)
-      .values({
+    await tx.insert(pianistSessions).values({
+      productionId,
+      personId,
+      bookeeId,
+      auditionRoomId,
+      startsAt: opensAt,
+      endsAt: lunch?.from ?? closesAt,
+      state: "confirmed",
+    });
+    if (pianist === "hanne" && lunch) {
+      await tx.insert(pianistSessions).values({
         productionId,
         personId,
         bookeeId,
         auditionRoomId,
-        startsAt: opensAt,
-        endsAt: lunch?.from ?? closesAt,
+        startsAt: lunch.to,
+        endsAt: closesAt,
         state: "confirmed",
       });
-    if (pianist === "hanne" && lunch) {
-      await tx
-        .insert(pianistSessions)
-        .values({
-          productionId,
-          personId,
-          bookeeId,
-          auditionRoomId,
-          startsAt: lunch.to,
-          endsAt: closesAt,
-          state: "confirmed",
-        });
     }
   }
   return { dayId, free: free.sort((a, b) => a.startsAt.getTime() - b.startsAt.getTime()) };

@@ -27,15 +27,13 @@ export async function createCompany(
     const companyId = newId();
     const personId = newId();
     await tx.insert(companies).values({ id: companyId, ...input });
-    await tx
-      .insert(people)
-      .values({
-        id: personId,
-        companyId,
-        userId: actor.userId,
-        name: actor.name,
-        email: actor.email,
-      });
+    await tx.insert(people).values({
+      id: personId,
+      companyId,
+      userId: actor.userId,
+      name: actor.name,
+      email: actor.email,
+    });
     await tx.insert(positions).values([
       { companyId, personId, kind: "company_admin" },
       { companyId, personId, kind: "music_director" },

@@ -42,28 +42,24 @@ beforeEach(async () => {
     { id: maren, productionId: world.productionId, name: "Maren", place: 1 },
     { id: bet, productionId: world.productionId, name: "Old Bet", place: 2 },
   ]);
-  await db
-    .insert(t.numbers)
-    .values({
-      id: numberId,
-      productionId: world.productionId,
-      label: "1",
-      title: "The Ness Light",
-      place: 1,
-    });
+  await db.insert(t.numbers).values({
+    id: numberId,
+    productionId: world.productionId,
+    label: "1",
+    title: "The Ness Light",
+    place: 1,
+  });
   // Maren sings B♭3 to A5 (MIDI 58–81), as in the design's casting grid.
-  await db
-    .insert(t.vocalLines)
-    .values({
-      roleId: maren,
-      numberId,
-      source: "typed",
-      low: 58,
-      high: 81,
-      lowSpelled: "B♭3",
-      highSpelled: "A5",
-      histogram: { "58": 1, "65": 30, "70": 30, "76": 20, "80": 1, "81": 1 },
-    });
+  await db.insert(t.vocalLines).values({
+    roleId: maren,
+    numberId,
+    source: "typed",
+    low: 58,
+    high: 81,
+    lowSpelled: "B♭3",
+    highSpelled: "A5",
+    histogram: { "58": 1, "65": 30, "70": 30, "76": 20, "80": 1, "81": 1 },
+  });
   for (const [index, person] of [world.people.actor, world.people.otherActor].entries()) {
     await db
       .insert(t.signUps)
@@ -175,28 +171,24 @@ describe("callbacks", () => {
 
   test("a room that is taken then is refused, and nothing goes out", async () => {
     const callId = newId();
-    await db
-      .insert(t.calls)
-      .values({
-        id: callId,
-        productionId: world.siblingProductionId,
-        kind: "music",
-        startsAt: new Date("2027-03-23T17:00:00Z"),
-        endsAt: new Date("2027-03-23T18:30:00Z"),
-        localDate: "2027-03-23",
-        localTime: "17:00",
-        zone: "Europe/London",
-        roomId: world.roomId,
-        state: "published",
-      });
-    await db
-      .insert(t.roomBookings)
-      .values({
-        roomId: world.roomId,
-        startsAt: new Date("2027-03-23T17:00:00Z"),
-        endsAt: new Date("2027-03-23T18:30:00Z"),
-        callId,
-      });
+    await db.insert(t.calls).values({
+      id: callId,
+      productionId: world.siblingProductionId,
+      kind: "music",
+      startsAt: new Date("2027-03-23T17:00:00Z"),
+      endsAt: new Date("2027-03-23T18:30:00Z"),
+      localDate: "2027-03-23",
+      localTime: "17:00",
+      zone: "Europe/London",
+      roomId: world.roomId,
+      state: "published",
+    });
+    await db.insert(t.roomBookings).values({
+      roomId: world.roomId,
+      startsAt: new Date("2027-03-23T17:00:00Z"),
+      endsAt: new Date("2027-03-23T18:30:00Z"),
+      callId,
+    });
     const roundId = await begin();
     await when(roundId, 1);
     await mark(roundId, world.people.actor, maren);
@@ -307,15 +299,13 @@ describe("the casting grid", () => {
   });
 
   test("a heard range beats a claimed one", async () => {
-    await db
-      .insert(t.ranges)
-      .values({
-        personId: world.people.actor.personId,
-        kind: "heard",
-        low: 55,
-        high: 82,
-        productionId: world.productionId,
-      });
+    await db.insert(t.ranges).values({
+      personId: world.people.actor.personId,
+      kind: "heard",
+      low: 55,
+      high: 82,
+      productionId: world.productionId,
+    });
     md();
     expect(
       await computeFit({

@@ -15,15 +15,13 @@ beforeEach(async () => {
   world = await makeWorld();
   dayId = newId();
   auditionRoomId = newId();
-  await db
-    .insert(t.auditionDays)
-    .values({
-      id: dayId,
-      productionId: world.productionId,
-      localDate: "2027-03-20",
-      zone: "Europe/London",
-      slotMinutes: 8,
-    });
+  await db.insert(t.auditionDays).values({
+    id: dayId,
+    productionId: world.productionId,
+    localDate: "2027-03-20",
+    zone: "Europe/London",
+    slotMinutes: 8,
+  });
   await db
     .insert(t.auditionRooms)
     .values({ id: auditionRoomId, dayId, roomId: world.roomId, opensAt: at(10), closesAt: at(16) });
@@ -33,18 +31,16 @@ const at = (hour: number, minute = 0) => new Date(Date.UTC(2027, 2, 20, hour, mi
 
 async function addCall(from: Date, to: Date): Promise<string> {
   const id = newId();
-  await db
-    .insert(t.calls)
-    .values({
-      id,
-      productionId: world.productionId,
-      kind: "music",
-      startsAt: from,
-      endsAt: to,
-      localDate: "2027-03-20",
-      localTime: "10:00",
-      zone: "Europe/London",
-    });
+  await db.insert(t.calls).values({
+    id,
+    productionId: world.productionId,
+    kind: "music",
+    startsAt: from,
+    endsAt: to,
+    localDate: "2027-03-20",
+    localTime: "10:00",
+    zone: "Europe/London",
+  });
   return id;
 }
 
@@ -118,16 +114,14 @@ describe("a pianist", () => {
   ) => {
     const callId = await addCall(from, to);
     return outcome(
-      db
-        .insert(t.pianistSessions)
-        .values({
-          productionId,
-          personId: who.personId,
-          bookeeId: who.userId,
-          startsAt: from,
-          endsAt: to,
-          callId,
-        }),
+      db.insert(t.pianistSessions).values({
+        productionId,
+        personId: who.personId,
+        bookeeId: who.userId,
+        startsAt: from,
+        endsAt: to,
+        callId,
+      }),
     );
   };
 
@@ -136,14 +130,12 @@ describe("a pianist", () => {
     expect(await play(pianist, at(10), at(13))).toBe("written");
     expect(await play(pianist, at(12), at(14))).toBe("pianist_sessions_held");
     const there = newId();
-    await db
-      .insert(t.people)
-      .values({
-        id: there,
-        companyId: world.otherCompanyId,
-        userId: pianist.userId,
-        name: pianist.name,
-      });
+    await db.insert(t.people).values({
+      id: there,
+      companyId: world.otherCompanyId,
+      userId: pianist.userId,
+      name: pianist.name,
+    });
     expect(
       await play(
         { personId: there, userId: pianist.userId },
@@ -202,14 +194,12 @@ describe("positions and people", () => {
   test("a position is held once while open, and may be held again after it ended", async () => {
     const again = () =>
       outcome(
-        db
-          .insert(t.positions)
-          .values({
-            companyId: world.companyId,
-            personId: world.people.actor.personId,
-            productionId: world.productionId,
-            kind: "actor",
-          }),
+        db.insert(t.positions).values({
+          companyId: world.companyId,
+          personId: world.people.actor.personId,
+          productionId: world.productionId,
+          kind: "actor",
+        }),
       );
     expect(await again()).toBe("positions_open");
     await db
@@ -242,16 +232,14 @@ describe("impossible rows", () => {
     ).toBe("errno 4025");
     expect(
       await outcome(
-        db
-          .insert(t.conflicts)
-          .values({
-            personId: world.people.actor.personId,
-            startsAt: at(12),
-            endsAt: at(11),
-            localFrom: "2027-03-20",
-            localTo: "2027-03-20",
-            zone: "UTC",
-          }),
+        db.insert(t.conflicts).values({
+          personId: world.people.actor.personId,
+          startsAt: at(12),
+          endsAt: at(11),
+          localFrom: "2027-03-20",
+          localTo: "2027-03-20",
+          zone: "UTC",
+        }),
       ),
     ).toBe("errno 4025");
     // 1452: the row of another table that it names does not exist.

@@ -51,89 +51,75 @@ export async function makeRichWorld() {
     { id: ids.otherRoleId, productionId, name: "Old Bet", place: 2 },
   ]);
   const stored = await storeFile(new TextEncoder().encode(SCORE_XML));
-  await db
-    .insert(t.files)
-    .values({
-      id: ids.fileId,
-      companyId,
-      productionId,
-      mediaType: "application/xml",
-      name: "low-water.musicxml",
-      kind: "score",
-      ...stored,
-    });
+  await db.insert(t.files).values({
+    id: ids.fileId,
+    companyId,
+    productionId,
+    mediaType: "application/xml",
+    name: "low-water.musicxml",
+    kind: "score",
+    ...stored,
+  });
   await db
     .insert(t.scores)
     .values({ id: ids.scoreId, productionId, fileId: ids.fileId, title: "Low Water" });
-  await db
-    .insert(t.scoreParts)
-    .values({
-      id: ids.scorePartId,
-      scoreId: ids.scoreId,
-      partId: "P1",
-      place: 0,
-      name: "Voice",
-      vocal: true,
-      low: 60,
-      high: 60,
-      lowSpelled: "C4",
-      highSpelled: "C4",
-      histogram: { "60": 4 },
-      warnings: [],
-    });
+  await db.insert(t.scoreParts).values({
+    id: ids.scorePartId,
+    scoreId: ids.scoreId,
+    partId: "P1",
+    place: 0,
+    name: "Voice",
+    vocal: true,
+    low: 60,
+    high: 60,
+    lowSpelled: "C4",
+    highSpelled: "C4",
+    histogram: { "60": 4 },
+    warnings: [],
+  });
   await db.insert(t.numbers).values([
     { id: ids.numberId, productionId, label: "1", title: "The Ness Light", place: 1, seconds: 180 },
     { id: ids.otherNumberId, productionId, label: "2", title: "Low Water", place: 2, seconds: 120 },
   ]);
-  await db
-    .insert(t.vocalLines)
-    .values({
-      id: ids.lineId,
-      roleId: ids.roleId,
-      numberId: ids.numberId,
-      source: "typed",
-      low: 58,
-      high: 81,
-      lowSpelled: "B♭3",
-      highSpelled: "A5",
-    });
-  await db
-    .insert(t.auditionDays)
-    .values({
-      id: ids.dayId,
-      productionId,
-      localDate: "2027-03-20",
-      zone: "Europe/London",
-      slotMinutes: 8,
-    });
-  await db
-    .insert(t.auditionRooms)
-    .values({
-      id: ids.auditionRoomId,
-      dayId: ids.dayId,
-      roomId: world.roomId,
-      opensAt: at(10),
-      closesAt: at(12),
-    });
-  await db
-    .insert(t.roomBookings)
-    .values({
-      roomId: world.roomId,
-      startsAt: at(10),
-      endsAt: at(12),
+  await db.insert(t.vocalLines).values({
+    id: ids.lineId,
+    roleId: ids.roleId,
+    numberId: ids.numberId,
+    source: "typed",
+    low: 58,
+    high: 81,
+    lowSpelled: "B♭3",
+    highSpelled: "A5",
+  });
+  await db.insert(t.auditionDays).values({
+    id: ids.dayId,
+    productionId,
+    localDate: "2027-03-20",
+    zone: "Europe/London",
+    slotMinutes: 8,
+  });
+  await db.insert(t.auditionRooms).values({
+    id: ids.auditionRoomId,
+    dayId: ids.dayId,
+    roomId: world.roomId,
+    opensAt: at(10),
+    closesAt: at(12),
+  });
+  await db.insert(t.roomBookings).values({
+    roomId: world.roomId,
+    startsAt: at(10),
+    endsAt: at(12),
+    auditionRoomId: ids.auditionRoomId,
+  });
+  await db.insert(t.slots).values(
+    [ids.slotId, ids.otherSlotId, ids.freeSlotId].map((id, n) => ({
+      id,
       auditionRoomId: ids.auditionRoomId,
-    });
-  await db
-    .insert(t.slots)
-    .values(
-      [ids.slotId, ids.otherSlotId, ids.freeSlotId].map((id, n) => ({
-        id,
-        auditionRoomId: ids.auditionRoomId,
-        kind: "slot" as const,
-        startsAt: at(10, n * 8),
-        endsAt: at(10, n * 8 + 8),
-      })),
-    );
+      kind: "slot" as const,
+      startsAt: at(10, n * 8),
+      endsAt: at(10, n * 8 + 8),
+    })),
+  );
   await db.insert(t.signUps).values([
     {
       id: ids.signUpId,
@@ -157,32 +143,28 @@ export async function makeRichWorld() {
     { slotId: ids.otherSlotId, signUpId: ids.otherSignUpId, dayId: ids.dayId },
   ]);
   await db.insert(t.dayLinks).values({ dayId: ids.dayId, tokenHash: hashToken(doorSecret) });
-  await db
-    .insert(t.pianistSessions)
-    .values({
-      id: ids.auditionSessionId,
-      productionId,
-      personId: people.accompanist.personId,
-      bookeeId: people.accompanist.userId,
-      auditionRoomId: ids.auditionRoomId,
-      startsAt: at(10),
-      endsAt: at(11),
-    });
+  await db.insert(t.pianistSessions).values({
+    id: ids.auditionSessionId,
+    productionId,
+    personId: people.accompanist.personId,
+    bookeeId: people.accompanist.userId,
+    auditionRoomId: ids.auditionRoomId,
+    startsAt: at(10),
+    endsAt: at(11),
+  });
   await db
     .insert(t.ranges)
     .values({ personId: people.actor.personId, kind: "claimed", low: 55, high: 79 });
-  await db
-    .insert(t.callbackRounds)
-    .values({
-      id: ids.roundId,
-      productionId,
-      title: "Callbacks",
-      zone: "Europe/London",
-      startsAt: at(18, 0, 23),
-      endsAt: at(20, 0, 23),
-      issue: 1,
-      publishedAt: new Date(),
-    });
+  await db.insert(t.callbackRounds).values({
+    id: ids.roundId,
+    productionId,
+    title: "Callbacks",
+    zone: "Europe/London",
+    startsAt: at(18, 0, 23),
+    endsAt: at(20, 0, 23),
+    issue: 1,
+    publishedAt: new Date(),
+  });
   await db
     .insert(t.callbackMarks)
     .values({ roundId: ids.roundId, personId: people.actor.personId, roleId: ids.roleId });
@@ -254,37 +236,31 @@ export async function makeRichWorld() {
     { blockId: ids.blockId, personId: people.actor.personId, source: "score" },
     { blockId: ids.publishedBlockId, personId: people.actor.personId, source: "score" },
   ]);
-  await db
-    .insert(t.roomBookings)
-    .values({
-      roomId: world.roomId,
-      startsAt: at(20, 0, 24),
-      endsAt: at(21, 0, 24),
-      callId: ids.publishedCallId,
-    });
-  await db
-    .insert(t.pianistSessions)
-    .values({
-      productionId,
-      personId: people.accompanist.personId,
-      bookeeId: people.accompanist.userId,
-      callId: ids.publishedCallId,
-      startsAt: at(20, 0, 24),
-      endsAt: at(21, 0, 24),
-    });
-  await db
-    .insert(t.conflicts)
-    .values({
-      id: ids.conflictId,
-      personId: people.actor.personId,
-      startsAt: at(17, 0, 24),
-      endsAt: at(19, 0, 24),
-      localFrom: "2027-03-24",
-      localTo: "2027-03-24",
-      timeFrom: "17:00",
-      timeTo: "19:00",
-      zone: "Europe/London",
-    });
+  await db.insert(t.roomBookings).values({
+    roomId: world.roomId,
+    startsAt: at(20, 0, 24),
+    endsAt: at(21, 0, 24),
+    callId: ids.publishedCallId,
+  });
+  await db.insert(t.pianistSessions).values({
+    productionId,
+    personId: people.accompanist.personId,
+    bookeeId: people.accompanist.userId,
+    callId: ids.publishedCallId,
+    startsAt: at(20, 0, 24),
+    endsAt: at(21, 0, 24),
+  });
+  await db.insert(t.conflicts).values({
+    id: ids.conflictId,
+    personId: people.actor.personId,
+    startsAt: at(17, 0, 24),
+    endsAt: at(19, 0, 24),
+    localFrom: "2027-03-24",
+    localTo: "2027-03-24",
+    timeFrom: "17:00",
+    timeTo: "19:00",
+    zone: "Europe/London",
+  });
   await db.insert(t.callSheetIssues).values({
     id: ids.issueId,
     productionId,
@@ -333,23 +309,19 @@ export async function makeRichWorld() {
   await db
     .insert(t.people)
     .values({ id: invited, companyId, name: "Ansa Kole", email: "ansa.kole@people.example" });
-  await db
-    .insert(t.positions)
-    .values({
-      id: ids.positionId,
-      companyId,
-      productionId,
-      personId: invited,
-      kind: "choreographer",
-    });
-  await db
-    .insert(t.invitations)
-    .values({
-      id: ids.accountInvitationId,
-      positionId: ids.positionId,
-      email: "ansa.kole@people.example",
-      tokenHash: hashToken(invitationSecret),
-      expiresAt: new Date(Date.now() + 86_400_000),
-    });
+  await db.insert(t.positions).values({
+    id: ids.positionId,
+    companyId,
+    productionId,
+    personId: invited,
+    kind: "choreographer",
+  });
+  await db.insert(t.invitations).values({
+    id: ids.accountInvitationId,
+    positionId: ids.positionId,
+    email: "ansa.kole@people.example",
+    tokenHash: hashToken(invitationSecret),
+    expiresAt: new Date(Date.now() + 86_400_000),
+  });
   return { ...world, ...ids, doorSecret, invitationSecret, invitedPersonId: invited };
 }

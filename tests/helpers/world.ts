@@ -152,13 +152,11 @@ export async function makeWorld() {
     outsiderAdmin: await makePerson(otherCompanyId, "Maud Ferris", { kind: "company_admin" }),
   };
   const strangerId = newId();
-  await db
-    .insert(t.users)
-    .values({
-      id: strangerId,
-      name: "Nobody Known",
-      email: `stranger.${strangerId.slice(-6)}@people.example`,
-    });
+  await db.insert(t.users).values({
+    id: strangerId,
+    name: "Nobody Known",
+    email: `stranger.${strangerId.slice(-6)}@people.example`,
+  });
   return {
     companyId,
     otherCompanyId,

@@ -52,8 +52,12 @@ export class SheetPage {
     return { name: file.suggestedFilename(), path: await file.path() };
   }
 
-  /** The pages that a printer would get. */
-  print(): Promise<Buffer> {
-    return this.page.pdf({ preferCSSPageSize: true });
+  /** What a printer would get: the words on the paper, and the pages. */
+  async print(): Promise<{ words: string; pages: Buffer }> {
+    await this.page.emulateMedia({ media: "print" });
+    const words = await this.page.locator("body").innerText();
+    const pages = await this.page.pdf({ preferCSSPageSize: true });
+    await this.page.emulateMedia({ media: null });
+    return { words, pages };
   }
 }

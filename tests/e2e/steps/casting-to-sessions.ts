@@ -117,8 +117,12 @@ export async function issueTheSheet({ stage, mailbox, made }: Job): Promise<void
   ]);
   expect(workbook.rows.flat()).toEqual(expect.arrayContaining(notes));
   expect(workbook).toMatchObject({ formulas: 0, paper: "9", landscape: true });
+  const { words, pages } = await sheet.print();
+  expect(words).toContain(TITLE);
+  // The frame, the buttons and who has read it stay on the screen.
+  expect(words).not.toMatch(/Auditions|Print|Take away|Who has read it/);
   // A4 upright, in points.
-  expect((await sheet.print()).toString("latin1")).toMatch(/\/MediaBox \[0 0 59[45]\S* 84[12]/);
+  expect(pages.toString("latin1")).toMatch(/\/MediaBox \[0 0 59[45]\S* 84[12]/);
 }
 
 /** The accompanist sees only their own sessions, in order, with room, people and music. */

@@ -13,6 +13,8 @@ export const ASKERS = [
   "director at the table",
   "accompanist",
   "singer",
+  "company admin",
+  "singer of another production",
   "music director elsewhere",
   "nobody",
 ] as const;
@@ -30,11 +32,13 @@ const MUSIC: Asker[] = ["music director"];
 const PLANNERS: Asker[] = [...MUSIC, "stage manager"];
 const TABLE: Asker[] = [...MUSIC, "director at the table"];
 const TEAM: Asker[] = [...PLANNERS, "director at the table"];
+const COMPANY: Asker[] = [...TEAM, "company admin"];
 
 /**
  * Every page and download of the main job, with who gets it. Positions as "Who uses it, and what each must be able to do"
  * has them: the stage manager runs days and calls and sees no casting before it is out; the table hears, marks and sees the
- * grid; accompanists and actors have pages of their own and none of these.
+ * grid; the company's admin hears nobody and sees no casting; accompanists and actors have pages of their own and none of
+ * these.
  */
 function addressesOf(made: Made): Address[] {
   const { production, day, call, issue } = made;
@@ -43,7 +47,8 @@ function addressesOf(made: Made): Address[] {
   const page = (path: string, may: Asker[]): Address => ({ path, may });
   const file = (path: string, may: Asker[]): Address => ({ path, may, file: true });
   return [
-    page(`${production}/score`, TEAM),
+    page(production, COMPANY),
+    page(`${production}/score`, COMPANY),
     page(made.reading, MUSIC),
     page(`${production}/auditions`, TEAM),
     page(`${production}/auditions/new`, PLANNERS),
@@ -53,38 +58,51 @@ function addressesOf(made: Made): Address[] {
     page(`${day}/running-order`, TEAM),
     page(`${production}/callbacks`, TEAM),
     page(`${production}/casting`, TABLE),
-    page(`${production}/rehearsals`, TEAM),
+    page(`${production}/rehearsals`, COMPANY),
     page(`${production}/rehearsals/new`, PLANNERS),
-    page(call, TEAM),
+    page(call, COMPANY),
     page(`${call}/change`, PLANNERS),
-    page(`${production}/pianists`, PLANNERS),
-    page(`${production}/call-sheets`, TEAM),
-    page(`${production}/call-sheets/${CALL_DATE}`, TEAM),
-    page(issue, TEAM),
-    page(`${production}/people`, TEAM),
+    page(`${production}/pianists`, [...PLANNERS, "company admin"]),
+    page(`${production}/call-sheets`, COMPANY),
+    page(`${production}/call-sheets/${CALL_DATE}`, COMPANY),
+    page(issue, COMPANY),
+    page(`${production}/people`, COMPANY),
     file(`${api}/auditions/template`, PLANNERS),
     file(`${api}/auditions/${id(day)}`, TEAM),
     file(`${api}/callbacks`, TEAM),
     file(`${api}/casting`, TABLE),
     file(`${api}/calls/${id(call)}/clashes`, PLANNERS),
-    file(`${api}/call-sheets/${id(issue)}?format=xlsx`, TEAM),
-    file(`${api}/call-sheets/${id(issue)}?format=csv`, TEAM),
+    file(`${api}/call-sheets/${id(issue)}?format=xlsx`, COMPANY),
+    file(`${api}/call-sheets/${id(issue)}?format=csv`, COMPANY),
     file(`${api}/call-sheets/${id(issue)}/acknowledgements`, PLANNERS),
   ];
 }
 
 /** What a refusal must not name: the singers, and to strangers the production itself. */
 const PEOPLE_OF_IT = [SINGER.name, "Kalinda Morrow"];
-const INSIDE: Asker[] = ["stage manager", "director at the table", "accompanist", "singer"];
+const INSIDE: Asker[] = [
+  "stage manager",
+  "director at the table",
+  "accompanist",
+  "singer",
+  "company admin",
+];
 const REFUSAL = /is not here|There is no such page/;
 
-type Answer = { status: number; words: string; signIn: boolean };
+type Answer = {
+  status: number;
+  words: string;
+  signIn: boolean;
+  /** Whether the address led to the person's own page. */
+  own: boolean;
+};
 
 async function ask(page: Page, { path, file }: Address): Promise<Answer> {
   if (file) {
     const response = await page.request.get(path, { maxRedirects: 0 });
     const status = response.status();
-    return { status, words: status === 200 ? "" : await response.text(), signIn: status === 401 };
+    const words = status === 200 ? "" : await response.text();
+    return { status, words, signIn: status === 401, own: false };
   }
   const response = await page.goto(path, { waitUntil: "load" });
   const heading = page.getByRole("heading", { level: 1 });
@@ -93,6 +111,7 @@ async function ask(page: Page, { path, file }: Address): Promise<Answer> {
     status: response?.status() ?? 0,
     words: await page.locator("body").innerText(),
     signIn: new URL(page.url()).pathname === "/sign-in",
+    own: new URL(page.url()).pathname === "/me",
   };
 }
 
@@ -100,17 +119,19 @@ async function ask(page: Page, { path, file }: Address): Promise<Answer> {
  * Asks for every address as one person, and returns in words whatever is not as it should be: refused to those who may,
  * open to those who may not, or refused in words that still give something of the production away.
  */
-async function wrongAnswers(page: Page, asker: Asker, addresses: Address[]): Promise<string[]> {
+async function wrongAnswers(page: Page, asker: Asker, made: Made): Promise<string[]> {
   const wrong: string[] = [];
-  for (const address of addresses) {
-    const { status, words, signIn } = await ask(page, address);
+  for (const address of addressesOf(made)) {
+    const { status, words, signIn, own } = await ask(page, address);
     const what = `${address.path} as ${asker}: ${String(status)}`;
     if (address.may.includes(asker)) {
-      if (status !== 200 || signIn) wrong.push(`refused ${what}`);
+      if (status !== 200 || signIn || own) wrong.push(`refused ${what}`);
       continue;
     }
-    // Somebody of the production knows that there is a grid, and a program may tell them that it is not for them.
+    // Those who sing or play in it are led from its address to their own page, which names it.
     const inside = INSIDE.includes(asker);
+    if (inside && own && address.path === made.production) continue;
+    // Somebody of the production knows that there is a grid, and a program may tell them that it is not for them.
     const refused =
       asker === "nobody" ? signIn : status === 404 || (inside && address.file && status === 403);
     if (!refused) wrong.push(`not refused as it should be ${what}`);
@@ -133,6 +154,8 @@ async function enter(job: Job, asker: Asker): Promise<Page> {
   if (asker === "stage manager") await signInWithPassword(desk, PEOPLE.stageManager);
   if (asker === "director at the table") await signInWithPassword(desk, PEOPLE.director);
   if (asker === "accompanist") await signInWithPassword(desk, PEOPLE.osric);
+  if (asker === "company admin") await signInWithPassword(desk, PEOPLE.admin);
+  if (asker === "singer of another production") await signInWithPassword(desk, PEOPLE.teo);
   if (asker === "music director elsewhere") {
     await signInByLink(desk, `md.${Date.now().toString(36)}@elsewhere.example`, mailbox);
     await startCompany(desk, "Quayside Players");
@@ -144,7 +167,7 @@ async function enter(job: Job, asker: Asker): Promise<Page> {
 /** Every page and download of the main job, asked for by one person. */
 export async function askForEverything(job: Job, asker: Asker): Promise<void> {
   const page = await enter(job, asker);
-  expect(await wrongAnswers(page, asker, addressesOf(job.made))).toEqual([]);
+  expect(await wrongAnswers(page, asker, job.made)).toEqual([]);
 }
 
 /** The singer, who is let off, has no call sheet of that day. */
