@@ -81,8 +81,6 @@ export const PARTS = [
       const lint = await npx(
         "eslint/bin/eslint.js",
         ".",
-        "--cache",
-        "--cache-location=node_modules/.cache/eslint/",
       );
       const format = await npx("prettier/bin/prettier.cjs", "--check", "--log-level=warn", ".");
       return { code: lint.code || format.code };
