@@ -78,10 +78,7 @@ export const PARTS = [
     title: "Lint and format",
     run: check(async () => {
       await makeRouteTypes();
-      const lint = await npx(
-        "eslint/bin/eslint.js",
-        ".",
-      );
+      const lint = await npx("eslint/bin/eslint.js", ".");
       const format = await npx("prettier/bin/prettier.cjs", "--check", "--log-level=warn", ".");
       return { code: lint.code || format.code };
     }),
