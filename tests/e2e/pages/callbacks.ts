@@ -45,9 +45,11 @@ export class CallbacksPage {
   }
 
   async mark(singer: string, role: string): Promise<void> {
+    const box = { name: `${singer} for ${role}`, exact: true };
     // The box is ticked at once; it is kept when the answer is there.
     const kept = this.page.waitForResponse((answer) => answer.request().method() === "POST");
-    await this.page.getByRole("checkbox", { name: `${singer} for ${role}`, exact: true }).check();
+    await this.page.getByRole("checkbox", box).click();
+    await this.page.getByRole("checkbox", { ...box, checked: true }).waitFor();
     await kept;
   }
 
