@@ -56,7 +56,10 @@ export function PositionGroups({ people, mayManage, into, ...acts }: PositionGro
                       </a>
                     )}
                     {person.phone !== null && (
-                      <a href={`tel:${person.phone}`} className="row-link font-normal">
+                      <a
+                        href={`tel:${person.phone.replace(/[^+\d]/g, "")}`}
+                        className="row-link font-normal"
+                      >
                         {person.phone}
                       </a>
                     )}

@@ -44,7 +44,7 @@ export class OwnPage {
     await tapRange(this.page.getByRole("group", { name: "What you sing" }).last(), low, high);
     await this.page.getByRole("button", { name: "Put it on file" }).tap();
     await this.page.waitForURL(/\/me$/);
-    await this.page.getByText(`${low}–${high}. As you gave it`).waitFor();
+    await this.page.getByText(`${low}–${high}. As given on`).waitFor();
   }
 
   async cannotCome(date: string, reason: string): Promise<void> {

@@ -44,7 +44,7 @@ export function OwnRanges({ records }: { records: readonly OwnRecord[] }) {
             <p className="text-sm text-ink-2">
               {named}
               {rangeInWords(singerRange(best))}.{" "}
-              {best.kind === "heard" ? `As heard from you on ${on}.` : `As you gave it on ${on}.`}
+              {best.kind === "heard" ? `As heard from you on ${on}.` : `As given on ${on}.`}
             </p>
           </div>
         );
