@@ -1,6 +1,5 @@
 "use client";
 
-import { zodResolver } from "@hookform/resolvers/zod";
 import { unstable_rethrow } from "next/navigation";
 import { useState, type BaseSyntheticEvent } from "react";
 import {
@@ -8,6 +7,7 @@ import {
   type DefaultValues,
   type FieldValues,
   type Path,
+  type Resolver,
   type UseFormReturn,
 } from "react-hook-form";
 import type { z } from "zod";
@@ -18,8 +18,11 @@ export type FormResult<Data> =
   | { ok: false; error: { code: string; message: string; fields?: Record<string, string> } };
 
 export type ActionFormOptions<Input extends FieldValues, Output, Data> = {
-  /** The schema the action itself parses with; it gets what was typed, and checks it again. */
-  schema: z.ZodType<Output, Input>;
+  /**
+   * Fetches the schema the action itself parses with. It is fetched when there is something to check, so that a page is
+   * not held up by it.
+   */
+  schema: () => Promise<z.ZodType<Output, Input>>;
   action: (input: Input) => Promise<FormResult<Data>>;
   defaultValues: DefaultValues<Input>;
   /** After success; the form keeps its values unless this resets it. */
@@ -65,6 +68,27 @@ function isRouters(error: unknown): boolean {
   }
 }
 
+/** Checks with the schema once it is here. If it cannot be fetched, the action, which checks for itself, says what is wrong. */
+function checkWith<Input extends FieldValues, Output>(
+  load: () => Promise<z.ZodType<Output, Input>>,
+): Resolver<Input, unknown, Output> {
+  return async (values, context, options) => {
+    let resolve: Resolver<Input, unknown, Output>;
+    try {
+      const [{ zodResolver }, schema] = await Promise.all([
+        import("@hookform/resolvers/zod"),
+        load(),
+      ]);
+      resolve = zodResolver(schema);
+    } catch {
+      return { values: values as unknown as Output, errors: {} } as Awaited<
+        ReturnType<Resolver<Input, unknown, Output>>
+      >;
+    }
+    return resolve(values, context, options);
+  };
+}
+
 /**
  * A form whose one schema is checked in the browser and again by its server action. Whatever goes
  * wrong, what was typed stays: field messages go to their fields and the first of them gets the
@@ -77,7 +101,7 @@ export function useActionForm<Input extends FieldValues, Output, Data>({
   onDone,
 }: ActionFormOptions<Input, Output, Data>): ActionForm<Input, Output, Data> {
   const form = useForm<Input, unknown, Output>({
-    resolver: zodResolver(schema),
+    resolver: checkWith(schema),
     defaultValues,
     mode: "onTouched",
   });

@@ -3,12 +3,11 @@
 import { FormError } from "@/components/forms/form-error";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { PendingButton } from "@/components/ui/pending-button";
-import { acceptInvitationSchema } from "@/lib/schemas/sign-in";
 import { acceptInvitation } from "../actions";
 
 export function AcceptForm({ token, to, label }: { token: string; to: string; label: string }) {
   const state = useActionForm({
-    schema: acceptInvitationSchema,
+    schema: () => import("@/lib/schemas/sign-in").then((m) => m.acceptInvitationSchema),
     action: acceptInvitation,
     defaultValues: { token, to },
   });

@@ -5,7 +5,6 @@ import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { PendingButton } from "@/components/ui/pending-button";
-import { requestLinkSchema } from "@/lib/schemas/sign-in";
 import { requestLink } from "../actions";
 
 export type LinkFormProps = {
@@ -20,7 +19,7 @@ export type LinkFormProps = {
 /** Sign-in by one field: an address, and a link comes. */
 export function LinkForm({ to = "", email = "", labelHidden = false }: LinkFormProps) {
   const state = useActionForm({
-    schema: requestLinkSchema,
+    schema: () => import("@/lib/schemas/sign-in").then((m) => m.requestLinkSchema),
     action: requestLink,
     defaultValues: { email, to },
   });

@@ -4,13 +4,12 @@ import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
-import { passwordSignInSchema } from "@/lib/schemas/sign-in";
 import { signInWithPassword } from "../actions";
 
 /** For those who set a password: folded away, because most never need it. */
 export function PasswordForm({ to }: { to: string }) {
   const state = useActionForm({
-    schema: passwordSignInSchema,
+    schema: () => import("@/lib/schemas/sign-in").then((m) => m.passwordSignInSchema),
     action: signInWithPassword,
     defaultValues: { email: "", password: "", to },
   });

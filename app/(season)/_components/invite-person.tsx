@@ -13,7 +13,7 @@ import { showToast } from "@/components/ui/toast-store";
 import type { ActionResult } from "@/lib/errors";
 import { POSITION_NAMES } from "@/lib/permissions/position-kinds";
 import type { PositionKind } from "@/lib/permissions/types";
-import { invitePersonSchema } from "@/lib/schemas/people";
+import type { invitePersonSchema } from "@/lib/schemas/people";
 import type { z } from "zod";
 
 export type Invite = (
@@ -50,7 +50,7 @@ export function InvitePerson(props: InvitePersonProps) {
 function InviteForm({ into, kinds, invite, onDone }: InvitePersonProps & { onDone: () => void }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: invitePersonSchema,
+    schema: () => import("@/lib/schemas/people").then((m) => m.invitePersonSchema),
     action: invite,
     defaultValues: { ...into, name: "", email: "", phone: "", kind: kinds.at(-1) ?? "actor" },
     onDone: (_, form) => {

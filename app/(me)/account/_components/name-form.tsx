@@ -5,12 +5,11 @@ import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
-import { changeNameSchema } from "@/lib/schemas/account";
 import { changeName } from "../actions";
 
 export function NameForm({ name }: { name: string }) {
   const state = useActionForm({
-    schema: changeNameSchema,
+    schema: () => import("@/lib/schemas/account").then((m) => m.changeNameSchema),
     action: changeName,
     defaultValues: { name },
     onDone: () => showToast({ title: "Your name is changed." }),

@@ -7,7 +7,6 @@ import { Dialog } from "@/components/ui/dialog";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
-import { removePasswordSchema, setPasswordSchema } from "@/lib/schemas/account";
 import { removePassword, setPassword } from "../actions";
 
 export type PasswordPartProps = {
@@ -19,7 +18,7 @@ export type PasswordPartProps = {
 
 export function PasswordPart({ email, isSet, asksForCurrent }: PasswordPartProps) {
   const state = useActionForm({
-    schema: setPasswordSchema,
+    schema: () => import("@/lib/schemas/account").then((m) => m.setPasswordSchema),
     action: setPassword,
     defaultValues: { current: "", password: "" },
     onDone: (_data, form) => {
@@ -76,7 +75,7 @@ function RemovePassword({ asksForCurrent }: { asksForCurrent: boolean }) {
 
 function RemoveForm({ asksForCurrent }: { asksForCurrent: boolean }) {
   const state = useActionForm({
-    schema: removePasswordSchema,
+    schema: () => import("@/lib/schemas/account").then((m) => m.removePasswordSchema),
     action: removePassword,
     defaultValues: { current: "" },
     onDone: () => showToast({ title: "The password is removed." }),

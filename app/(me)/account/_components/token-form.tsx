@@ -7,7 +7,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { Notice } from "@/components/ui/notice";
 import { showToast } from "@/components/ui/toast-store";
-import { createTokenSchema } from "@/lib/schemas/account";
 import { createToken } from "../actions";
 
 async function copy(token: string): Promise<void> {
@@ -25,7 +24,7 @@ async function copy(token: string): Promise<void> {
 /** Makes a token and shows it, this once. */
 export function TokenForm() {
   const state = useActionForm({
-    schema: createTokenSchema,
+    schema: () => import("@/lib/schemas/account").then((m) => m.createTokenSchema),
     action: createToken,
     defaultValues: { label: "" },
     onDone: (_data, form) => form.reset(),

@@ -10,7 +10,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { RadioGroup } from "@/components/ui/radio-group";
 import { showToast } from "@/components/ui/toast-store";
-import { addConflictSchema } from "@/lib/schemas/conflicts";
 
 const SPANS = [
   { value: "day", label: "One day" },
@@ -21,7 +20,7 @@ const SPANS = [
 export function ConflictForm({ records, today }: { records: readonly Told[]; today: string }) {
   const empty = { from: "", to: "", timeFrom: "", timeTo: "", reason: "" };
   const state = useActionForm({
-    schema: addConflictSchema,
+    schema: () => import("@/lib/schemas/conflicts").then((m) => m.addConflictSchema),
     action: addConflict,
     defaultValues: { personIds: records.map((record) => record.personId), span: "day", ...empty },
     onDone: ({ conflictIds }, form) => {

@@ -10,7 +10,6 @@ import { RangeKeyboard, type PickedRange } from "@/components/music/range-keyboa
 import { FieldGroup } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 import { showToast } from "@/components/ui/toast-store";
-import { claimRangeSchema } from "@/lib/schemas/ranges";
 
 export type RangeFormProps = {
   records: readonly Told[];
@@ -21,7 +20,7 @@ export type RangeFormProps = {
 export function RangeForm({ records, start }: RangeFormProps) {
   const router = useRouter();
   const state = useActionForm({
-    schema: claimRangeSchema,
+    schema: () => import("@/lib/schemas/ranges").then((m) => m.claimRangeSchema),
     action: claimRange,
     defaultValues: { personIds: records.map((record) => record.personId), ...start },
     onDone: () => {

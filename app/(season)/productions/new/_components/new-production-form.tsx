@@ -6,7 +6,6 @@ import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { Select } from "@/components/ui/select";
-import { createProductionSchema } from "@/lib/schemas/productions";
 import { createProduction } from "../../../actions";
 
 /** Title and dates of a new production; the company is asked only where there are several. */
@@ -19,7 +18,7 @@ export function NewProductionForm({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: createProductionSchema,
+    schema: () => import("@/lib/schemas/productions").then((m) => m.createProductionSchema),
     action: createProduction,
     defaultValues: { companyId, title: "", opensOn: "", closesOn: "" },
     onDone: ({ productionId }) => {

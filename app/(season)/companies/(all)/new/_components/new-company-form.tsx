@@ -7,14 +7,13 @@ import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { Select } from "@/components/ui/select";
-import { createCompanySchema } from "@/lib/schemas/productions";
 import { createCompany } from "../../../../actions";
 
 /** Name, time zone and paper of a new company; the zone begins as the browser's own. */
 export function NewCompanyForm({ zones }: { zones: readonly string[] }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: createCompanySchema,
+    schema: () => import("@/lib/schemas/productions").then((m) => m.createCompanySchema),
     action: createCompany,
     defaultValues: { name: "", zone: "Europe/London", paper: "A4" },
     onDone: ({ companyId }) => {

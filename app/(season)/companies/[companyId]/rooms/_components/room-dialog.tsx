@@ -11,7 +11,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
 import { VisuallyHidden } from "@/components/ui/visually-hidden";
-import { addRoomSchema, changeRoomSchema } from "@/lib/schemas/rooms";
 import { addRoom, changeRoom } from "../../actions";
 
 type Room = { id: string; name: string; hasPiano: boolean };
@@ -66,7 +65,7 @@ function AddRoom({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: addRoomSchema,
+    schema: () => import("@/lib/schemas/rooms").then((m) => m.addRoomSchema),
     action: addRoom,
     defaultValues: { companyId, venueId, name: "", hasPiano: true },
     onDone: (_, form) => {
@@ -97,7 +96,7 @@ function ChangeRoom({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: changeRoomSchema,
+    schema: () => import("@/lib/schemas/rooms").then((m) => m.changeRoomSchema),
     action: changeRoom,
     defaultValues: { companyId, roomId: room.id, name: room.name, hasPiano: room.hasPiano },
     onDone: (_, form) => {

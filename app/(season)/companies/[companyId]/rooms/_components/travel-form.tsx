@@ -7,7 +7,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
 import { Cell, ColumnHead, RowHead, Table } from "@/components/ui/table";
-import { setTravelSchema } from "@/lib/schemas/rooms";
 import { setTravel } from "../../actions";
 
 type Venue = { id: string; name: string };
@@ -32,7 +31,7 @@ export function TravelForm({
     })),
   );
   const state = useActionForm({
-    schema: setTravelSchema,
+    schema: () => import("@/lib/schemas/rooms").then((m) => m.setTravelSchema),
     action: setTravel,
     defaultValues: { companyId, pairs },
     onDone: (_, form) => {

@@ -10,7 +10,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
 import { VisuallyHidden } from "@/components/ui/visually-hidden";
-import { addVenueSchema, changeVenueSchema } from "@/lib/schemas/rooms";
 import { addVenue, changeVenue } from "../../actions";
 
 type Venue = { id: string; name: string; address: string };
@@ -45,7 +44,7 @@ export function VenueDialog({ companyId, venue }: { companyId: string; venue?: V
 function AddVenue({ companyId, onDone }: { companyId: string; onDone: () => void }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: addVenueSchema,
+    schema: () => import("@/lib/schemas/rooms").then((m) => m.addVenueSchema),
     action: addVenue,
     defaultValues: { companyId, name: "", address: "" },
     onDone: (_, form) => {
@@ -78,7 +77,7 @@ function ChangeVenue({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: changeVenueSchema,
+    schema: () => import("@/lib/schemas/rooms").then((m) => m.changeVenueSchema),
     action: changeVenue,
     defaultValues: { companyId, venueId: venue.id, name: venue.name, address: venue.address },
     onDone: (_, form) => {

@@ -14,7 +14,6 @@ import { Select } from "@/components/ui/select";
 import { showToast } from "@/components/ui/toast-store";
 import type { ProductionListed } from "@/lib/data/productions";
 import { dayOfYear } from "@/lib/format-dates";
-import { changeProductionSchema } from "@/lib/schemas/productions";
 import { STAGES, stageName } from "../../../../_components/stage-name";
 
 export type ProductionFormProps = {
@@ -45,7 +44,7 @@ function saysNow({ title, stage, opensOn, closesOn }: ProductionFormProps): stri
 export function ProductionForm(props: ProductionFormProps) {
   const router = useRouter();
   const state = useActionForm({
-    schema: changeProductionSchema,
+    schema: () => import("@/lib/schemas/productions").then((m) => m.changeProductionSchema),
     action: async (input: Parameters<typeof changeProduction>[0]) => {
       const result = await changeProduction(input);
       // What the other one wrote comes with the page.

@@ -10,7 +10,6 @@ import { Dialog } from "@/components/ui/dialog";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
-import { addSingerSchema } from "@/lib/schemas/auditions";
 import { addSinger } from "../actions";
 
 const EMPTY = {
@@ -47,7 +46,7 @@ export function AddSinger({ productionId }: { productionId: string }) {
 function AddSingerForm({ productionId, onDone }: { productionId: string; onDone: () => void }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: addSingerSchema,
+    schema: () => import("@/lib/schemas/auditions").then((m) => m.addSingerSchema),
     action: addSinger,
     defaultValues: { productionId, ...EMPTY },
     onDone: (_, form) => {

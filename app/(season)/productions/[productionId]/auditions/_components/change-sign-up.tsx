@@ -9,7 +9,6 @@ import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
 import type { SignUpListed } from "@/lib/data/auditions/sign-ups";
-import { changeSignUpSchema } from "@/lib/schemas/auditions";
 import { changeSignUp, relistSignUp, withdrawSignUp } from "../actions";
 import { StateMark } from "./state-mark";
 
@@ -25,7 +24,7 @@ export function ChangeSignUp({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: changeSignUpSchema,
+    schema: () => import("@/lib/schemas/auditions").then((m) => m.changeSignUpSchema),
     action: changeSignUp,
     defaultValues: {
       productionId,

@@ -10,7 +10,6 @@ import { Field, FieldGroup } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
 import type { SlotLost } from "@/lib/data/auditions/change-day";
 import type { DayChoices } from "@/lib/data/auditions/days";
-import { changeDaySchema, createDaySchema } from "@/lib/schemas/auditions";
 import { changeDay, createDay } from "../actions";
 import { AgreeToLoss } from "./agree-to-loss";
 import type { DayFields } from "./day-fields";
@@ -24,7 +23,7 @@ type Props = { choices: DayChoices; initial: DayFields };
 export function NewDayForm({ choices, initial }: Props) {
   const router = useRouter();
   const state = useActionForm({
-    schema: createDaySchema,
+    schema: () => import("@/lib/schemas/auditions").then((m) => m.createDaySchema),
     action: createDay,
     defaultValues: initial,
     onDone: ({ dayId }) => router.push(`/productions/${initial.productionId}/auditions/${dayId}`),
@@ -43,7 +42,7 @@ export function ChangeDayForm({ choices, initial }: { choices: DayChoices; initi
   const router = useRouter();
   const [lost, setLost] = useState<readonly SlotLost[] | null>(null);
   const state = useActionForm({
-    schema: changeDaySchema,
+    schema: () => import("@/lib/schemas/auditions").then((m) => m.changeDaySchema),
     action: changeDay,
     defaultValues: initial,
     onDone: (result) => {

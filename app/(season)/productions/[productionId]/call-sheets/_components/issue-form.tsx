@@ -5,7 +5,6 @@ import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Textarea } from "@/components/ui/textarea";
-import { issueSheetSchema } from "@/lib/schemas/sheets";
 import { issueSheet } from "../actions";
 
 type Props = {
@@ -20,7 +19,7 @@ type Props = {
 export function IssueForm({ productionId, localDate, seen, number, concerns }: Props) {
   const router = useRouter();
   const state = useActionForm({
-    schema: issueSheetSchema,
+    schema: () => import("@/lib/schemas/sheets").then((m) => m.issueSheetSchema),
     // What was seen is what the page shows now, also after it was loaded again.
     action: (input) => issueSheet({ ...input, seen }),
     defaultValues: { productionId, localDate, seen, notes: "" },

@@ -11,7 +11,6 @@ import { FieldGroup } from "@/components/ui/field";
 import { showToast } from "@/components/ui/toast-store";
 import { callbacksQuery, type DraftSinger } from "@/lib/client/callbacks";
 import { pitchName } from "@/lib/music/pitch-name";
-import { hearRangeSchema } from "@/lib/schemas/ranges";
 import { hearRange } from "../../auditions/actions";
 
 /** The range heard from one singer, over the page; the fits follow from it. */
@@ -27,7 +26,7 @@ export default function HearRange({
   const client = useQueryClient();
   const { range } = singer;
   const state = useActionForm({
-    schema: hearRangeSchema,
+    schema: () => import("@/lib/schemas/ranges").then((m) => m.hearRangeSchema),
     action: hearRange,
     defaultValues: {
       productionId,

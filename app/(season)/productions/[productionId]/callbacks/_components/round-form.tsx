@@ -14,7 +14,6 @@ import { showToast } from "@/components/ui/toast-store";
 import { callbacksQuery, type DraftRound } from "@/lib/client/callbacks";
 import type { RoomChoice } from "@/lib/data/rooms";
 import { clock, localDay } from "@/lib/format-dates";
-import { changeRoundSchema } from "@/lib/schemas/callbacks";
 import { changeRound } from "../actions";
 import { whenInWords } from "./round-summary";
 
@@ -45,7 +44,7 @@ export function RoundForm({
 }) {
   const client = useQueryClient();
   const state = useActionForm({
-    schema: changeRoundSchema,
+    schema: () => import("@/lib/schemas/callbacks").then((m) => m.changeRoundSchema),
     action: changeRound,
     defaultValues: valuesOf(productionId, round),
     onDone: async (_, form) => {

@@ -5,7 +5,6 @@ import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Field } from "@/components/ui/field";
 import { Input } from "@/components/ui/input";
-import { startRoundSchema } from "@/lib/schemas/callbacks";
 import { startRound } from "../actions";
 
 /** Begins a round of callbacks by its name. */
@@ -21,7 +20,7 @@ export function StartRound({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: startRoundSchema,
+    schema: () => import("@/lib/schemas/callbacks").then((m) => m.startRoundSchema),
     action: startRound,
     defaultValues: { productionId, title },
     onDone: async () => {

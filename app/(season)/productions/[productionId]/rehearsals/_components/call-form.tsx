@@ -12,7 +12,6 @@ import { CALL_KINDS, CALL_KIND_NAMES } from "@/lib/calls/call-kinds";
 import { applyRemedy } from "@/lib/calls/apply-remedy";
 import type { Remedy } from "@/lib/calls/types";
 import type { CallChoices } from "@/lib/data/calls/choices";
-import { changeCallSchema, createCallSchema } from "@/lib/schemas/calls";
 import { changeCall, createCall } from "../actions";
 import { BlockList } from "./block-list";
 import type { CallFields } from "./call-fields";
@@ -24,7 +23,7 @@ import { lastOf, useCallCheck } from "./use-call-check";
 export function NewCallForm({ choices, initial }: { choices: CallChoices; initial: CallFields }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: createCallSchema,
+    schema: () => import("@/lib/schemas/calls").then((m) => m.createCallSchema),
     action: createCall,
     defaultValues: initial,
     onDone: ({ callId }) =>
@@ -51,7 +50,7 @@ export function ChangeCallForm({
 }) {
   const router = useRouter();
   const state = useActionForm({
-    schema: changeCallSchema,
+    schema: () => import("@/lib/schemas/calls").then((m) => m.changeCallSchema),
     action: changeCall,
     defaultValues: initial,
     onDone: ({ callId }) => {

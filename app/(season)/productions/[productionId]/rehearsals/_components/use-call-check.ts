@@ -2,7 +2,6 @@
 
 import { useEffect, useRef, useState } from "react";
 import type { CallCheck } from "@/lib/data/calls/check";
-import { checkCallSchema } from "@/lib/schemas/calls";
 import { checkCall } from "../actions";
 import type { CallFields } from "./call-fields";
 
@@ -22,12 +21,14 @@ export function useCallCheck(fields: CallFields, callId: string | null): CheckSt
   useEffect(() => {
     const mine = (asked.current += 1);
     const input = JSON.parse(text) as CallFields & { callId: string | null };
-    const complete = checkCallSchema.safeParse(input).success;
     const timer = setTimeout(() => {
-      if (!complete) {
-        setState({ at: "incomplete" });
-        return;
-      }
+      void isComplete(input).then((complete) => {
+        if (mine !== asked.current) return;
+        if (!complete) setState({ at: "incomplete" });
+        else ask();
+      });
+    }, WAIT_MS);
+    function ask() {
       setState((before) => ({ at: "checking", last: lastOf(before) }));
       void checkCall(input)
         .catch(() => null)
@@ -41,10 +42,21 @@ export function useCallCheck(fields: CallFields, callId: string | null): CheckSt
             setState((before) => ({ at: "failed", message, last: lastOf(before) }));
           }
         });
-    }, WAIT_MS);
+    }
     return () => clearTimeout(timer);
   }, [text]);
   return state;
+}
+
+/** Whether the form is filled in far enough to be checked; the schema is fetched when it is first needed. */
+async function isComplete(input: unknown): Promise<boolean> {
+  try {
+    const { checkCallSchema } = await import("@/lib/schemas/calls");
+    return checkCallSchema.safeParse(input).success;
+  } catch {
+    // Without it the server is asked, which checks for itself.
+    return true;
+  }
 }
 
 /** The newest check there is, also while a newer one is on its way. */

@@ -9,7 +9,6 @@ import { Input } from "@/components/ui/input";
 import { showToast } from "@/components/ui/toast-store";
 import { parsePitch } from "@/lib/music/parse-pitch";
 import { pitchName } from "@/lib/music/pitch-name";
-import { writeLineSchema } from "@/lib/schemas/score";
 import { writeLine } from "../actions";
 
 type Props = {
@@ -27,7 +26,7 @@ type Props = {
 /** The lowest and highest note of a line, typed or picked on the keyboard. */
 export function LineForm({ productionId, roleId, numberId, fifths, low, high, replaces }: Props) {
   const state = useActionForm({
-    schema: writeLineSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.writeLineSchema),
     action: writeLine,
     defaultValues: { productionId, roleId, numberId, low, high, replaceRead: false },
     onDone: () => {

@@ -5,7 +5,6 @@ import { ActionForm } from "@/components/forms/action-form";
 import { useActionForm } from "@/components/forms/use-action-form";
 import { Dialog } from "@/components/ui/dialog";
 import { showToast } from "@/components/ui/toast-store";
-import { addNumberSchema, changeNumberSchema } from "@/lib/schemas/score";
 import { formatLength } from "@/lib/score/number-length";
 import type { ScoreNumber } from "@/lib/score/score-view";
 import { addNumber, changeNumber } from "../actions";
@@ -56,7 +55,7 @@ export default function NumberDialog({ productionId, number, ...dialog }: Props)
 
 function AddForm({ productionId, onDone }: { productionId: string; onDone: () => void }) {
   const state = useActionForm({
-    schema: addNumberSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.addNumberSchema),
     action: addNumber,
     defaultValues: { productionId, ...valuesOf(null) },
     onDone: (_, form) => {
@@ -84,7 +83,7 @@ function ChangeForm({
   onDone: () => void;
 }) {
   const state = useActionForm({
-    schema: changeNumberSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.changeNumberSchema),
     action: changeNumber,
     defaultValues: {
       productionId,

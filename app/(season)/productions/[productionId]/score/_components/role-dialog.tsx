@@ -9,7 +9,6 @@ import { Input } from "@/components/ui/input";
 import { Select } from "@/components/ui/select";
 import { Textarea } from "@/components/ui/textarea";
 import { showToast } from "@/components/ui/toast-store";
-import { addRoleSchema, changeRoleSchema } from "@/lib/schemas/score";
 import { ROLE_KIND_NAMES } from "@/lib/score/review-types";
 import type { RoleKind } from "@/lib/score/review-types";
 import type { ScoreRole } from "@/lib/score/score-view";
@@ -58,7 +57,7 @@ export default function RoleDialog({ productionId, role, ...dialog }: Props) {
 
 function AddForm({ productionId, onDone }: { productionId: string; onDone: () => void }) {
   const state = useActionForm({
-    schema: addRoleSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.addRoleSchema),
     action: addRole,
     defaultValues: { productionId, ...valuesOf(null) },
     onDone: (_, form) => {
@@ -86,7 +85,7 @@ function ChangeForm({
   onDone: () => void;
 }) {
   const state = useActionForm({
-    schema: changeRoleSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.changeRoleSchema),
     action: changeRole,
     defaultValues: { productionId, roleId: role.id, version: role.version, ...valuesOf(role) },
     onDone: () => {

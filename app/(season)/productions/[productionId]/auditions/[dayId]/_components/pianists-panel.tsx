@@ -13,7 +13,6 @@ import { showToast } from "@/components/ui/toast-store";
 import type { AuditionDayView, PianistOnDay, RoomOnDay } from "@/lib/auditions/day-view";
 import { pianistLanes } from "@/lib/auditions/pianist-lanes";
 import { clock, clockSpan } from "@/lib/format-dates";
-import { assignPianistSchema } from "@/lib/schemas/auditions";
 import { assignPianist, removePianist } from "../../actions";
 import { LOST_CONNECTION, useRefreshDay } from "./use-refresh-day";
 
@@ -131,7 +130,7 @@ function AssignForm({ day, accompanists, onDone }: Props & { onDone: () => void 
     day.rooms.find((room) => pianistLanes(room).some((piece) => piece.name === null)) ??
     day.rooms[0];
   const state = useActionForm({
-    schema: assignPianistSchema,
+    schema: () => import("@/lib/schemas/auditions").then((m) => m.assignPianistSchema),
     action: assignPianist,
     defaultValues: {
       productionId: day.productionId,

@@ -10,7 +10,6 @@ import { Button } from "@/components/ui/button";
 import { Field } from "@/components/ui/field";
 import { Select } from "@/components/ui/select";
 import { showToast } from "@/components/ui/toast-store";
-import { confirmReadingSchema } from "@/lib/schemas/score";
 import { signatureInWords } from "@/lib/score/keys";
 import type { PartPlan, ScoreReview } from "@/lib/score/review-types";
 import { scaleOf } from "@/lib/score/score-view";
@@ -39,7 +38,7 @@ export function ReviewForm({
   const numberId = review.numberId ?? "";
   const { proposed } = review;
   const state = useActionForm({
-    schema: confirmReadingSchema,
+    schema: () => import("@/lib/schemas/score").then((m) => m.confirmReadingSchema),
     action: confirmReading,
     defaultValues: {
       productionId,
