@@ -11,6 +11,7 @@ import {
   type UseFormReturn,
 } from "react-hook-form";
 import type { z } from "zod";
+import { LOST_CONNECTION } from "./lost-connection";
 
 /** What a server action gives back: the data, or a code and words for the person. */
 export type FormResult<Data> =
@@ -39,8 +40,6 @@ export type ActionForm<Input extends FieldValues, Output, Data> = {
   /** What the last successful press gave back. */
   data: Data | null;
 };
-
-export const LOST_CONNECTION = "Nothing was lost: check the connection and press again.";
 
 /**
  * Splits an action's messages into those with a field in the form and those without. `names` are
@@ -81,9 +80,7 @@ function checkWith<Input extends FieldValues, Output>(
       ]);
       resolve = zodResolver(schema);
     } catch {
-      return { values: values as unknown as Output, errors: {} } as Awaited<
-        ReturnType<Resolver<Input, unknown, Output>>
-      >;
+      return { values: values as unknown as Output, errors: {} };
     }
     return resolve(values, context, options);
   };

@@ -1,6 +1,7 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, test } from "vitest";
-import { LOST_CONNECTION, sortMessages } from "@/components/forms/use-action-form";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
+import { sortMessages } from "@/components/forms/use-action-form";
 import { FormError } from "@/components/forms/form-error";
 import { keyInUse } from "@/components/layout/keys-nav";
 import { readMode } from "@/components/layout/mode";

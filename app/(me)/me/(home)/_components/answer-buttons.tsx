@@ -3,7 +3,7 @@
 import { useRouter } from "next/navigation";
 import { useState, useTransition } from "react";
 import { FormError } from "@/components/forms/form-error";
-import { LOST_CONNECTION } from "@/components/forms/use-action-form";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
 import { PendingButton } from "@/components/ui/pending-button";
 import { showToast } from "@/components/ui/toast-store";
 import type { ActionResult } from "@/lib/errors";

@@ -2,7 +2,7 @@
 
 import { useTransition } from "react";
 import { removeConflicts, restoreConflicts } from "@/app/(me)/actions";
-import { LOST_CONNECTION } from "@/components/forms/use-action-form";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
 import { PendingButton } from "@/components/ui/pending-button";
 import { showToast } from "@/components/ui/toast-store";
 import type { ActionResult } from "@/lib/errors";

@@ -1,4 +1,4 @@
-import { LOST_CONNECTION } from "@/components/forms/use-action-form";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
 import { showToast } from "@/components/ui/toast-store";
 import type { ActionResult } from "@/lib/errors";
 
