@@ -1,5 +1,5 @@
 import "server-only";
-import { and, asc, eq, isNull, lte, sql } from "drizzle-orm";
+import { and, asc, desc, eq, isNull, lte, sql } from "drizzle-orm";
 import { db } from "@/db/client";
 import { outbox } from "@/db/schema";
 import { codeOf } from "@/lib/services/fault";
@@ -30,7 +30,8 @@ async function deliverOne(): Promise<"sent" | "failed" | "nothing due"> {
       .select()
       .from(outbox)
       .where(and(isNull(outbox.sentAt), isNull(outbox.gaveUpAt), lte(outbox.nextTryAt, new Date())))
-      .orderBy(asc(outbox.nextTryAt))
+      // Someone is waiting at the screen for a sign-in link; a batch of invitations can wait for it.
+      .orderBy(desc(eq(outbox.template, "sign-in")), asc(outbox.nextTryAt))
       .limit(1)
       .for("update", { skipLocked: true });
     if (!mail) return "nothing due";

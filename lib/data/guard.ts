@@ -1,5 +1,6 @@
 import "server-only";
 import { and, eq, isNull } from "drizzle-orm";
+import { cache } from "react";
 import { db } from "@/db/client";
 import { companies, productions } from "@/db/schema";
 import { AppError } from "@/lib/errors";
@@ -22,16 +23,8 @@ export type ProductionScope = {
   version: number;
 };
 
-/**
- * The production, if the actor may do this in it: the first line of every function that works in a production.
- * Throws `not-found` when it does not exist or is not theirs to know of (the two must look the same), and
- * `not-allowed` when they know of it but may not do this.
- */
-export async function productionFor(
-  actor: Actor,
-  productionId: string,
-  action: Action,
-): Promise<ProductionScope> {
+// Layout, page and data functions of one page ask for the same production: it is read once a request.
+const loadProduction = cache(async (productionId: string) => {
   const [row] = await db
     .select({
       id: productions.id,
@@ -50,6 +43,20 @@ export async function productionFor(
     .from(productions)
     .innerJoin(companies, eq(companies.id, productions.companyId))
     .where(and(eq(productions.id, productionId), isNull(productions.removedAt)));
+  return row;
+});
+
+/**
+ * The production, if the actor may do this in it: the first line of every function that works in a production.
+ * Throws `not-found` when it does not exist or is not theirs to know of (the two must look the same), and
+ * `not-allowed` when they know of it but may not do this.
+ */
+export async function productionFor(
+  actor: Actor,
+  productionId: string,
+  action: Action,
+): Promise<ProductionScope> {
+  const row = await loadProduction(productionId);
   if (!row) throw new AppError("not-found");
   const { castPublishedAt, ...rest } = row;
   const scope = { ...rest, castPublished: castPublishedAt !== null };

@@ -13,6 +13,8 @@ import { emptyDatabase } from "../helpers/world";
 const received: { to: string; subject: string; text: string }[] = [];
 let refuse = false;
 const server = new SMTPServer({
+  // The sender keeps its connection for the next message.
+  closeTimeout: 100,
   authOptional: true,
   disabledCommands: ["STARTTLS"],
   onRcptTo: (_address, _session, done) => {
@@ -93,6 +95,22 @@ test("a message the server does not take stays, is tried again later, and then g
   await db.update(t.outbox).set({ nextTryAt: new Date(Date.now() - 1000) });
   expect(await deliver()).toBe(1);
   expect(received).toHaveLength(1);
+});
+
+test("a sign-in link goes out before a batch that was queued earlier", async () => {
+  const { deliverOutbox: deliver } = await freshDelivery();
+  for (const n of [1, 2, 3]) {
+    await queueMail(db, {
+      companyId: null,
+      to: `singer${String(n)}@people.example`,
+      template: "password-changed",
+      data: { name: "Someone" },
+      dedupeKey: `batch-${String(n)}`,
+    });
+  }
+  await mail("link");
+  expect(await deliver()).toBe(4);
+  expect(received[0]?.subject).toBe("Your link to sign in to Cembalo");
 });
 
 test("a message whose transaction is rolled back never existed", async () => {

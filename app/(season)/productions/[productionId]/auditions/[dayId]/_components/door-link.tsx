@@ -10,7 +10,8 @@ import { PendingButton } from "@/components/ui/pending-button";
 import { showToast } from "@/components/ui/toast-store";
 import type { AuditionDayView } from "@/lib/auditions/day-view";
 import { makeDoorLink, revokeDoorLink } from "../../actions";
-import { LOST_CONNECTION, useRefreshDay } from "./use-refresh-day";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
+import { useRefreshDay } from "./use-refresh-day";
 
 /** The monitor's link: made, copied once, and ended. */
 export function DoorLink({ day }: { day: AuditionDayView }) {

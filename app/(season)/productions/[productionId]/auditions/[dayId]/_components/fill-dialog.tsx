@@ -9,7 +9,8 @@ import { showToast } from "@/components/ui/toast-store";
 import type { AuditionDayView } from "@/lib/auditions/day-view";
 import type { FillProposal } from "@/lib/data/auditions/fill";
 import { acceptFill, proposeFill } from "../../actions";
-import { LOST_CONNECTION, useRefreshDay } from "./use-refresh-day";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
+import { useRefreshDay } from "./use-refresh-day";
 
 const singers = (n: number): string => (n === 1 ? "1 singer" : `${String(n)} singers`);
 

@@ -14,7 +14,8 @@ import type { AuditionDayView, PianistOnDay, RoomOnDay } from "@/lib/auditions/d
 import { pianistLanes } from "@/lib/auditions/pianist-lanes";
 import { clock, clockSpan } from "@/lib/format-dates";
 import { assignPianist, removePianist } from "../../actions";
-import { LOST_CONNECTION, useRefreshDay } from "./use-refresh-day";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
+import { useRefreshDay } from "./use-refresh-day";
 
 type Props = { day: AuditionDayView; accompanists: readonly { personId: string; name: string }[] };
 

@@ -3,6 +3,7 @@
 import { useQueryClient } from "@tanstack/react-query";
 import { useId, useState } from "react";
 import { RangeKeyboard, type PickedRange } from "@/components/music/range-keyboard";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
 import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
 import { Field } from "@/components/ui/field";
@@ -130,9 +131,7 @@ function RangeHeard({ day, singer }: { day: AuditionDayView; singer: SingerOnDay
     }).catch(() => null);
     setPending(false);
     if (!result?.ok) {
-      setProblem(
-        result ? result.error.message : "Nothing was lost: check the connection and try again.",
-      );
+      setProblem(result ? result.error.message : LOST_CONNECTION);
       return;
     }
     showToast({ title: `The range heard from ${singer.name} is written down.` });

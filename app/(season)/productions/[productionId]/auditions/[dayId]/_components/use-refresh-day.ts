@@ -12,5 +12,3 @@ export function useRefreshDay(
   return () =>
     client.invalidateQueries({ queryKey: auditionDayQuery(day.productionId, day.id).queryKey });
 }
-
-export const LOST_CONNECTION = "Nothing was lost: check the connection and try again.";

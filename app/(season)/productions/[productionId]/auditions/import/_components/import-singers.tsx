@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import { LOST_CONNECTION } from "@/components/forms/lost-connection";
 import { useId, useState, type ChangeEvent } from "react";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";
@@ -11,7 +12,6 @@ import type { Imported } from "@/lib/data/auditions/import-singers";
 import { importSingers } from "../../actions";
 import { ImportTable } from "./import-table";
 
-const LOST = "Nothing was lost: check the connection and try again.";
 const people = (n: number): string => (n === 1 ? "1 singer" : `${String(n)} singers`);
 
 async function askPreview(productionId: string, file: File): Promise<ImportPreview | string> {
@@ -25,7 +25,7 @@ async function askPreview(productionId: string, file: File): Promise<ImportPrevi
     const answer = (await response.json()) as ImportPreview | { error: { message: string } };
     return "error" in answer ? answer.error.message : answer;
   } catch {
-    return LOST;
+    return LOST_CONNECTION;
   }
 }
 
@@ -65,7 +65,7 @@ export function ImportSingers({ productionId }: { productionId: string }) {
     );
     setPending(false);
     if (result?.ok) setDone(result.data);
-    else setProblem(result ? result.error.message : LOST);
+    else setProblem(result ? result.error.message : LOST_CONNECTION);
   }
 
   return (
